@@ -3,10 +3,10 @@ using BandSpec.Files.Inputs;
 
 namespace BandSpec.Tests;
 
-/// <summary>The demo files, and variants of them made by replacing text.</summary>
+/// <summary>A wide and easy example, kept apart from the demos that users see, and variants of it made by replacing text.</summary>
 internal static class Demo
 {
-    public static string Folder { get; } = Path.Combine(RootFolder(), "requirements-demo");
+    public static string Folder { get; } = Path.Combine(RootFolder(), "tests", "BandSpec.Tests", "Example");
 
     public const string Brine = "brine-reinjection.yaml";
 
