@@ -38,6 +38,19 @@ public sealed class Application
     public static IReadOnlyList<Finding> FindingsIn(Requirement? requirement, Platform? platform, Station? station)
     {
         List<Finding> findings = [];
+        FileFindings ofRequirement = new(InputFile.Requirement, findings);
+        if (requirement is not null)
+            RequirementRules.Judge(requirement, ofRequirement);
+        if (platform is not null)
+            PlatformRules.Judge(platform, new FileFindings(InputFile.Platform, findings));
+        if (station is not null)
+            StationRules.Judge(station, new FileFindings(InputFile.Station, findings));
+        // How inputs fit is only worth saying of figures that make sense in themselves.
+        if (findings.Any(finding => finding.Rule == "out-of-range") || requirement is null || platform is null)
+            return findings;
+        CrossRules.Judge(requirement, platform, ofRequirement);
+        if (station is not null)
+            CrossRules.Judge(requirement, platform, station, ofRequirement);
         return findings;
     }
 }

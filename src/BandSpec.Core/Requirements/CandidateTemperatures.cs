@@ -1,7 +1,6 @@
 using BandSpec.Core.Quantities;
-using BandSpec.Core.Requirements;
 
-namespace BandSpec.Core.Planning;
+namespace BandSpec.Core.Requirements;
 
 /// <summary>The temperatures that a plan may use.</summary>
 internal static class CandidateTemperatures
