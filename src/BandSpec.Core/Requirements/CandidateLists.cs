@@ -6,12 +6,13 @@ namespace BandSpec.Core.Requirements;
 internal sealed class CandidateLists
 {
     private readonly IReadOnlyList<Temperature> candidates;
-    private readonly Requirement requirement;
+    private readonly CompensationScope scope;
+    private readonly OperatingTemperature range;
 
-    public CandidateLists(Requirement requirement)
+    public CandidateLists(CompensationScope scope, OperatingTemperature range)
     {
-        this.requirement = requirement;
-        candidates = CandidateTemperatures.Of(requirement);
+        (this.scope, this.range) = (scope, range);
+        candidates = CandidateTemperatures.Of(scope, range);
         Longest = FindLongest();
     }
 
@@ -25,17 +26,17 @@ internal sealed class CandidateLists
     public double Count()
     {
         double sum = 0;
-        double[] ways = [.. candidates.Select(c => (c - requirement.Temperature.Lower).Kelvin <= Reach ? 1.0 : 0.0)];
-        for (int length = 1; length <= requirement.Compensation.MostTemperatures; length++)
+        double[] ways = [.. candidates.Select(c => (c - range.Lower).Kelvin <= Reach ? 1.0 : 0.0)];
+        for (int length = 1; length <= scope.MostTemperatures; length++)
         {
-            if (length >= requirement.Compensation.FewestTemperatures)
-                sum += ways.Where((_, i) => (requirement.Temperature.Upper - candidates[i]).Kelvin <= Reach).Sum();
+            if (length >= scope.FewestTemperatures)
+                sum += ways.Where((_, i) => (range.Upper - candidates[i]).Kelvin <= Reach).Sum();
             ways = Extend(ways);
         }
         return sum;
     }
 
-    private double Reach => requirement.Compensation.Reach.Kelvin + 1e-9;
+    private double Reach => scope.Reach.Kelvin + 1e-9;
 
     private double[] Extend(double[] ways)
     {
@@ -63,5 +64,5 @@ internal sealed class CandidateLists
     }
 
     private bool IsApart(int colder, int hotter) =>
-        hotter > colder && (candidates[hotter] - candidates[colder]).Kelvin >= requirement.Compensation.Separation.Kelvin - 1e-9;
+        hotter > colder && (candidates[hotter] - candidates[colder]).Kelvin >= scope.Separation.Kelvin - 1e-9;
 }

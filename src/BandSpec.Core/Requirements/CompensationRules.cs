@@ -10,9 +10,8 @@ internal static class CompensationRules
     internal const double MostLists = 5e7;
 
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Requirement requirement, FileFindings findings)
+    public static void Judge(CompensationScope scope, OperatingTemperature range, FileFindings findings)
     {
-        CompensationScope scope = requirement.Compensation;
         findings.InRange("compensation.candidate-step", scope.CandidateStep, AcceptedRanges.CandidateStep);
         findings.InRange("compensation.temperatures", scope.FewestTemperatures, AcceptedRanges.PlanTemperatures);
         if (scope.MostTemperatures != scope.FewestTemperatures)
@@ -22,21 +21,20 @@ internal static class CompensationRules
         findings.Require(
             scope.FewestTemperatures <= scope.MostTemperatures, "compensation.temperatures", "plan-count",
             $"{scope.FewestTemperatures}..{scope.MostTemperatures}: the fewest are more than the most", "fewest..most, such as `3..6`");
-        bool isCountable = AcceptedRanges.CandidateStep.Holds(scope.CandidateStep.Kelvin) && requirement.Temperature.Lower < requirement.Temperature.Upper
+        bool isCountable = AcceptedRanges.CandidateStep.Holds(scope.CandidateStep.Kelvin) && range.Lower < range.Upper
             && AcceptedRanges.PlanTemperatures.Holds(scope.FewestTemperatures) && AcceptedRanges.PlanTemperatures.Holds(scope.MostTemperatures);
         if (isCountable)
-            JudgeLists(requirement, findings);
+            JudgeLists(scope, range, findings);
     }
 
-    private static void JudgeLists(Requirement requirement, FileFindings findings)
+    private static void JudgeLists(CompensationScope scope, OperatingTemperature range, FileFindings findings)
     {
-        CompensationScope scope = requirement.Compensation;
-        CandidateLists lists = new(requirement);
-        double width = (requirement.Temperature.Upper - requirement.Temperature.Lower).Kelvin;
+        CandidateLists lists = new(scope, range);
+        double width = (range.Upper - range.Lower).Kelvin;
         findings.Require(
             lists.Longest >= scope.FewestTemperatures, "compensation.separation", "plan-none", string.Create(
                 CultureInfo.InvariantCulture,
-                $"no plan: {scope.FewestTemperatures} candidates at least {scope.Separation} apart do not fit into {width} K with a reach of {scope.Reach}"),
+                $"no plan: {scope.FewestTemperatures} candidates at least {scope.Separation} apart do not fit into {width} K"),
             $"a smaller separation, or fewer temperatures: {lists.Longest} fit");
         double count = lists.Count();
         findings.Require(

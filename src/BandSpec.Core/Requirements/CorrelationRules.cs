@@ -8,15 +8,16 @@ namespace BandSpec.Core.Requirements;
 internal static class CorrelationRules
 {
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Platform platform, FileFindings findings)
+    public static void Judge(
+        IReadOnlyList<RawErrorCoefficient> coefficients, IReadOnlyList<CoefficientCorrelation> correlations, FileFindings findings)
     {
-        CoefficientName[] names = [.. platform.RawError.Select(coefficient => coefficient.Name).Distinct()];
+        CoefficientName[] names = [.. coefficients.Select(coefficient => coefficient.Name).Distinct()];
         HashSet<(CoefficientName, CoefficientName)> pairs = [];
         bool isMatrix = true;
-        for (int i = 0; i < platform.Correlations.Count; i++)
-            isMatrix &= JudgePair(platform.Correlations[i], names, pairs, $"raw-error.correlations[{i}]", findings);
-        if (isMatrix && platform.Correlations.Count > 0)
-            JudgeMatrix(platform.Correlations, names, findings);
+        for (int i = 0; i < correlations.Count; i++)
+            isMatrix &= JudgePair(correlations[i], names, pairs, $"raw-error.correlations[{i}]", findings);
+        if (isMatrix && correlations.Count > 0)
+            JudgeMatrix(correlations, names, findings);
     }
 
     private static bool JudgePair(

@@ -26,8 +26,10 @@ internal static class NameRules
     }
 
     /// <summary>Judges a text that stands on one line of a document.</summary>
-    public static void FitsLine(this FileFindings findings, string path, string text, int longest = LongestText)
+    public static void FitsLine(this FileFindings findings, string path, string? written, int longest = LongestText)
     {
+        if (written is not { } text)
+            return;
         findings.Require(
             text.Length <= longest, path, "text-length", $"a text of {text.Length.ToString(CultureInfo.InvariantCulture)} characters",
             $"at most {longest.ToString(CultureInfo.InvariantCulture)} characters");

@@ -6,20 +6,26 @@ namespace BandSpec.Core.Requirements;
 internal static class PlatformRules
 {
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Platform platform, FileFindings findings)
+    public static void Judge(PlatformParts platform, FileFindings findings)
     {
         findings.FitsLine("platform.name", platform.Name);
         findings.FitsLine("platform.revision", platform.Revision, 40);
-        findings.IsRange("temperature", platform.Temperature);
-        JudgePressure(platform.Pressure, findings);
-        JudgeCoefficients(platform, findings);
-        CorrelationRules.Judge(platform, findings);
+        if (platform.Temperature is { } range)
+            findings.IsRange("temperature", range);
+        if (platform.Pressure is { } rating)
+            JudgePressure(rating, findings);
+        if (platform.RawError is { } coefficients)
+        {
+            JudgeCoefficients(coefficients, findings);
+            CorrelationRules.Judge(coefficients, platform.Correlations ?? [], findings);
+        }
         findings.InRange("correction.zero-degree", platform.ZeroDegree, AcceptedRanges.CorrectionDegree);
         findings.InRange("correction.span-degree", platform.SpanDegree, AcceptedRanges.CorrectionDegree);
         findings.InRange("pressure-hysteresis", platform.PressureHysteresis, AcceptedRanges.Spread);
         findings.InRange("thermal-hysteresis", platform.ThermalHysteresis, AcceptedRanges.Spread);
         findings.InRange("repeatability", platform.Repeatability, AcceptedRanges.Spread);
-        JudgeAgeing(platform.Ageing, findings);
+        if (platform.Ageing is { } ageing)
+            JudgeAgeing(ageing, findings);
     }
 
     private static void JudgePressure(PressureRating rating, FileFindings findings)
@@ -36,13 +42,13 @@ internal static class PlatformRules
             "a burst factor that is not below the proof factor");
     }
 
-    private static void JudgeCoefficients(Platform platform, FileFindings findings)
+    private static void JudgeCoefficients(IReadOnlyList<RawErrorCoefficient> coefficients, FileFindings findings)
     {
         findings.Require(
-            platform.RawError.Count > 0, "raw-error", "coefficient-none", "no coefficient at all", "at least one coefficient of zero, span, bow or s-shape");
+            coefficients.Count > 0, "raw-error", "coefficient-none", "no coefficient at all", "at least one coefficient of zero, span, bow or s-shape");
         Dictionary<PressureShape, int> counts = [];
         HashSet<CoefficientName> names = [];
-        foreach (RawErrorCoefficient coefficient in platform.RawError)
+        foreach (RawErrorCoefficient coefficient in coefficients)
         {
             CoefficientName name = coefficient.Name;
             int index = counts[name.Shape] = counts.GetValueOrDefault(name.Shape, -1) + 1;

@@ -4,23 +4,25 @@ using BandSpec.Core.Quantities;
 
 namespace BandSpec.Core.Requirements;
 
-/// <summary>The rule that a figure lies in its accepted range, for every kind of figure.</summary>
+/// <summary>The rule that a figure lies in its accepted range, for every kind of figure; one that could not be read breaks no rule.</summary>
 internal static class RangeRules
 {
     /// <summary>Judges a number in the unit of the range.</summary>
-    public static void InRange(this FileFindings findings, string path, double number, AcceptedRange range)
+    public static void InRange(this FileFindings findings, string path, double? written, AcceptedRange range)
     {
+        if (written is not { } number)
+            return;
         string found = string.Create(CultureInfo.InvariantCulture, $"{number} {range.Unit}").TrimEnd();
         findings.Require(range.Holds(number), path, "out-of-range", found, range.ToString());
     }
 
     /// <summary>Judges an error.</summary>
-    public static void InRange(this FileFindings findings, string path, PercentOfSpan error, AcceptedRange range) =>
-        findings.InRange(path, error.Percent, range);
+    public static void InRange(this FileFindings findings, string path, PercentOfSpan? error, AcceptedRange range) =>
+        findings.InRange(path, error?.Percent, range);
 
     /// <summary>Judges a difference of temperatures.</summary>
-    public static void InRange(this FileFindings findings, string path, TemperatureDifference difference, AcceptedRange range) =>
-        findings.InRange(path, difference.Kelvin, range);
+    public static void InRange(this FileFindings findings, string path, TemperatureDifference? difference, AcceptedRange range) =>
+        findings.InRange(path, difference?.Kelvin, range);
 
     /// <summary>Judges a temperature.</summary>
     public static void InRange(this FileFindings findings, string path, Temperature temperature, AcceptedRange range) =>
@@ -34,10 +36,10 @@ internal static class RangeRules
     }
 
     /// <summary>Judges a mean and its standard deviation; a mean that is a magnitude is not negative.</summary>
-    public static void InRange(this FileFindings findings, string path, Spread spread, AcceptedRange mean)
+    public static void InRange(this FileFindings findings, string path, Spread? spread, AcceptedRange mean)
     {
-        findings.InRange($"{path}.mean", spread.Mean, mean);
-        findings.InRange($"{path}.sigma", spread.Sigma, AcceptedRanges.Spread);
+        findings.InRange($"{path}.mean", spread?.Mean, mean);
+        findings.InRange($"{path}.sigma", spread?.Sigma, AcceptedRanges.Spread);
     }
 
     /// <summary>Judges that three temperatures are a range of at least a kelvin with the reference inside.</summary>

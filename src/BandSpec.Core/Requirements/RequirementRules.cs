@@ -15,19 +15,38 @@ internal static class RequirementRules
     private const double SmallestSpan = 1;
 
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Requirement requirement, FileFindings findings)
+    public static void Judge(RequirementParts requirement, FileFindings findings)
     {
-        IdentityRules.Judge(requirement.Identity, findings);
-        JudgePressure(requirement.Pressure, findings);
-        OutputRules.Judge(requirement.Output, findings);
-        TemperatureRules.Judge(requirement, findings);
-        CompensationRules.Judge(requirement, findings);
+        if (requirement.Identity is { } identity)
+            IdentityRules.Judge(identity, findings);
+        if (requirement.Pressure is { } pressure)
+            JudgePressure(pressure, findings);
+        if (requirement.Output is { } output)
+            OutputRules.Judge(output, findings);
+        if (requirement.Temperature is { } range)
+            JudgeTemperature(range, requirement, findings);
         findings.InRange("safety-factor", requirement.SafetyFactor, AcceptedRanges.SafetyFactor);
-        findings.InRange("capability.sample", requirement.Capability.Sample, AcceptedRanges.Capability);
-        findings.InRange("capability.long-run", requirement.Capability.LongRun, AcceptedRanges.Capability);
-        TermRules.Judge(requirement, findings);
-        JudgeTest(requirement, findings);
+        findings.InRange("capability.sample", requirement.Capability?.Sample, AcceptedRanges.Capability);
+        findings.InRange("capability.long-run", requirement.Capability?.LongRun, AcceptedRanges.Capability);
+        if (requirement.FurtherTerms is { } further)
+            TermRules.Judge(further, requirement.HeldTerms ?? [], findings);
+        findings.InRange("test.guard-band", requirement.Test?.GuardBand, AcceptedRanges.GuardBand);
         JudgeRounding(requirement, findings);
+    }
+
+    private static void JudgeTemperature(OperatingTemperature range, RequirementParts requirement, FileFindings findings)
+    {
+        findings.IsRange("temperature", range);
+        if (requirement.Compensation is { } compensation)
+            CompensationRules.Judge(compensation, range, findings);
+        // Beside a range that is none, everything would be outside it.
+        if (range.Lower >= range.Upper)
+            return;
+        if (requirement.AllowedError is { } regions)
+            RegionRules.Judge(regions, range, findings);
+        if (requirement.Profile is { } profile)
+            ProfileRules.Judge(profile, range, findings);
+        JudgeTest(requirement.Test?.Temperatures ?? [], range, findings);
     }
 
     private static void JudgePressure(PressureRange pressure, FileFindings findings)
@@ -51,31 +70,30 @@ internal static class RequirementRules
             pressure.Reference == PressureReference.Absolute ? "0 or more for an absolute pressure" : "-1.1 bar or more for a gauge pressure");
     }
 
-    private static void JudgeTest(Requirement requirement, FileFindings findings)
+    private static void JudgeTest(IReadOnlyList<Temperature> temperatures, OperatingTemperature range, FileFindings findings)
     {
-        findings.InRange("test.guard-band", requirement.Test.GuardBand, AcceptedRanges.GuardBand);
-        IReadOnlyList<Temperature> temperatures = requirement.Test.Temperatures ?? [];
         for (int i = 0; i < temperatures.Count; i++)
         {
             Temperature temperature = temperatures[i];
             findings.Require(
-                temperature >= requirement.Temperature.Lower && temperature <= requirement.Temperature.Upper, $"test.temperatures[{i}]",
-                "test-temperature", $"{temperature} is outside the operating range",
-                $"{requirement.Temperature.Lower} to {requirement.Temperature.Upper}");
+                temperature >= range.Lower && temperature <= range.Upper, $"test.temperatures[{i}]",
+                "test-temperature", $"{temperature} is outside the operating range", $"{range.Lower} to {range.Upper}");
             findings.Require(
                 i == 0 || temperature > temperatures[i - 1], $"test.temperatures[{i}]", "test-temperature",
                 $"{temperature} after {temperatures[Math.Max(0, i - 1)]}", "each temperature once, cold to hot");
         }
     }
 
-    private static void JudgeRounding(Requirement requirement, FileFindings findings)
+    private static void JudgeRounding(RequirementParts requirement, FileFindings findings)
     {
-        findings.InRange("rounding.band", requirement.Rounding.Band, AcceptedRanges.RoundingStep);
-        findings.InRange("rounding.limit", requirement.Rounding.Limit, AcceptedRanges.RoundingStep);
-        double tightest = requirement.AllowedError.Min(region => Math.Min(region.Limit.Percent, (region.LimitAtEnd ?? region.Limit).Percent));
+        findings.InRange("rounding.band", requirement.Rounding?.Band, AcceptedRanges.RoundingStep);
+        findings.InRange("rounding.limit", requirement.Rounding?.Limit, AcceptedRanges.RoundingStep);
+        if (requirement.Rounding is not { } rounding || requirement.AllowedError is not { } regions)
+            return;
+        double tightest = regions.Min(region => Math.Min(region.Limit.Percent, (region.LimitAtEnd ?? region.Limit).Percent));
         findings.Require(
-            2 * requirement.Rounding.Limit.Percent <= tightest, "rounding.limit", "rounding-coarse",
-            $"steps of {requirement.Rounding.Limit} for an allowed error of {PercentOfSpan.FromPercent(tightest)}",
+            2 * rounding.Limit.Percent <= tightest, "rounding.limit", "rounding-coarse",
+            $"steps of {rounding.Limit} for an allowed error of {PercentOfSpan.FromPercent(tightest)}",
             "at most half the tightest allowed error");
     }
 }

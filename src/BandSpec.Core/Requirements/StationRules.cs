@@ -7,7 +7,7 @@ namespace BandSpec.Core.Requirements;
 internal static class StationRules
 {
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Station station, FileFindings findings)
+    public static void Judge(StationParts station, FileFindings findings)
     {
         findings.FitsLine("station.name", station.Name);
         findings.InRange("pressure-standard.zero", station.StandardZero, AcceptedRanges.Spread);
@@ -15,11 +15,16 @@ internal static class StationRules
         findings.InRange("reading-noise", station.ReadingNoise, AcceptedRanges.Spread);
         findings.InRange("readings-averaged", station.ReadingsAveraged, AcceptedRanges.ReadingsAveraged);
         findings.InRange("soak-gradient", station.SoakGradient, AcceptedRanges.SoakGradient);
-        JudgeLists("pressure-points", station.PressurePoints, findings);
-        JudgeLists("test-points", station.TestPoints, findings);
-        JudgeFewest(station.PressurePoints, findings);
-        JudgeChamber(station.Chamber, findings);
-        JudgeMoney(station, findings);
+        if (station.PressurePoints is { } read)
+        {
+            JudgeLists("pressure-points", read, findings);
+            JudgeFewest(read, findings);
+        }
+        if (station.TestPoints is { } tested)
+            JudgeLists("test-points", tested, findings);
+        if (station.Chamber is { } chamber)
+            JudgeChamber(chamber, findings);
+        JudgeMoney(station.Chamber?.HourlyRate, station.RejectCost, findings);
     }
 
     private static void JudgeLists(string path, PressureLists lists, FileFindings findings)
@@ -55,12 +60,12 @@ internal static class StationRules
         findings.InRange("chamber.batch", chamber.Batch, AcceptedRanges.Batch);
     }
 
-    private static void JudgeMoney(Station station, FileFindings findings)
+    private static void JudgeMoney(Money? rate, Money? rejectCost, FileFindings findings)
     {
-        findings.InRange("chamber.rate", station.Chamber.HourlyRate.Amount, AcceptedRanges.Money);
-        findings.InRange("reject-cost", station.RejectCost.Amount, AcceptedRanges.Money);
+        findings.InRange("chamber.rate", rate?.Amount, AcceptedRanges.Money);
+        findings.InRange("reject-cost", rejectCost?.Amount, AcceptedRanges.Money);
         findings.Require(
-            station.RejectCost.Currency == station.Chamber.HourlyRate.Currency, "reject-cost", "currency",
-            $"{station.RejectCost.Currency} beside {station.Chamber.HourlyRate.Currency} for the chamber", "one currency");
+            rate is null || rejectCost is null || rejectCost.Currency == rate.Currency, "reject-cost", "currency",
+            $"{rejectCost?.Currency} beside {rate?.Currency} for the chamber", "one currency");
     }
 }

@@ -17,18 +17,18 @@ internal static class TermRules
     internal static IReadOnlyList<string> Fixed { get; } = ["pressure-standard", "resolution"];
 
     /// <summary>Judges all of them.</summary>
-    public static void Judge(Requirement requirement, FileFindings findings)
+    public static void Judge(IReadOnlyList<FurtherTerm> further, IReadOnlyList<HeldTerm> heldTerms, FileFindings findings)
     {
-        for (int i = 0; i < requirement.FurtherTerms.Count; i++)
-            JudgeFurther(requirement, i, findings);
-        string[] names = [.. Holdable, .. requirement.FurtherTerms.Select(term => term.Name)];
-        foreach (HeldTerm held in requirement.HeldTerms)
+        for (int i = 0; i < further.Count; i++)
+            JudgeFurther(further, i, findings);
+        string[] names = [.. Holdable, .. further.Select(term => term.Name)];
+        foreach (HeldTerm held in heldTerms)
             JudgeHeld(held, names, findings);
     }
 
-    private static void JudgeFurther(Requirement requirement, int index, FileFindings findings)
+    private static void JudgeFurther(IReadOnlyList<FurtherTerm> further, int index, FileFindings findings)
     {
-        FurtherTerm term = requirement.FurtherTerms[index];
+        FurtherTerm term = further[index];
         string path = $"further-terms[{index}]";
         findings.FitsLine($"{path}.name", term.Name, LongestName);
         findings.InRange($"{path}.bound", term.Bound, AcceptedRanges.Spread);
@@ -36,7 +36,7 @@ internal static class TermRules
         findings.Require(
             term.Bound.Percent != 0 || term.Sigma.Percent != 0, $"{path}.sigma", "further-term-empty", "a term that neither adds nor scatters",
             "a bound or a sigma above 0");
-        bool isTaken = Holdable.Concat(Fixed).Concat(requirement.FurtherTerms.Take(index).Select(other => other.Name))
+        bool isTaken = Holdable.Concat(Fixed).Concat(further.Take(index).Select(other => other.Name))
             .Contains(term.Name, StringComparer.OrdinalIgnoreCase);
         findings.Require(!isTaken, $"{path}.name", "further-term-name", $"`{term.Name}` is already the name of a term", "a name of its own");
     }
