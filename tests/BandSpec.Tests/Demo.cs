@@ -25,7 +25,7 @@ internal static class Demo
             Xunit.Assert.Equal(at, files[name].LastIndexOf(old, StringComparison.Ordinal));
             files[name] = files[name].Replace(old, replacement, StringComparison.Ordinal);
         }
-        return InputReading.Read(Text(Brine, files[Brine]), path => Text(path, files[path]));
+        return InputReading.Read(Text(Brine, files[Brine]), path => files.TryGetValue(path, out string? text) ? Text(path, text) : InputContent.Refused(path, "there is no such file"));
     }
 
     public static InputContent Text(string name, string text) => InputContent.Of(name, Encoding.UTF8.GetBytes(text));
