@@ -1,4 +1,6 @@
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Bands;
 
@@ -10,6 +12,37 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
 {
     /// <summary>The plan's margin: the smallest over all nodes. Feasible when at least 1.</summary>
     public double Margin => Worst.Margin;
+
+    /// <summary>The band of a plan at all design nodes.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="plan">The compensation plan.</param>
+    public static BandMap Of(Application application, CompensationPlan plan)
+    {
+        ArgumentNullException.ThrowIfNull(application);
+        ArgumentNullException.ThrowIfNull(plan);
+        return Of(application.Requirement, BandFormulas.Of(application, plan));
+    }
+
+    /// <summary>The band that formulas give at all design nodes.</summary>
+    internal static BandMap Of(Requirement requirement, BandFormulas formulas)
+    {
+        List<BandNode> nodes = [];
+        List<RegionBand> regions = [];
+        for (int r = 0; r < requirement.AllowedError.Count; r++)
+        {
+            AllowedErrorRegion allowance = requirement.AllowedError[r];
+            List<BandNode> inRegion =
+            [
+                .. from temperature in DesignNodes.TemperaturesOf(allowance)
+                   from fraction in DesignNodes.Fractions
+                   select formulas.At(fraction, temperature, r),
+            ];
+            nodes.AddRange(inRegion);
+            regions.Add(RegionBand.Of(allowance, inRegion, requirement.Rounding));
+        }
+
+        return new BandMap(nodes, regions, nodes.MinBy(n => n.Margin)!);
+    }
 }
 
 /// <summary>The band in one temperature region.</summary>
@@ -17,30 +50,26 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
 /// <param name="To">Hotter end.</param>
 /// <param name="AllowedTightest">The smallest allowed error in the region.</param>
 /// <param name="Maximum">The largest maximum band in the region.</param>
-/// <param name="Typical">The largest typical band in the region.</param>
+/// <param name="Stated">
+/// The maximum band as the specification states it: rounded up to the band step, or the tightest allowed error when that is smaller and
+/// still not below the maximum.
+/// </param>
+/// <param name="Typical">The largest typical band in the region, not rounded.</param>
 /// <param name="Worst">The region's node of least margin.</param>
 public sealed record RegionBand(
-    Temperature From, Temperature To, PercentOfSpan AllowedTightest, PercentOfSpan Maximum, PercentOfSpan Typical, BandNode Worst)
+    Temperature From, Temperature To, PercentOfSpan AllowedTightest, PercentOfSpan Maximum, PercentOfSpan Stated,
+    PercentOfSpan Typical, BandNode Worst)
 {
     /// <summary>The region's margin.</summary>
     public double Margin => Worst.Margin;
-}
 
-/// <summary>What a unit does over the customer's temperature profile.</summary>
-/// <param name="RmsError">Dwell-weighted root of the mean of <c>M² + σ_t²</c>.</param>
-/// <param name="OutsideProbability">Dwell-weighted probability that the error is larger than allowed, 0 … 1.</param>
-/// <param name="EquivalentTime">The service life expressed as time at the ageing test's temperature.</param>
-/// <param name="AgeFactor">Drift at the end of life as a multiple of the drift in the ageing test.</param>
-public sealed record ProfileFigures(PercentOfSpan RmsError, double OutsideProbability, Duration EquivalentTime, double AgeFactor);
-
-/// <summary>What would be left with a perfect correction, and what no correction at all can beat.</summary>
-/// <param name="Worst">The node of least margin when nothing is left of the raw error and only the pressure standard is carried.</param>
-/// <param name="Bound">
-/// A margin that no plan exceeds. It is above <see cref="Margin"/> where ageing drifts one way: a correction that leaves half the drift with
-/// the opposite sign does better than a perfect one.
-/// </param>
-public sealed record BandFloor(BandNode Worst, double Bound)
-{
-    /// <summary>The margin with a perfect correction.</summary>
-    public double Margin => Worst.Margin;
+    /// <summary>The summary of a region's nodes.</summary>
+    internal static RegionBand Of(AllowedErrorRegion allowance, IReadOnlyList<BandNode> nodes, RoundingSteps rounding)
+    {
+        PercentOfSpan allowed = nodes.Min(n => n.Allowed), maximum = nodes.Max(n => n.Maximum);
+        var rounded = PercentOfSpan.FromPercent(StepRounding.Up(maximum.Percent, rounding.Band.Percent));
+        PercentOfSpan stated = maximum <= allowed && allowed < rounded ? allowed : rounded;
+        return new RegionBand(
+            allowance.From, allowance.To, allowed, maximum, stated, nodes.Max(n => n.Typical), nodes.MinBy(n => n.Margin)!);
+    }
 }
