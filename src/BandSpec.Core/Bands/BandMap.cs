@@ -1,4 +1,5 @@
 using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Bands;
 
@@ -10,6 +11,37 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
 {
     /// <summary>The plan's margin: the smallest over all nodes. Feasible when at least 1.</summary>
     public double Margin => Worst.Margin;
+
+    /// <summary>The band of a plan at all design nodes.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="plan">The compensation plan.</param>
+    public static BandMap Of(Application application, CompensationPlan plan)
+    {
+        ArgumentNullException.ThrowIfNull(application);
+        ArgumentNullException.ThrowIfNull(plan);
+        return Of(application.Requirement, BandFormulas.Of(application, plan));
+    }
+
+    /// <summary>The band that formulas give at all design nodes.</summary>
+    internal static BandMap Of(Requirement requirement, BandFormulas formulas)
+    {
+        List<BandNode> nodes = [];
+        List<RegionBand> regions = [];
+        for (int r = 0; r < requirement.AllowedError.Count; r++)
+        {
+            AllowedErrorRegion allowance = requirement.AllowedError[r];
+            List<BandNode> inRegion =
+            [
+                .. from temperature in DesignNodes.TemperaturesOf(allowance)
+                   from fraction in DesignNodes.Fractions
+                   select formulas.At(fraction, temperature, r),
+            ];
+            nodes.AddRange(inRegion);
+            regions.Add(RegionBand.Of(allowance, inRegion));
+        }
+
+        return new BandMap(nodes, regions, nodes.MinBy(n => n.Margin)!);
+    }
 }
 
 /// <summary>The band in one temperature region.</summary>
@@ -24,23 +56,9 @@ public sealed record RegionBand(
 {
     /// <summary>The region's margin.</summary>
     public double Margin => Worst.Margin;
-}
 
-/// <summary>What a unit does over the customer's temperature profile.</summary>
-/// <param name="RmsError">Dwell-weighted root of the mean of <c>M² + σ_t²</c>.</param>
-/// <param name="OutsideProbability">Dwell-weighted probability that the error is larger than allowed, 0 … 1.</param>
-/// <param name="EquivalentTime">The service life expressed as time at the ageing test's temperature.</param>
-/// <param name="AgeFactor">Drift at the end of life as a multiple of the drift in the ageing test.</param>
-public sealed record ProfileFigures(PercentOfSpan RmsError, double OutsideProbability, Duration EquivalentTime, double AgeFactor);
-
-/// <summary>What would be left with a perfect correction, and what no correction at all can beat.</summary>
-/// <param name="Worst">The node of least margin when nothing is left of the raw error and only the pressure standard is carried.</param>
-/// <param name="Bound">
-/// A margin that no plan exceeds. It is above <see cref="Margin"/> where ageing drifts one way: a correction that leaves half the drift with
-/// the opposite sign does better than a perfect one.
-/// </param>
-public sealed record BandFloor(BandNode Worst, double Bound)
-{
-    /// <summary>The margin with a perfect correction.</summary>
-    public double Margin => Worst.Margin;
+    /// <summary>The summary of a region's nodes.</summary>
+    internal static RegionBand Of(AllowedErrorRegion allowance, IReadOnlyList<BandNode> nodes) => new(
+        allowance.From, allowance.To,
+        nodes.Min(n => n.Allowed), nodes.Max(n => n.Maximum), nodes.Max(n => n.Typical), nodes.MinBy(n => n.Margin)!);
 }

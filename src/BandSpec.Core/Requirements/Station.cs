@@ -39,7 +39,12 @@ public sealed record Station
 /// <summary>Pressure fractions, rising, each 0 … 1.</summary>
 /// <param name="Reference">At the temperature nearest the reference temperature.</param>
 /// <param name="Others">At the other temperatures.</param>
-public sealed record PressureLists(IReadOnlyList<double> Reference, IReadOnlyList<double> Others);
+public sealed record PressureLists(IReadOnlyList<double> Reference, IReadOnlyList<double> Others)
+{
+    /// <summary>The list that is used at a temperature.</summary>
+    /// <param name="isReference">Whether it is the one nearest the reference temperature.</param>
+    public IReadOnlyList<double> At(bool isReference) => isReference ? Reference : Others;
+}
 
 /// <summary>A sum of money.</summary>
 /// <param name="Amount">The amount.</param>
