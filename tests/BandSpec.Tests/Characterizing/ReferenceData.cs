@@ -1,18 +1,18 @@
 using System.Globalization;
 using BandSpec.Core.Numerics.Dense;
 using BandSpec.Core.Numerics.NestedModels;
+using BandSpec.Tests.Reference;
 
 namespace BandSpec.Tests.Characterizing;
 
-/// <summary>The published data sets beside this file, each with its source in its first line; made by Reference/nested-models.R.</summary>
+/// <summary>Published data sets, each with its source in its first line; made by Reference/make_nested_models.R.</summary>
 internal static class ReferenceData
 {
     /// <summary>One row: lot, unit, regressor, reading.</summary>
     public sealed record Row(string Lot, string Unit, double X, double Reading);
 
     public static IReadOnlyList<Row> Load(string name) =>
-        [.. from line in File.ReadLines(Path.Combine(AppContext.BaseDirectory, "Characterizing", "Reference", name + ".csv")).Skip(2)
-            let cells = line.Split(',')
+        [.. from cells in ReferenceTable.Rows(name + ".csv")
             select new Row(cells[0], cells[1], Number(cells[2]), Number(cells[3]))];
 
     /// <summary>The rows reduced unit by unit on the regressors that <paramref name="regressors"/> makes of <c>x</c>.</summary>

@@ -11,14 +11,14 @@ internal static class Cholesky
         for (int j = 0; j < a.Rows; j++)
         {
             Span<double> pivotRow = a.Row(j);
-            double pivot = pivotRow[j] - Products.Dot(pivotRow[..j], pivotRow[..j]);
+            double pivot = pivotRow[j] - Vectors.Dot(pivotRow[..j], pivotRow[..j]);
             if (!(pivot > tolerance * pivotRow[j]) || !double.IsFinite(pivot))
                 return false;
             double root = pivotRow[j] = Math.Sqrt(pivot);
             for (int i = j + 1; i < a.Rows; i++)
             {
                 Span<double> row = a.Row(i);
-                row[j] = (row[j] - Products.Dot(row[..j], pivotRow[..j])) / root;
+                row[j] = (row[j] - Vectors.Dot(row[..j], pivotRow[..j])) / root;
             }
 
             pivotRow[(j + 1)..].Clear();
@@ -62,7 +62,7 @@ internal static class Cholesky
     public static void SolveLower(Grid lower, Span<double> vector)
     {
         for (int i = 0; i < lower.Rows; i++)
-            vector[i] = (vector[i] - Products.Dot(lower.Row(i)[..i], vector[..i])) / lower[i, i];
+            vector[i] = (vector[i] - Vectors.Dot(lower.Row(i)[..i], vector[..i])) / lower[i, i];
     }
 
     /// <summary><c>A⁻¹ = (K⁻¹)ᵀK⁻¹</c>.</summary>

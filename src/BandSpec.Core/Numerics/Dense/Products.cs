@@ -1,20 +1,24 @@
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
 namespace BandSpec.Core.Numerics.Dense;
 
 /// <summary>Products and sums of small dense matrices. Sums run in a fixed order, so the answer is the same to the last bit everywhere.</summary>
 internal static class Products
 {
-    public static double Dot(ReadOnlySpan<double> a, ReadOnlySpan<double> b)
-    {
-        double sum = 0;
-        for (int i = 0; i < a.Length; i++)
-            sum += a[i] * b[i];
-        return sum;
-    }
-
-    /// <summary><c>target += factor·source</c>.</summary>
+    /// <summary>
+    /// <c>target += factor·source</c>, four cells at a time. Every cell is one product and one sum whatever the machine's width, so the bits
+    /// do not depend on it; this is where nine tenths of the estimation's time goes.
+    /// </summary>
     public static void AddTo(Span<double> target, double factor, ReadOnlySpan<double> source)
     {
-        for (int i = 0; i < target.Length; i++)
+        ref double into = ref MemoryMarshal.GetReference(target);
+        ref double from = ref MemoryMarshal.GetReference(source[..target.Length]);
+        Vector256<double> factors = Vector256.Create(factor);
+        int i = 0;
+        for (; i <= target.Length - Vector256<double>.Count; i += Vector256<double>.Count)
+            (Vector256.LoadUnsafe(ref into, (nuint)i) + (factors * Vector256.LoadUnsafe(ref from, (nuint)i))).StoreUnsafe(ref into, (nuint)i);
+        for (; i < target.Length; i++)
             target[i] += factor * source[i];
     }
 
@@ -43,7 +47,7 @@ internal static class Products
         Grid product = new(a.Rows, b.Rows);
         for (int i = 0; i < a.Rows; i++)
             for (int j = 0; j < b.Rows; j++)
-                product[i, j] = Dot(a.Row(i), b.Row(j));
+                product[i, j] = Vectors.Dot(a.Row(i), b.Row(j));
         return product;
     }
 
@@ -70,7 +74,7 @@ internal static class Products
     {
         double[] product = new double[a.Rows];
         for (int i = 0; i < a.Rows; i++)
-            product[i] = Dot(a.Row(i), vector);
+            product[i] = Vectors.Dot(a.Row(i), vector);
         return product;
     }
 
@@ -84,5 +88,5 @@ internal static class Products
     }
 
     /// <summary>The trace of <c>A·B</c> for symmetric <c>A</c> and <c>B</c> of one size.</summary>
-    public static double TraceOfProduct(Grid a, Grid b) => Dot(a.AllCells(), b.AllCells());
+    public static double TraceOfProduct(Grid a, Grid b) => Vectors.Dot(a.AllCells(), b.AllCells());
 }

@@ -30,7 +30,7 @@ internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int most
         for (int step = 0; step < mostSteps; step++)
         {
             double[] direction = Array.ConvertAll(inverse.Times(here.Slope), d => -d);
-            double slope = Products.Dot(here.Slope, direction);
+            double slope = Vectors.Dot(here.Slope, direction);
             if (-slope / 2 < RoundingPart * Math.Max(1, Math.Abs(here.Value)))
                 return new Minimum(here, MinimizingEnd.Converged, evaluations);
             SlopedPoint? next = Search(here, direction, slope);
@@ -61,7 +61,7 @@ internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int most
                 lowest = there;
             if (!(there.Value <= here.Value + (SufficientDecrease * length * slope)))
                 longest = length;
-            else if (Products.Dot(there.Slope, direction) < SlopeLeft * slope)
+            else if (Vectors.Dot(there.Slope, direction) < SlopeLeft * slope)
                 shortest = length;
             else
                 return there;
@@ -83,11 +83,11 @@ internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int most
     {
         double[] step = Along(to.Place, -1, from.Place);
         double[] change = Along(to.Slope, -1, from.Slope);
-        double rise = Products.Dot(step, change);
-        if (rise <= 1e-14 * Math.Sqrt(Products.Dot(step, step) * Products.Dot(change, change)))
+        double rise = Vectors.Dot(step, change);
+        if (rise <= 1e-14 * Math.Sqrt(Vectors.Dot(step, step) * Vectors.Dot(change, change)))
             return;
         double[] turned = inverse.Times(change);
-        double factor = (1 + (Products.Dot(change, turned) / rise)) / rise;
+        double factor = (1 + (Vectors.Dot(change, turned) / rise)) / rise;
         for (int i = 0; i < step.Length; i++)
         {
             Products.AddTo(inverse.Row(i), factor * step[i], step);

@@ -17,6 +17,9 @@ internal sealed class SharedCorrelationLaw(
     private readonly int[] freeWithin = Free(within);
     private readonly int[] freeBetween = Free(between);
 
+    /// <summary>The correlated pairs.</summary>
+    public IReadOnlyList<(int First, int Second)> Pairs => pairs;
+
     public double[] Start => [.. freeWithin.Select(_ => 1.0), .. freeBetween.Select(_ => 1.0), .. correlations];
 
     /// <summary>Twice the expected information of a spread's or correlation's logarithm with every unit or lot measured exactly.</summary>
@@ -30,6 +33,16 @@ internal sealed class SharedCorrelationLaw(
             return null;
         (double[] sigma, double[] lotSigma) = Spreads(parameters);
         return new NestedFactors(Scaled(sigma, root), Scaled(lotSigma, root));
+    }
+
+    /// <summary>The law with one more correlated pair, starting from parameters of this one; a spread at zero starts just above it.</summary>
+    public SharedCorrelationLaw From(double[] parameters, (int First, int Second) pair)
+    {
+        const double JustAbove = 1e-2;
+        (double[] sigma, double[] lotSigma) = Spreads(parameters);
+        double[] Lifted(double[] values, double[] scale) =>
+            [.. values.Zip(scale, (value, unit) => Math.Max(Math.Abs(value), JustAbove * unit))];
+        return new SharedCorrelationLaw(Lifted(sigma, within), Lifted(lotSigma, between), [.. pairs, pair], [.. PairValues(parameters), 0]);
     }
 
     /// <summary>The spreads that the parameters stand for, relative to the residual standard deviation; signs may be negative.</summary>

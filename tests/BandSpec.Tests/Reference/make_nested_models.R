@@ -1,5 +1,5 @@
 # Writes the data sets that NestedModelFigures.cs reads. Debian bookworm, R 4.2.2, lme4 1.1-31:
-#   Rscript nested-models.R
+#   Rscript make_nested_models.R
 suppressMessages(library(lme4))
 write <- function(data, name, source) {
   file <- file(name, "w")
