@@ -1,0 +1,64 @@
+using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
+
+namespace BandSpec.Core.Bands;
+
+/// <summary>The band of one plan over the whole operating range.</summary>
+/// <param name="Nodes">All nodes, by region, then temperature, then pressure.</param>
+/// <param name="Regions">One row a region, cold to hot.</param>
+/// <param name="Worst">The node of least margin; the first of several.</param>
+public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<RegionBand> Regions, BandNode Worst)
+{
+    /// <summary>The plan's margin: the smallest over all nodes. Feasible when at least 1.</summary>
+    public double Margin => Worst.Margin;
+
+    /// <summary>The band of a plan at all design nodes.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="plan">The compensation plan.</param>
+    public static BandMap Of(Application application, CompensationPlan plan)
+    {
+        ArgumentNullException.ThrowIfNull(application);
+        ArgumentNullException.ThrowIfNull(plan);
+        return Of(application.Requirement, BandFormulas.Of(application, plan));
+    }
+
+    /// <summary>The band that formulas give at all design nodes.</summary>
+    internal static BandMap Of(Requirement requirement, BandFormulas formulas)
+    {
+        List<BandNode> nodes = [];
+        List<RegionBand> regions = [];
+        for (int r = 0; r < requirement.AllowedError.Count; r++)
+        {
+            AllowedErrorRegion allowance = requirement.AllowedError[r];
+            List<BandNode> inRegion =
+            [
+                .. from temperature in DesignNodes.TemperaturesOf(allowance)
+                   from fraction in DesignNodes.Fractions
+                   select formulas.At(fraction, temperature, r),
+            ];
+            nodes.AddRange(inRegion);
+            regions.Add(RegionBand.Of(allowance, inRegion));
+        }
+
+        return new BandMap(nodes, regions, nodes.MinBy(n => n.Margin)!);
+    }
+}
+
+/// <summary>The band in one temperature region.</summary>
+/// <param name="From">Colder end.</param>
+/// <param name="To">Hotter end.</param>
+/// <param name="AllowedTightest">The smallest allowed error in the region.</param>
+/// <param name="Maximum">The largest maximum band in the region.</param>
+/// <param name="Typical">The largest typical band in the region.</param>
+/// <param name="Worst">The region's node of least margin.</param>
+public sealed record RegionBand(
+    Temperature From, Temperature To, PercentOfSpan AllowedTightest, PercentOfSpan Maximum, PercentOfSpan Typical, BandNode Worst)
+{
+    /// <summary>The region's margin.</summary>
+    public double Margin => Worst.Margin;
+
+    /// <summary>The summary of a region's nodes.</summary>
+    internal static RegionBand Of(AllowedErrorRegion allowance, IReadOnlyList<BandNode> nodes) => new(
+        allowance.From, allowance.To,
+        nodes.Min(n => n.Allowed), nodes.Max(n => n.Maximum), nodes.Max(n => n.Typical), nodes.MinBy(n => n.Margin)!);
+}

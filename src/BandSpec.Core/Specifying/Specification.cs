@@ -1,0 +1,38 @@
+using BandSpec.Core.Allocating;
+using BandSpec.Core.Bands;
+using BandSpec.Core.Planning;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.TestLimits;
+
+namespace BandSpec.Core.Specifying;
+
+/// <summary>Everything that was found for one application: the finished record that documents and files are written from.</summary>
+public sealed record Specification
+{
+    /// <summary>The inputs.</summary>
+    public required Application Application { get; init; }
+
+    /// <summary>The chosen compensation plan.</summary>
+    public required PlanChoice Choice { get; init; }
+
+    /// <summary>Its band.</summary>
+    public required BandMap Bands { get; init; }
+
+    /// <summary>What a perfect correction would leave.</summary>
+    public required BandFloor Floor { get; init; }
+
+    /// <summary>What a unit does over the temperature profile.</summary>
+    public required ProfileFigures Profile { get; init; }
+
+    /// <summary>How the allowed error is shared out.</summary>
+    public required Allocation Allocation { get; init; }
+
+    /// <summary>Limits of derived figures.</summary>
+    public required IReadOnlyList<DerivedLimit> DerivedLimits { get; init; }
+
+    /// <summary>The points of the verification test.</summary>
+    public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
+
+    /// <summary>Whether the plan keeps the allowed error with the stated capability everywhere.</summary>
+    public bool Feasible => Bands.Margin >= 1;
+}

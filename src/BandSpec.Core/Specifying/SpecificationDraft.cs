@@ -1,0 +1,36 @@
+using BandSpec.Core.Bands;
+using BandSpec.Core.Planning;
+using BandSpec.Core.Requirements;
+
+namespace BandSpec.Core.Specifying;
+
+/// <summary>The main story: from an application to its finished specification.</summary>
+public static class SpecificationDraft
+{
+    /// <summary>
+    /// Chooses the compensation plan, works out its band, shares out the allowed error and derives the test limits. That no plan fits is an
+    /// answer like any other: see <see cref="Specification.Feasible"/>.
+    /// </summary>
+    /// <param name="application">The inputs, known to fit each other.</param>
+    /// <param name="progress">Is told how far the search has come, from several threads; may be <see langword="null"/>.</param>
+    /// <param name="cancellation">Ends the search early.</param>
+    /// <exception cref="OperationCanceledException">The search was ended before it had an answer.</exception>
+    public static Specification Draft(
+        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
+    {
+        ArgumentNullException.ThrowIfNull(application);
+        PlanChoice choice = new PlanSearch(application, progress).Run(cancellation);
+        BandMap bands = BandMap.Of(application, choice.Plan);
+        return new Specification
+        {
+            Application = application,
+            Choice = choice,
+            Bands = bands,
+            Floor = BandFloor.Of(application),
+            Profile = ProfileFigures.Of(application, choice.Plan),
+            Allocation = new Allocating.Allocation([]),
+            DerivedLimits = [],
+            VerificationPoints = [],
+        };
+    }
+}
