@@ -16,6 +16,9 @@ internal abstract record Chart
 {
     public virtual double Width => 470;
 
+    /// <summary>The sign between whole and fraction in the figures at the axes.</summary>
+    public string DecimalSign { get; init; } = ".";
+
     public abstract double Height { get; }
 
     protected abstract IReadOnlyList<KeyEntry> KeyEntries { get; }
@@ -30,6 +33,8 @@ internal abstract record Chart
         var key = Key.Height(KeyEntries, area.Width);
         Key.Draw(pen, KeyEntries, area);
         var plot = Plot();
+        foreach (var axis in plot.Axes.Where(a => a.LabelFormatter == ChartStyle.Number))
+            axis.LabelFormatter = value => ChartStyle.Number(value).Replace(".", DecimalSign, StringComparison.Ordinal);
         ((IPlotModel)plot).Update(true);
         ((IPlotModel)plot).Render(pen, new OxyRect(area.Left, area.Top + key, area.Width, area.Height - key));
         // OxyPlot draws its own faults as text into the picture; a specification must not be issued with one.
