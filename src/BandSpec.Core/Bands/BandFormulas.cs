@@ -27,6 +27,9 @@ internal sealed class BandFormulas
     /// <summary>Mean drift at the end of life at a pressure.</summary>
     public double DriftMean(double x) => steady.DriftMean(x);
 
+    /// <summary>The terms that no plan can change, at a pressure.</summary>
+    public IEnumerable<SteadyTerm> SteadyAt(double x) => steady.At(x);
+
     /// <summary>The correction's residue at a place; not to be asked of a perfect correction.</summary>
     public Residue ResidueAt(double x, Temperature temperature) => correction!.At(x, temperature);
 

@@ -1,3 +1,4 @@
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 
@@ -37,7 +38,7 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
                    select formulas.At(fraction, temperature, r),
             ];
             nodes.AddRange(inRegion);
-            regions.Add(RegionBand.Of(allowance, inRegion));
+            regions.Add(RegionBand.Of(allowance, inRegion, requirement.Rounding));
         }
 
         return new BandMap(nodes, regions, nodes.MinBy(n => n.Margin)!);
@@ -49,16 +50,26 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
 /// <param name="To">Hotter end.</param>
 /// <param name="AllowedTightest">The smallest allowed error in the region.</param>
 /// <param name="Maximum">The largest maximum band in the region.</param>
-/// <param name="Typical">The largest typical band in the region.</param>
+/// <param name="Stated">
+/// The maximum band as the specification states it: rounded up to the band step, or the tightest allowed error when that is smaller and
+/// still not below the maximum.
+/// </param>
+/// <param name="Typical">The largest typical band in the region, not rounded.</param>
 /// <param name="Worst">The region's node of least margin.</param>
 public sealed record RegionBand(
-    Temperature From, Temperature To, PercentOfSpan AllowedTightest, PercentOfSpan Maximum, PercentOfSpan Typical, BandNode Worst)
+    Temperature From, Temperature To, PercentOfSpan AllowedTightest, PercentOfSpan Maximum, PercentOfSpan Stated,
+    PercentOfSpan Typical, BandNode Worst)
 {
     /// <summary>The region's margin.</summary>
     public double Margin => Worst.Margin;
 
     /// <summary>The summary of a region's nodes.</summary>
-    internal static RegionBand Of(AllowedErrorRegion allowance, IReadOnlyList<BandNode> nodes) => new(
-        allowance.From, allowance.To,
-        nodes.Min(n => n.Allowed), nodes.Max(n => n.Maximum), nodes.Max(n => n.Typical), nodes.MinBy(n => n.Margin)!);
+    internal static RegionBand Of(AllowedErrorRegion allowance, IReadOnlyList<BandNode> nodes, RoundingSteps rounding)
+    {
+        PercentOfSpan allowed = nodes.Min(n => n.Allowed), maximum = nodes.Max(n => n.Maximum);
+        var rounded = PercentOfSpan.FromPercent(StepRounding.Up(maximum.Percent, rounding.Band.Percent));
+        PercentOfSpan stated = maximum <= allowed && allowed < rounded ? allowed : rounded;
+        return new RegionBand(
+            allowance.From, allowance.To, allowed, maximum, stated, nodes.Max(n => n.Typical), nodes.MinBy(n => n.Margin)!);
+    }
 }

@@ -36,4 +36,11 @@ public readonly record struct FieldPath(InputFile File, string Path)
 /// <param name="Rule">A stable name of the rule that was broken, in lower-case words joined by hyphens, for machines to filter by.</param>
 /// <param name="Found">What was found, a sentence without a full stop, with the figures.</param>
 /// <param name="Accepted">What is accepted instead, or what to do, a sentence without a full stop.</param>
-public sealed record Finding(FieldPath Field, string Rule, string Found, string Accepted);
+public sealed record Finding(FieldPath Field, string Rule, string Found, string Accepted)
+{
+    /// <summary>The accepted word nearest to a misspelt one; <see langword="null"/> when there is none near enough or nothing is misspelt.</summary>
+    public string? Nearest { get; init; }
+
+    /// <summary>Whether the field's key is at fault, not its value: a caret belongs under the key.</summary>
+    public bool AtKey { get; init; }
+}

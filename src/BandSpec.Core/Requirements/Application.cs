@@ -23,7 +23,21 @@ public sealed class Application
     /// <summary>Checks all rules of all three inputs and of how they fit; every finding at once.</summary>
     public static Checked<Application> Check(Requirement requirement, Platform platform, Station station)
     {
+        ArgumentNullException.ThrowIfNull(requirement);
+        ArgumentNullException.ThrowIfNull(platform);
+        ArgumentNullException.ThrowIfNull(station);
+        return Checked<Application>.Of(FindingsIn(requirement, platform, station), () => new Application(requirement, platform, station));
+    }
+
+    /// <summary>
+    /// The findings of every rule that can be judged: those of an input that could not be read are left out, and so is how it fits the others.
+    /// </summary>
+    /// <param name="requirement">The requirement, if there is one.</param>
+    /// <param name="platform">The platform, if there is one.</param>
+    /// <param name="station">The station, if there is one.</param>
+    public static IReadOnlyList<Finding> FindingsIn(Requirement? requirement, Platform? platform, Station? station)
+    {
         List<Finding> findings = [];
-        return Checked<Application>.Of(findings, () => new Application(requirement, platform, station));
+        return findings;
     }
 }

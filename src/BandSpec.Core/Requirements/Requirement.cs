@@ -52,6 +52,10 @@ public sealed record Requirement
 
     /// <summary>The steps to which printed and tested values are rounded.</summary>
     public required RoundingSteps Rounding { get; init; }
+
+    /// <summary>Indices of the regions that a temperature belongs to: one, or both neighbours at an edge; none outside the range.</summary>
+    public IEnumerable<int> RegionsAt(Temperature temperature) =>
+        Enumerable.Range(0, AllowedError.Count).Where(r => AllowedError[r].From <= temperature && temperature <= AllowedError[r].To);
 }
 
 /// <summary>The operating temperature range and the temperature at which the unit is referenced.</summary>

@@ -1,6 +1,8 @@
+using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
+using BandSpec.Core.TestLimits;
 
 namespace BandSpec.Core.Specifying;
 
@@ -21,6 +23,7 @@ public static class SpecificationDraft
         ArgumentNullException.ThrowIfNull(application);
         PlanChoice choice = new PlanSearch(application, progress).Run(cancellation);
         BandMap bands = BandMap.Of(application, choice.Plan);
+        Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         return new Specification
         {
             Application = application,
@@ -28,9 +31,9 @@ public static class SpecificationDraft
             Bands = bands,
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),
-            Allocation = new Allocating.Allocation([]),
-            DerivedLimits = [],
-            VerificationPoints = [],
+            Allocation = allocation,
+            DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
+            VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
         };
     }
 }

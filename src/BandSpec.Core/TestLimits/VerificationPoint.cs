@@ -1,4 +1,7 @@
+using BandSpec.Core.Allocating;
+using BandSpec.Core.Bands;
 using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.TestLimits;
 
@@ -59,13 +62,13 @@ public sealed record VerificationPoint
 
     /// <summary>Probability that a unit is rejected here although within the tolerance (JCGM 106:2012).</summary>
     public required double ProducerRisk { get; init; }
-}
 
-/// <summary>The limit of a figure that is derived from several readings of one unit.</summary>
-/// <param name="Name">
-/// <c>zero</c>, <c>span</c> and <c>non-linearity</c> (terminal-based) at the reference temperature, <c>thermal-zero-shift</c> and
-/// <c>thermal-span-shift</c> of a region.
-/// </param>
-/// <param name="Region">Index of the region for the thermal shifts; otherwise <see langword="null"/>.</param>
-/// <param name="Limit">The magnitude that may not be exceeded.</param>
-public sealed record DerivedLimit(string Name, int? Region, PercentOfSpan Limit);
+    /// <summary>All points of a plan's verification test, in the order of the test.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="plan">The compensation plan.</param>
+    /// <param name="bands">The plan's band.</param>
+    /// <param name="allocation">How the allowed error was shared out.</param>
+    public static IReadOnlyList<VerificationPoint> AllOf(
+        Application application, CompensationPlan plan, BandMap bands, Allocation allocation) =>
+        new VerificationTest(application, bands, BandFormulas.Of(application, plan), Multipliers.Of(allocation)).Points();
+}
