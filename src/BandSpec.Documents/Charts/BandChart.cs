@@ -6,15 +6,17 @@ using OxyPlot.Series;
 namespace BandSpec.Documents.Charts;
 
 /// <summary>The words on a band chart.</summary>
-internal sealed record BandWords(string Across, string Error, string Dwell, string Allowed, string Maximum, string Typical, string Plan, string Worst);
+internal sealed record BandWords(string Across, string Error, string Dwell, string Allowed, string Design, string Maximum, string Typical, string Plan, string Worst);
 
 /// <summary>
 /// The promise in one picture: allowed, maximum and typical error over temperature as bands about zero, the compensation temperatures
-/// marked, and on the same temperature axis the time the transmitter spends there. Errors in %FS, temperatures in °C, dwell in percent.
+/// marked, and on the same temperature axis the time the transmitter spends there. The design band is the allowed error divided by the
+/// safety factor; without one it is left empty. Errors in %FS, temperatures in °C, dwell in percent.
 /// </summary>
 internal sealed record BandChart(
     BandWords Words,
     IReadOnlyList<Spot> Allowed,
+    IReadOnlyList<Spot> Design,
     IReadOnlyList<Spot> Maximum,
     IReadOnlyList<Spot> Typical,
     IReadOnlyList<double> PlanTemperatures,
@@ -28,6 +30,7 @@ internal sealed record BandChart(
     protected override IReadOnlyList<KeyEntry> KeyEntries =>
     [
         KeyEntry.Line(Words.Allowed, ChartStyle.Allowed),
+        .. Design.Count == 0 ? Array.Empty<KeyEntry>() : [KeyEntry.Line(Words.Design, ChartStyle.Design)],
         KeyEntry.Area(Words.Maximum, ChartStyle.BlueWash, ChartStyle.Maximum),
         KeyEntry.Line(Words.Typical, ChartStyle.Typical),
         .. PlanTemperatures.Count == 0 ? Array.Empty<KeyEntry>() : [KeyEntry.Mark(Words.Plan, MarkerType.Triangle, ChartStyle.Ink, ChartStyle.PlanLine)],
@@ -42,7 +45,7 @@ internal sealed record BandChart(
         plot.Axes.Add(ChartStyle.Axis(AxisPosition.Bottom, lower - pad, upper + pad));
         plot.Axes.Add(Tier(ChartStyle.Axis(AxisPosition.Left, -reach, reach), Error, Dwell.Count == 0 ? 0 : 0.36, 1));
         if (Dwell.Count > 0) DwellChart.AddBars(plot, Dwell, Tier(DwellChart.UprightAxis(Dwell), Time, 0, 0.22), Time);
-        Bands.Add(plot, Error, Allowed, Maximum, Typical);
+        Bands.Add(plot, Error, Allowed, Design, Maximum, Typical);
         foreach (var temperature in PlanTemperatures) plot.Annotations.Add(PlanLine(temperature));
         plot.Series.Add(Points(MarkerType.Triangle, PlanTemperatures.Select(t => new DataPoint(t, -reach * 0.955))));
         if (Worst is { } worst) plot.Series.Add(Points(MarkerType.Diamond, [worst.Data, worst.Mirrored]));

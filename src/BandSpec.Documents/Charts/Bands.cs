@@ -3,16 +3,19 @@ using OxyPlot.Series;
 
 namespace BandSpec.Documents.Charts;
 
-/// <summary>The three bands about zero, drawn the same over temperature and over pressure.</summary>
+/// <summary>The bands about zero, drawn the same over temperature and over pressure.</summary>
 internal static class Bands
 {
-    public static void Add(PlotModel plot, string upright, IReadOnlyList<Spot> allowed, IReadOnlyList<Spot> maximum, IReadOnlyList<Spot> typical, MarkerType marker = MarkerType.None)
+    public static void Add(
+        PlotModel plot, string upright, IReadOnlyList<Spot> allowed, IReadOnlyList<Spot> design, IReadOnlyList<Spot> maximum, IReadOnlyList<Spot> typical,
+        MarkerType marker = MarkerType.None)
     {
         plot.Series.Add(Area(upright, maximum));
         foreach (var mirrored in new[] { false, true })
         {
             plot.Series.Add(Line(upright, typical, ChartStyle.Typical, mirrored, marker == MarkerType.None ? marker : MarkerType.Triangle));
             plot.Series.Add(Line(upright, maximum, ChartStyle.Maximum, mirrored, marker));
+            plot.Series.Add(Line(upright, design, ChartStyle.Design, mirrored, MarkerType.None));
             plot.Series.Add(Line(upright, allowed, ChartStyle.Allowed, mirrored, MarkerType.None));
         }
     }

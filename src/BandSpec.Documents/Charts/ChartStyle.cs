@@ -26,8 +26,10 @@ internal static class ChartStyle
     /// <summary>Dashes in points.</summary>
     public static readonly double[] Dashed = [5, 2.5];
     public static readonly double[] Dotted = [1.2, 2];
+    public static readonly double[] DashDotted = [6, 2, 1, 2];
 
     public static readonly Stroke Allowed = new(Ink, 1.8);
+    public static readonly Stroke Design = new(Ink, 0.7, DashDotted);
     public static readonly Stroke Maximum = new(Blue, 1.1);
     public static readonly Stroke Typical = new(Ochre, 1.1, Dashed);
     public static readonly Stroke PlanLine = new(Soft, 0.7, Dotted);

@@ -13,7 +13,7 @@ internal sealed record DwellChart(string Across, string Up, IReadOnlyList<DwellB
 {
     private const string Upright = "share";
 
-    public override double Height => 140;
+    public override double Height => 102;
 
     protected override IReadOnlyList<KeyEntry> KeyEntries => [];
 

@@ -4,10 +4,10 @@ using OxyPlot.Axes;
 namespace BandSpec.Documents.Charts;
 
 /// <summary>The words on a chart over pressure.</summary>
-internal sealed record PressureWords(string Across, string Error, string Allowed, string Maximum, string Typical);
+internal sealed record PressureWords(string Across, string Error, string Allowed, string Design, string Maximum, string Typical);
 
 /// <summary>Allowed, maximum and typical error over pressure at one temperature. Pressures in the customer's unit, errors in %FS.</summary>
-internal sealed record PressureChart(PressureWords Words, IReadOnlyList<Spot> Allowed, IReadOnlyList<Spot> Maximum, IReadOnlyList<Spot> Typical) : Chart
+internal sealed record PressureChart(PressureWords Words, IReadOnlyList<Spot> Allowed, IReadOnlyList<Spot> Design, IReadOnlyList<Spot> Maximum, IReadOnlyList<Spot> Typical) : Chart
 {
     private const string Error = "error";
 
@@ -16,6 +16,7 @@ internal sealed record PressureChart(PressureWords Words, IReadOnlyList<Spot> Al
     protected override IReadOnlyList<KeyEntry> KeyEntries =>
     [
         KeyEntry.Line(Words.Allowed, ChartStyle.Allowed),
+        .. Design.Count == 0 ? Array.Empty<KeyEntry>() : [KeyEntry.Line(Words.Design, ChartStyle.Design)],
         KeyEntry.Line(Words.Maximum, ChartStyle.Maximum, MarkerType.Circle),
         KeyEntry.Line(Words.Typical, ChartStyle.Typical, MarkerType.Triangle),
     ];
@@ -29,7 +30,7 @@ internal sealed record PressureChart(PressureWords Words, IReadOnlyList<Spot> Al
         var upright = ChartStyle.Axis(AxisPosition.Left, -reach, reach);
         upright.Key = Error;
         plot.Axes.Add(upright);
-        Bands.Add(plot, Error, Allowed, Maximum, Typical, MarkerType.Circle);
+        Bands.Add(plot, Error, Allowed, Design, Maximum, Typical, MarkerType.Circle);
         return plot;
     }
 

@@ -5,11 +5,14 @@ using OxyPlot.Axes;
 
 namespace BandSpec.Documents.Charts;
 
-/// <summary>One region's bar: its name, and the share in percent of each term in the order of the chart's terms.</summary>
+/// <summary>One region's bar: its name, and the share in percent of each of the chart's parts, in their order.</summary>
 internal sealed record ShareBar(string Region, IReadOnlyList<double> Shares);
 
-/// <summary>What the allowed error is spent on, region by region, as stacked bars.</summary>
-internal sealed record ShareChart(string Across, IReadOnlyList<string> Terms, IReadOnlyList<ShareBar> Bars) : Chart
+/// <summary>
+/// What the allowed error is spent on, region by region, as stacked bars. The parts are the terms, and last the safety factor and what is
+/// not used.
+/// </summary>
+internal sealed record ShareChart(string Across, IReadOnlyList<string> Parts, IReadOnlyList<ShareBar> Bars) : Chart
 {
     private const string Upright = "regions";
 
@@ -20,7 +23,7 @@ internal sealed record ShareChart(string Across, IReadOnlyList<string> Terms, IR
     public override double Height => Pitch * Bars.Count + 34 + Key.Height(KeyEntries, Width);
 
     protected override IReadOnlyList<KeyEntry> KeyEntries =>
-        [.. Terms.Select((name, i) => new KeyEntry(name, (pen, at) => Tile.Of(i).Fill(pen, new OxyRect(at.X, at.Y - 3.6, KeyEntry.SwatchWidth, 7.2))))];
+        [.. Parts.Select((name, i) => new KeyEntry(name, (pen, at) => TileOf(i).Fill(pen, new OxyRect(at.X, at.Y - 3.6, KeyEntry.SwatchWidth, 7.2))))];
 
     protected override PlotModel Plot()
     {
@@ -45,13 +48,15 @@ internal sealed record ShareChart(string Across, IReadOnlyList<string> Terms, IR
         TitleBelow(pen, plot, Across);
     }
 
+    private Tile TileOf(int part) => part == Parts.Count - 1 ? Tile.Unused : part == Parts.Count - 2 ? Tile.Safety : Tile.Of(part);
+
     private void AddBar(PlotModel plot, int row)
     {
         double from = 0;
-        for (int term = 0; term < Terms.Count; term++)
+        for (int part = 0; part < Parts.Count; part++)
         {
-            var share = Bars[row].Shares[term];
-            if (share > 0) plot.Annotations.Add(new TileAnnotation(Tile.Of(term), from, from + share, row) { YAxisKey = Upright });
+            var share = Bars[row].Shares[part];
+            if (share > 0) plot.Annotations.Add(new TileAnnotation(TileOf(part), from, from + share, row) { YAxisKey = Upright });
             from += share;
         }
     }

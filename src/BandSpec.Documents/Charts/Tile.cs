@@ -10,6 +10,9 @@ internal sealed record Tile(OxyColor Ground, OxyColor Hatch, int Slope)
 {
     private const double Spacing = 3.2;
 
+    /// <summary>What the safety factor keeps free, and what nothing needs: lighter than any term.</summary>
+    public static readonly Tile Safety = new(OxyColor.FromRgb(0xee, 0xf0, 0xf2), ChartStyle.Frame, 1), Unused = new(ChartStyle.White, ChartStyle.White, 0);
+
     private static readonly OxyColor[] Grounds =
     [
         OxyColor.FromRgb(0x1b, 0x3d, 0x66), OxyColor.FromRgb(0xbf, 0xd3, 0xe8), OxyColor.FromRgb(0x4f, 0x81, 0xb4), OxyColor.FromRgb(0xf3, 0xdf, 0xc4),
@@ -29,7 +32,7 @@ internal sealed record Tile(OxyColor Ground, OxyColor Hatch, int Slope)
 
     public void Fill(ChartPen pen, OxyRect area)
     {
-        pen.Fill([new(area.Left, area.Top), new(area.Right, area.Top), new(area.Right, area.Bottom), new(area.Left, area.Bottom)], Ground, new Stroke(ChartStyle.White, 0.6));
+        pen.Fill([new(area.Left, area.Top), new(area.Right, area.Top), new(area.Right, area.Bottom), new(area.Left, area.Bottom)], Ground, this == Unused ? new Stroke(ChartStyle.Frame, 0.5) : new Stroke(ChartStyle.White, 0.6));
         if (Slope == 0 || area.Width < 1) return;
         for (var x = area.Left - area.Height + Spacing / 2; x < area.Right; x += Spacing) Lean(pen, area, x);
     }

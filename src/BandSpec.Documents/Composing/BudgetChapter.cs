@@ -16,7 +16,7 @@ internal static class BudgetChapter
         yield return c.Table(c.Words["budget.table"],
             [
                 c.Column("term"), c.Column("region"), c.Column("mean", Align.Decimal, Percent), c.Column("sample", Align.Decimal, Percent),
-                c.Column("long-run", Align.Decimal, Percent), c.Column("limit", Align.Decimal, "±" + Percent), c.Column("capability", Align.Decimal),
+                c.Column("long-run", Align.Decimal, Percent), c.Column("limit", Align.Decimal, "±" + Percent), c.Column("capability", Align.Decimal), c.Column("outside", Align.Decimal, "ppm"),
             ],
             TermGroups.All.SelectMany(group => Group(c, group)), c.Words.Say("budget.table-remark", ("held", c.View.Terms.Any(t => t.Held))));
     }
@@ -30,12 +30,12 @@ internal static class BudgetChapter
     }
 
     private static Row Row(Composition c, DerivedView d) =>
-        new([c.Words["derived." + d.Key], Region(c, d.Region), "", "", "", d.Limit, ""]);
+        new([c.Words["derived." + d.Key], Region(c, d.Region), "", "", "", d.Limit, "", ""]);
 
     private static Row Row(Composition c, TermView t)
     {
         var name = t.Name.Length > 0 ? (Phrase)t.Name : c.Words["term." + t.Key];
-        return new([t.Held ? name + "\u00a0*" : name, Region(c, t.Region), t.Added, t.SigmaSample, t.SigmaLongRun, t.Limit, t.Capability]);
+        return new([t.Held ? name + "\u00a0*" : name, Region(c, t.Region), t.Added, t.SigmaSample, t.SigmaLongRun, t.Limit, t.Capability, t.Outside]);
     }
 
     private static Phrase Region(Composition c, RegionView? region) => region is null ? c.Words["all-regions"] : c.Region(region);

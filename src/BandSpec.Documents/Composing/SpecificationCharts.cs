@@ -22,6 +22,8 @@ internal sealed class SpecificationCharts
 
     private IReadOnlyList<DwellBin> Dwell { get; }
 
+    private bool HasDesign => _specification.Application.Requirement.SafetyFactor > 1;
+
     private string Sign => _view.DecimalSign;
 
     public BandChart Band
@@ -30,8 +32,9 @@ internal sealed class SpecificationCharts
         {
             var worst = _specification.Bands.Worst;
             return new BandChart(
-                new(_words.Plain("axis.temperature"), _words.Plain("axis.error"), _words.Plain("axis.dwell"), _words.Plain("key.allowed"), _words.Plain("key.maximum"), _words.Plain("key.typical"), _words.Plain("key.plan"), _words.Plain("key.worst")),
-                OverTemperature(nodes => nodes.Min(n => n.Allowed.Percent)), OverTemperature(nodes => nodes.Max(n => n.Maximum.Percent)), OverTemperature(nodes => nodes.Max(n => n.Typical.Percent)),
+                new(_words.Plain("axis.temperature"), _words.Plain("axis.error"), _words.Plain("axis.dwell"), _words.Plain("key.allowed"), _words.Plain("key.design"), _words.Plain("key.maximum"), _words.Plain("key.typical"), _words.Plain("key.plan"), _words.Plain("key.worst")),
+                OverTemperature(nodes => nodes.Min(n => n.Allowed.Percent)), HasDesign ? OverTemperature(nodes => nodes.Min(n => n.Design.Percent)) : [],
+                OverTemperature(nodes => nodes.Max(n => n.Maximum.Percent)), OverTemperature(nodes => nodes.Max(n => n.Typical.Percent)),
                 [.. _specification.Choice.Plan.Temperatures.Select(t => t.Celsius)], new Spot(worst.Temperature.Celsius, worst.Maximum.Percent), Dwell) { DecimalSign = Sign };
         }
     }
@@ -43,8 +46,9 @@ internal sealed class SpecificationCharts
             var worst = _specification.Bands.Worst;
             var nodes = _specification.Bands.Nodes.Where(n => n.Region == worst.Region && n.Temperature == worst.Temperature).OrderBy(n => n.PressureFraction).ToList();
             return new PressureChart(
-                new(_words.Plain("axis.pressure"), _words.Plain("axis.error"), _words.Plain("key.allowed"), _words.Plain("key.maximum"), _words.Plain("key.typical")),
-                OverPressure(nodes, n => n.Allowed.Percent), OverPressure(nodes, n => n.Maximum.Percent), OverPressure(nodes, n => n.Typical.Percent)) { DecimalSign = Sign };
+                new(_words.Plain("axis.pressure"), _words.Plain("axis.error"), _words.Plain("key.allowed"), _words.Plain("key.design"), _words.Plain("key.maximum"), _words.Plain("key.typical")),
+                OverPressure(nodes, n => n.Allowed.Percent), HasDesign ? OverPressure(nodes, n => n.Design.Percent) : [],
+                OverPressure(nodes, n => n.Maximum.Percent), OverPressure(nodes, n => n.Typical.Percent)) { DecimalSign = Sign };
         }
     }
 

@@ -39,7 +39,7 @@ internal static class Look
     public static readonly TextStyle FactName = new(8.8, 12.4, Face.Regular, Soft);
     public static readonly TextStyle FactValue = new(8.8, 12.4, Face.Regular, Ink);
     public static readonly TextStyle KeyName = new(8.2, 11, Face.SemiBold, Soft);
-    public static readonly TextStyle KeyValue = new(19, 24, Face.SemiBold, Ink);
+    public static readonly TextStyle KeyValue = new(18, 24, Face.SemiBold, Ink);
     public static readonly TextStyle Running = new(8.2, 10, Face.Regular, Soft);
     public static readonly TextStyle Stamp = new(8.8, 11, Face.SemiBold, White);
 

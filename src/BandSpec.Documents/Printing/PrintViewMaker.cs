@@ -43,7 +43,8 @@ internal sealed class PrintViewMaker
 
     private string Limit(PercentOfSpan value) => Shown(Rounded.Down(value.Percent, _requirement.Rounding.Limit.Percent));
 
-    private string Sigma(PercentOfSpan value) => Shown(Rounded.Nearest(value.Percent, SigmaDecimals));
+    // What is nothing by its nature is told apart from what rounds to nothing.
+    private string Sigma(PercentOfSpan value) => value.Percent == 0 ? "0" : Shown(Rounded.Nearest(value.Percent, SigmaDecimals));
 
     private string Margin(double value) => double.IsInfinity(value) ? "\u221e" : Shown(Rounded.Down(value, MarginStep));
 
@@ -110,9 +111,10 @@ internal sealed class PrintViewMaker
             Sigma(share.Added), Sigma(share.SigmaSample), Sigma(share.SigmaLongRun),
             allotted is null ? "" : Limit(allotted.Limit),
             allotted is null ? "" : double.IsInfinity(allotted.Capability) ? "\u221e" : Shown(Rounded.Down(allotted.Capability, CapabilityStep)),
+            allotted is null ? "" : Shown(Rounded.PerMillion(allotted.OutsideFraction)),
             allotted?.Held ?? false);
     }
 
-    private IEnumerable<DerivedView> Derived() => _specification.DerivedLimits.Select(d =>
+    private IEnumerable<DerivedView> Derived() => _specification.DerivedLimits.GroupBy(d => d.Name).SelectMany(g => g).Select(d =>
         new DerivedView(TermGroups.OfDerived(d.Name), d.Name, d.Region is { } r ? Regions[r] : null, Limit(d.Limit)));
 }

@@ -6,7 +6,7 @@ namespace BandSpec.Documents.Printing;
 /// A figure as it is printed, rounded once: digits, a point, and a minus sign as in files. What a page shows is the same letters with the
 /// typesetter's minus and the language's decimal sign, so page and file cannot disagree.
 /// </summary>
-internal readonly record struct Rounded(string Plain)
+internal readonly record struct Rounded(string Plain, bool IsBound = false)
 {
     // A figure that lies on a step but for the last bits of its calculation counts as being on it.
     private const double OnStep = 1e-7;
@@ -32,11 +32,11 @@ internal readonly record struct Rounded(string Plain)
     public static Rounded Given(double value, int decimals) =>
         Nearest(value, Math.Max(decimals, Decimals(Math.Abs(Math.Round(value, 9)))));
 
-    /// <summary>A probability in parts per million, rounded up to two figures; what is smaller than a billionth of a part is told so.</summary>
+    /// <summary>A probability in parts per million, rounded up to two figures, and to a thousandth at least: a page says that it is less.</summary>
     public static Rounded PerMillion(double probability)
     {
         var parts = probability * 1e6;
-        if (parts < 0.001) return new Rounded("<0.001");
+        if (parts < 0.001) return new Rounded("0.001", IsBound: true);
         var second = Math.Floor(Math.Log10(parts)) - 1;
         var step = Math.Pow(10, second);
         return Write((decimal)(Math.Ceiling(parts / step - OnStep) * step), Math.Max(0, (int)-second));
@@ -50,7 +50,7 @@ internal readonly record struct Rounded(string Plain)
     }
 
     /// <summary>As shown on a page of a language that writes this decimal sign; long figures are grouped by threes.</summary>
-    public string Shown(string decimalSign) => Grouped(Plain.Replace("-", "\u2212", StringComparison.Ordinal).Replace("<", "< ", StringComparison.Ordinal)).Replace(".", decimalSign, StringComparison.Ordinal);
+    public string Shown(string decimalSign) => (IsBound ? "<\u00a0" : "") + Grouped(Plain.Replace("-", "\u2212", StringComparison.Ordinal)).Replace(".", decimalSign, StringComparison.Ordinal);
 
     // Four figures stay together (ISO 80000-1 leaves it open), five and more are grouped with a space that does not break.
     private static string Grouped(string text)

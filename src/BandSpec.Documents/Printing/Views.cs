@@ -41,9 +41,9 @@ internal sealed record PlanView(
 
 /// <summary>
 /// A term's line in the budget, errors in %FS. The group is <c>reference</c>, <c>accuracy</c>, <c>thermal</c>, <c>ageing</c>,
-/// <c>production</c> or <c>further</c>. Region, limit and capability are empty where there is none; the name only for further terms.
+/// <c>production</c> or <c>further</c>. Outside is the fraction of units beyond the limit in ppm. Region, limit, capability and outside are empty where there is none; the name only for further terms.
 /// </summary>
-internal sealed record TermView(string Group, string Key, string Name, RegionView? Region, string Added, string SigmaSample, string SigmaLongRun, string Limit, string Capability, bool Held);
+internal sealed record TermView(string Group, string Key, string Name, RegionView? Region, string Added, string SigmaSample, string SigmaLongRun, string Limit, string Capability, string Outside, bool Held);
 
 /// <summary>The limit in %FS of a figure derived from several readings.</summary>
 internal sealed record DerivedView(string Group, string Key, RegionView? Region, string Limit);

@@ -76,7 +76,7 @@ internal sealed partial class Words
         }
     }
 
-    // A figure and its unit stay on one line; a word of up to four letters after a figure is taken for a unit, which does no harm.
-    [GeneratedRegex(@"(?<=\d) (?=[°%]|\p{L}{1,4}\b)")]
+    // A figure stays on one line with its unit and with the sign before it; a word of up to four letters after a figure is taken for a unit, which does no harm.
+    [GeneratedRegex(@"(?<=\d) (?=[°%]|\p{L}{1,4}\b)| (?=[≥≤=] ?\d)|(?<=[≥≤=]) (?=\d)")]
     private static partial Regex SpaceBeforeUnit();
 }

@@ -10,8 +10,8 @@ internal static class SampleCharts
     private static readonly DwellBin[] Dwell = [new(-20, 10, 4.5, "1 500 h"), new(10, 60, 18.2, "6 000 h"), new(60, 115, 66.7, "22 000 h"), new(115, 150, 10.6, "3 500 h")];
 
     public static readonly BandChart Band = new(
-        new("Temperature, °C", "Error, %FS", "Dwell, % of service life", "Allowed", "Maximum", "Typical", "Compensation temperature", "Least margin"),
-        Allowed, Curve(0.62), Curve(0.4), [-10, 25, 80, 140], new(130, 0.93), Dwell);
+        new("Temperature, °C", "Error, %FS", "Dwell, % of service life", "Allowed", "Divided by the safety factor", "Maximum", "Typical", "Compensation temperature", "Least margin"),
+        Allowed, [.. Allowed.Select(s => s with { Y = s.Y / 1.15 })], Curve(0.62), Curve(0.4), [-10, 25, 80, 140], new(130, 0.93), Dwell);
 
     public static Figure BandFigure() => new("Figure 1", "Error band over temperature, with the dwell profile", "Band chart: the maximum error lies inside the allowed error everywhere.", Band, "band.svg");
 
@@ -24,8 +24,8 @@ internal static class SampleCharts
     ];
 
     private static PressureChart Pressure => new(
-        new("Pressure, bar", "Error, %FS", "Allowed", "Maximum", "Typical"),
-        [new(0, 1), new(25, 1)],
+        new("Pressure, bar", "Error, %FS", "Allowed", "", "Maximum", "Typical"),
+        [new(0, 1), new(25, 1)], [],
         [.. Enumerable.Range(0, 11).Select(i => new Spot(2.5 * i, 0.7 + 0.02 * i + 0.1 * Math.Sin(0.314 * i)))],
         [.. Enumerable.Range(0, 11).Select(i => new Spot(2.5 * i, 0.5 + 0.01 * i))]);
 

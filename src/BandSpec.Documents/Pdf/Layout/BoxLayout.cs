@@ -38,7 +38,7 @@ internal static class BoxLayout
     public static Slab Lay(Headline headline, double width)
     {
         var share = width / headline.Figures.Count;
-        var cells = headline.Figures.Select((f, i) => Cell(f, i == 0 ? 0 : Inset, share - Inset)).ToList();
+        var cells = headline.Figures.Select((f, i) => Cell(f, i == 0 ? 0 : Inset, i == 0 ? share - Inset : share - 2 * Inset)).ToList();
         var height = cells.Max(c => c.Height) + 12;
         var marks = new List<Mark> { new RuleMark(0, 0, width, 0, 0.9, Look.Ink), new RuleMark(0, height, width, height, 0.5, Look.Rule) };
         for (int i = 0; i < cells.Count; i++)
@@ -67,7 +67,9 @@ internal static class BoxLayout
     {
         var group = new Tag(TagKind.Div);
         IEnumerable<Slab> Set(Phrase text, TextStyle style) => TextLayout.Lines(LineBreaker.Break(text, style, width), style, left, group.Child(TagKind.P));
-        return Stack([.. Set(figure.Name, Look.KeyName), .. Set(figure.Value, Look.KeyValue), .. figure.Remark.IsEmpty ? [] : Set(figure.Remark, Look.Fine)]);
+        // A long figure is set smaller rather than broken: it is to be read at a glance.
+        var fit = Math.Min(1, width / LineBreaker.NaturalWidth(figure.Value, Look.KeyValue));
+        return Stack([.. Set(figure.Name, Look.KeyName), .. Set(figure.Value, Look.KeyValue with { Size = Look.KeyValue.Size * fit }), .. figure.Remark.IsEmpty ? [] : Set(figure.Remark, Look.Fine)]);
     }
 
     private static IEnumerable<Slab> Text(Phrase text, TextStyle style, double width, Tag group) =>

@@ -5,6 +5,8 @@ namespace BandSpec.Documents.Pdf.Layout;
 /// <summary>The column widths of a table, and where in a column the decimal points stand. Widths are without the gaps between columns.</summary>
 internal sealed class ColumnWidths
 {
+    private const double MostSpare = 40;
+
     private readonly Table _table;
 
     public ColumnWidths(Table table, double width)
@@ -12,11 +14,14 @@ internal sealed class ColumnWidths
         _table = table;
         var room = width - Look.ColumnGap * (table.Columns.Count - 1);
         Fractions = [.. table.Columns.Select((c, i) => c.Align == Align.Decimal ? Cells(i).Max(FractionWidth) : 0)];
-        Widths = Share([.. table.Columns.Select((_, i) => Narrowest(i))], [.. table.Columns.Select((_, i) => Natural(i))], room);
+        Widths = WithRest(Share([.. table.Columns.Select((_, i) => Narrowest(i))], [.. table.Columns.Select((_, i) => Natural(i))], room), room);
         Lefts = [.. Enumerable.Range(0, Widths.Count).Select(i => Widths.Take(i).Sum() + i * Look.ColumnGap)];
     }
 
     public IReadOnlyList<double> Widths { get; }
+
+    /// <summary>Width of the whole table: narrower than the text where its columns need no more.</summary>
+    public double Total => Lefts[^1] + Widths[^1];
 
     public IReadOnlyList<double> Lefts { get; }
 
@@ -47,11 +52,18 @@ internal sealed class ColumnWidths
         return Math.Max(head, body);
     }
 
-    // Room to spare goes to all columns alike in proportion to their text; lack of room is taken from the columns that can be broken.
-    private static IReadOnlyList<double> Share(double[] narrowest, double[] natural, double room)
+    // A last column of text takes what is left; a table of figures stays as narrow as it reads best.
+    private double[] WithRest(double[] widths, double room)
+    {
+        if (_table.Columns[^1].Align == Align.Left) widths[^1] += Math.Max(0, room - widths.Sum());
+        return widths;
+    }
+
+    // Room to spare goes to all columns alike, up to what the eye bridges; lack of room is taken from the columns that can be broken.
+    private static double[] Share(double[] narrowest, double[] natural, double room)
     {
         double least = narrowest.Sum(), most = natural.Sum();
-        if (most <= room) return [.. natural.Select(w => w + (room - most) / natural.Length)];
+        if (most <= room) return [.. natural.Select(w => w + Math.Min(MostSpare, (room - most) / natural.Length))];
         if (least >= room) return [.. narrowest.Select(w => w * room / least)];
         var share = (room - least) / (most - least);
         return [.. narrowest.Zip(natural, (few, many) => few + share * (many - few))];

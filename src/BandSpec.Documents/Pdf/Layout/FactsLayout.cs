@@ -36,7 +36,9 @@ internal static class FactsLayout
             var across = Enumerable.Range(0, facts.Columns).Select(c => c * rows + row).Where(i => i < cells.Count).ToList();
             var marks = across.SelectMany((i, c) => cells[i].Marks.Select(m => m.Moved(c * (column + Gutter), 0)));
             var lines = across.Select((_, c) => (Mark)new RuleMark(c * (column + Gutter), 0, c * (column + Gutter) + column, 0, 0.35, Look.Hairline));
-            yield return new Slab(across.Max(i => cells[i].Height), [.. lines, .. marks]) { Before = row == 0 ? Look.ParagraphGap + 2 : 0, KeepWithNext = row == 0 && rows > 1 };
+            var height = across.Max(i => cells[i].Height);
+            if (row == rows - 1) lines = lines.Concat(lines.Select(l => l.Moved(0, height)));
+            yield return new Slab(height, [.. lines, .. marks]) { Before = row == 0 ? Look.ParagraphGap + 2 : 0, KeepWithNext = row == 0 && rows > 1 };
         }
     }
 

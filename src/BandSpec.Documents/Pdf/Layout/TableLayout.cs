@@ -5,7 +5,10 @@ namespace BandSpec.Documents.Pdf.Layout;
 /// <summary>A table as slabs: caption, heading that repeats on each page, one slab a row, and a closing rule.</summary>
 internal sealed class TableLayout
 {
+    private const double CaptionGap = 2;
+
     private readonly Table _table;
+    private readonly double _textWidth;
     private readonly double _width;
     private readonly ColumnWidths _columns;
     private readonly Tag _tag = new(TagKind.Table);
@@ -13,7 +16,8 @@ internal sealed class TableLayout
 
     private TableLayout(Table table, double width)
     {
-        (_table, _width, _columns) = (table, width, new ColumnWidths(table, width));
+        (_table, _textWidth, _columns) = (table, width, new ColumnWidths(table, width));
+        _width = _columns.Total;
         _body = _tag.Child(TagKind.TBody);
     }
 
@@ -22,7 +26,7 @@ internal sealed class TableLayout
     private List<Slab> Slabs(string continued)
     {
         var captionTag = _tag.Child(TagKind.Caption).Child(TagKind.P);
-        List<Slab> slabs = [.. Caption(Labelled(_table.Label, _table.Caption), captionTag)];
+        List<Slab> slabs = [.. Caption(Labelled(_table.Label, _table.Caption), captionTag, _textWidth), Slab.Gap(CaptionGap) with { KeepWithNext = true }];
         slabs[0] = slabs[0] with { Before = Look.BlockGap };
         var heading = new TableHeading(_table, _columns, _width);
         slabs.Add(heading.Lay(_tag.Child(TagKind.THead)) with { KeepWithNext = true });
@@ -40,7 +44,7 @@ internal sealed class TableLayout
         return slabs;
     }
 
-    private static IEnumerable<Slab> Caption(Phrase text, Tag? tag, double width = double.MaxValue) =>
+    private static IEnumerable<Slab> Caption(Phrase text, Tag? tag, double width) =>
         TextLayout.Lines(LineBreaker.Break(text, Look.Caption, width), Look.Caption, 0, tag).Select(s => s with { KeepWithNext = true });
 
     public static Phrase Labelled(string label, Phrase caption) =>
@@ -49,15 +53,15 @@ internal sealed class TableLayout
     // What stands again over the rows on the next page is decoration to a reading program: it has read it already.
     private Slab Again(TableHeading heading, string continued)
     {
-        var caption = Caption(((Phrase)_table.Label).In(Lettering.Bold) + $" {continued}", null).ToList();
+        var caption = Caption(((Phrase)_table.Label).In(Lettering.Bold) + $" {continued}", null, _textWidth).ToList();
         var head = heading.Lay(null);
-        var height = caption.Sum(s => s.Height);
+        var height = caption.Sum(s => s.Height) + CaptionGap;
         return new Slab(height + head.Height, [.. caption.SelectMany(s => s.Marks), .. head.Marks.Select(m => m.Moved(0, height))]);
     }
 
     private IEnumerable<Slab> Remark()
     {
         if (_table.Remark.IsEmpty) return [];
-        return [Slab.Gap(3) with { KeepWithNext = true }, .. TextLayout.Lines(LineBreaker.Break(_table.Remark, Look.Fine, _width), Look.Fine, 0, new Tag(TagKind.P))];
+        return [Slab.Gap(3) with { KeepWithNext = true }, .. TextLayout.Lines(LineBreaker.Break(_table.Remark, Look.Fine, _textWidth), Look.Fine, 0, new Tag(TagKind.P))];
     }
 }

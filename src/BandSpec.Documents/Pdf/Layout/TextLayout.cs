@@ -26,7 +26,7 @@ internal static class TextLayout
     {
         var style = paragraph.Voice switch { Voice.Lead => Look.Lead, Voice.Fine => Look.Fine, _ => Look.Body };
         var lines = LineBreaker.Break(paragraph.Text, style, width);
-        return Spaced(Kept(Lines(lines, style, 0, new Tag(TagKind.P))), Look.ParagraphGap);
+        return Spaced(Kept(Lines(lines, style, 0, new Tag(TagKind.P))), paragraph.Voice == Voice.Lead ? Look.BlockGap + 3 : Look.ParagraphGap);
     }
 
     public static IEnumerable<Slab> Lay(Bullets bullets, double width)
