@@ -1,5 +1,6 @@
 using BandSpec.Documents.Model;
 using BandSpec.Documents.Pdf;
+using static System.FormattableString;
 
 namespace BandSpec.Tests.Documents;
 
@@ -17,6 +18,14 @@ internal static class SampleDocument
         new Stamp(standing, standing == Standing.Refused ? "NOT FEASIBLE" : "DRAFT", standing == Standing.Refused ? "No compensation plan keeps the allowed error." : "Not released for delivery."));
 
     public static Document Full(Standing standing = Standing.Draft) => new(Frame(standing), [.. Front(), .. Tables(), .. Charts(), .. Texts()]);
+
+    /// <summary>One of every block, short enough to read whole.</summary>
+    public static Document Brief() => new(Frame(),
+    [
+        .. Front(),
+        .. Tables().Take(4),
+        .. Texts().Where(b => b is not Paragraph).Take(9),
+    ]);
 
     private static IEnumerable<Block> Front() =>
     [
@@ -43,7 +52,7 @@ internal static class SampleDocument
         ], "Maximum and typical are rounded up to 0.05 %FS."),
         new Heading(2, "1.1", "A long table"),
         new Table("Table 2", "Verification limits", [new("Point"), new("Temperature", Align.Decimal, "°C"), new("Pressure", Align.Decimal, "bar"), new("Direction", Align.Centre), new("Lower", Align.Decimal, "V"), new("Nominal", Align.Decimal, "V"), new("Upper", Align.Decimal, "V")],
-            [new(["At the reference temperature"], RowKind.Section), .. Enumerable.Range(1, 60).Select(i => new Row([$"V{i:00}", i % 7 == 0 ? "—" : $"{i * 2.5:0.0}", $"{i % 6 * 5}", i % 2 == 0 ? "rising" : "falling", $"{i * 0.07:0.000}", $"{i * 0.07 + 0.01:0.000}", $"{i * 0.07 + 0.02:0.000}"])), new(["Second part"], RowKind.Section), new(["", "1", "2", "rising", "0.1", "10.25", "100.375"])]),
+            [new(["At the reference temperature"], RowKind.Section), .. Enumerable.Range(1, 60).Select(i => new Row([$"V{i:00}", i % 7 == 0 ? "—" : Invariant($"{i * 2.5:0.0}"), $"{i % 6 * 5}", i % 2 == 0 ? "rising" : "falling", Invariant($"{i * 0.07:0.000}"), Invariant($"{i * 0.07 + 0.01:0.000}"), Invariant($"{i * 0.07 + 0.02:0.000}")])), new(["Second part"], RowKind.Section), new(["", "1", "2", "rising", "0.1", "10.25", "100.375"])]),
         new Table("Table 3", "A row taller than a page", [new("Name"), new("Story")], [new(["Short", "one line"]), new(["Tall", string.Join(' ', Enumerable.Range(1, 1500).Select(i => $"word{i}"))]), new(["After", "the tall row"])]),
     ];
 
