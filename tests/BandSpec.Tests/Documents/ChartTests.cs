@@ -65,10 +65,12 @@ public sealed class ChartTests
     {
         var chart = SampleCharts.Band with { Words = SampleCharts.Band.Words with { Across = "温度" } };
         Assert.ThrowsAny<Exception>(() => BandSpec.Documents.Pdf.PdfWriter.Write(
-            new Document(SampleDocument.Frame(), [new Figure("F", "c", "a", chart, "f.svg")]), BandSpec.Documents.Pdf.PageGeometry.A4, SampleDocument.Facts()));
+            new Document(SampleDocument.Frame(), [new Figure("F", "c", "a", chart, "f.svg")]), BandSpec.Documents.Pdf.PageGeometry.A4,
+            SampleDocument.Facts()));
     }
 
-    private static XElement Draw(string file) => XDocument.Parse(SvgPen.Draw(All.Single(f => f.FileName == file).Chart, "A <title> & more", "words")).Root!;
+    private static XElement Draw(string file) =>
+        XDocument.Parse(SvgPen.Draw(All.Single(f => f.FileName == file).Chart, "A <title> & more", "words")).Root!;
 
     private static double Number(string text) => double.Parse(text, System.Globalization.CultureInfo.InvariantCulture);
 

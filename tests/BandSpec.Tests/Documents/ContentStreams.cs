@@ -27,7 +27,8 @@ internal static partial class ContentStreams
     /// The first bracket that closes another than the one opened last; none when all is well. Marked content and text objects have to be
     /// nested in one another; saved graphics states only among themselves (ISO 32000-1, 14.6.1 and 8.4.2).
     /// </summary>
-    public static string? WrongNesting(string content) => WrongNesting(content, "q", "Q") ?? WrongNesting(content, "BT", "ET", "EMC", "BDC", "BMC");
+    public static string? WrongNesting(string content) =>
+        WrongNesting(content, "q", "Q") ?? WrongNesting(content, "BT", "ET", "EMC", "BDC", "BMC");
 
     private static string? WrongNesting(string content, params string[] kinds)
     {
@@ -35,7 +36,10 @@ internal static partial class ContentStreams
         foreach (Match match in Bracket().Matches(content))
         {
             if (!kinds.Any(kind => match.Value.EndsWith(kind, StringComparison.Ordinal))) continue;
-            var (opens, closes) = match.Value.Trim() switch { "BT" => ("ET", ""), "q" => ("Q", ""), "ET" or "Q" or "EMC" => ("", match.Value.Trim()), _ => ("EMC", "") };
+            var (opens, closes) = match.Value.Trim() switch
+            {
+                "BT" => ("ET", ""), "q" => ("Q", ""), "ET" or "Q" or "EMC" => ("", match.Value.Trim()), _ => ("EMC", "")
+            };
             if (opens.Length > 0) open.Push(opens);
             else if (open.Count == 0 || open.Pop() != closes) return $"{closes} at {match.Index}";
         }

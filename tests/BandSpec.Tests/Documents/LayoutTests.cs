@@ -37,7 +37,9 @@ public sealed class LayoutTests
         foreach (var mark in DocumentLayout.Lay(SampleDocument.Full(), page).SelectMany(marks => marks))
         {
             var (left, top, right, bottom) = Extent(mark);
-            Assert.True(left >= page.Left - 0.01 && right <= page.Right + 0.01 && top >= page.Top - 0.01 && bottom <= page.Bottom + 0.01, mark.ToString());
+            Assert.True(
+                left >= page.Left - 0.01 && right <= page.Right + 0.01 && top >= page.Top - 0.01 && bottom <= page.Bottom + 0.01,
+                mark.ToString());
         }
     }
 
@@ -50,7 +52,8 @@ public sealed class LayoutTests
             var boxes = marks.OfType<TextMark>().Select(Extent).OrderBy(b => b.Top).ToList();
             for (int i = 0; i < boxes.Count; i++)
                 for (int k = i + 1; k < boxes.Count && boxes[k].Top < boxes[i].Bottom - 0.5; k++)
-                    Assert.False(boxes[k].Left < boxes[i].Right - 0.5 && boxes[i].Left < boxes[k].Right - 0.5, $"{boxes[i]} and {boxes[k]}");
+                    Assert.False(
+                        boxes[k].Left < boxes[i].Right - 0.5 && boxes[i].Left < boxes[k].Right - 0.5, $"{boxes[i]} and {boxes[k]}");
         }
     }
 
@@ -67,7 +70,8 @@ public sealed class LayoutTests
     [Fact]
     public void A_row_taller_than_a_page_is_split_between_lines_and_nothing_is_cut()
     {
-        var words = DocumentLayout.Lay(SampleDocument.Full(), PageGeometry.A4).SelectMany(p => p).OfType<TextMark>().SelectMany(t => t.Text.Split(' ')).ToHashSet();
+        var words = DocumentLayout.Lay(
+            SampleDocument.Full(), PageGeometry.A4).SelectMany(p => p).OfType<TextMark>().SelectMany(t => t.Text.Split(' ')).ToHashSet();
         Assert.All(Enumerable.Range(1, 1500), i => Assert.Contains($"word{i}", words));
     }
 
@@ -76,7 +80,9 @@ public sealed class LayoutTests
     {
         for (int lines = 40; lines < 60; lines++)
         {
-            Block[] blocks = [.. Enumerable.Range(1, lines).Select(i => (Block)new Paragraph($"line {i}")), new Heading(1, "1", "Heading"), new Paragraph("after")];
+            Block[] blocks = [
+                .. Enumerable.Range(1, lines).Select(i => (Block)new Paragraph($"line {i}")), new Heading(1, "1", "Heading"),
+                new Paragraph("after")];
             var pages = DocumentLayout.Lay(new Document(SampleDocument.Frame(), blocks), PageGeometry.A4);
             Assert.All(pages, page => Assert.NotEqual("Heading", page.OfType<TextMark>().Last().Text.Split('\u00a0')[^1]));
         }

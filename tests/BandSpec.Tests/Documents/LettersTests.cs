@@ -13,7 +13,8 @@ public sealed class LettersTests
     public void These_can_be_set(string text) => Assert.Empty(Letters.Missing(text));
 
     [Fact]
-    public void What_no_face_has_is_told_once_each_in_order() => Assert.Equal(["圧", "力", "\U0001F600"], Letters.Missing("圧力 圧 \U0001F600 bar"));
+    public void What_no_face_has_is_told_once_each_in_order() =>
+        Assert.Equal(["圧", "力", "\U0001F600"], Letters.Missing("圧力 圧 \U0001F600 bar"));
 
     [Fact]
     public void A_letter_that_the_wanted_face_lacks_is_set_in_one_that_has_it() =>

@@ -17,5 +17,7 @@ public sealed class MarkdownWriterTests
 
     [Fact]
     public void Emphasis_beside_signs_is_written_so_that_every_reader_sees_it() =>
-        Assert.Equal("**bold** <i>(x)</i> C<sub>pk</sub> 10<sup>−5</sup>", MarkdownText.OneLine(Markup.Parse("**bold** *(x)* C_{pk} 10^{−5}")));
+        Assert.Equal(
+            "**bold** **±1** a<i>(x)</i>b C<sub>pk</sub> 10<sup>−5</sup>",
+            MarkdownText.OneLine(Markup.Parse("**bold** **±1** a*(x)*b C_{pk} 10^{−5}")));
 }

@@ -9,7 +9,8 @@ public sealed class MarkupTests
     public void Marks_set_letters_whatever_stands_beside_them() => Assert.Equal(
         [
             new("|d"), new("T", Lettering.Italic), new("/d"), new("t", Lettering.Italic), new("| "),
-            new("E", Lettering.Bold), new("TEB", Lettering.Bold, Shift.Lowered), new(" 10"), new("\u22125", Shift: Shift.Raised), new(" a*b", Lettering.Code),
+            new("E", Lettering.Bold), new("TEB", Lettering.Bold, Shift.Lowered), new(" 10"), new("\u22125", Shift: Shift.Raised),
+            new(" a*b", Lettering.Code),
         ],
         Markup.Parse("|d*T*/d*t*| **E_{TEB}** 10^{\u22125}` a*b`").Runs);
 

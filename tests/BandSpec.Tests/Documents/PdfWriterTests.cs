@@ -31,9 +31,14 @@ public sealed class PdfWriterTests
     [Fact]
     public void Mupdf_draws_every_page_without_a_warning()
     {
-        var lines = Tools.Run("mutool", Sample.Value, path => $"draw -o /dev/null {path}").Split('\n', StringSplitOptions.RemoveEmptyEntries);
+        var lines = Tools.Run(
+            "mutool", Sample.Value, path => $"draw -o /dev/null {path}").Split('\n', StringSplitOptions.RemoveEmptyEntries);
         // A mupdf built without colour management says so for every file that has a profile.
-        Assert.All(lines, line => Assert.True(line.StartsWith("page ", StringComparison.Ordinal) || line.Contains("ICC support is not available", StringComparison.Ordinal), line));
+        Assert.All(
+            lines,
+            line => Assert.True(
+                line.StartsWith("page ", StringComparison.Ordinal) || line.Contains("ICC support is not available", StringComparison.Ordinal),
+                line));
     }
 
     [Fact]
@@ -56,11 +61,15 @@ public sealed class PdfWriterTests
     public void Text_is_found_in_reading_order()
     {
         var text = Tools.Run("pdftotext", Sample.Value, path => $"-layout {path} -");
-        string[] inOrder = ["DRAFT", "Custom error-band specification", "Brine reinjection line", "±1.0 %FS", "Figure 1", "1 Error band by region", "Table 1", "Table 2 (continued)", "Table 3", "2 Charts", "Figure 5", "Ωμέγα, Давление, Übergröße, Łódź", "Small print at the end."];
+        string[] inOrder = [
+            "DRAFT", "Custom error-band specification", "Brine reinjection line", "±1.0 %FS", "Figure 1", "1 Error band by region",
+            "Table 1", "Table 2 (continued)", "Table 3", "2 Charts", "Figure 5", "Ωμέγα, Давление, Übergröße, Łódź",
+            "Small print at the end."];
         var at = 0;
         foreach (var piece in inOrder)
         {
-            var found = text.Replace('\u00a0', ' ').Replace("  ", " ", StringComparison.Ordinal).IndexOf(piece, at, StringComparison.Ordinal);
+            var found = text.Replace('\u00a0', ' ').Replace(
+                "  ", " ", StringComparison.Ordinal).IndexOf(piece, at, StringComparison.Ordinal);
             Assert.True(found >= 0, piece);
             at = found;
         }
@@ -90,7 +99,8 @@ public sealed class PdfWriterTests
     [Fact]
     public void What_is_attached_comes_back_byte_for_byte()
     {
-        var binary = new Attachment("a.bin", "application/octet-stream", "All bytes", Relationship.Data, [.. Enumerable.Range(0, 2000).Select(i => (byte)(i * 7))]);
+        var binary = new Attachment(
+            "a.bin", "application/octet-stream", "All bytes", Relationship.Data, [.. Enumerable.Range(0, 2000).Select(i => (byte)(i * 7))]);
         var empty = new Attachment("Ωμέγα.yaml", "application/yaml", "Nothing", Relationship.Source, []);
         var pdf = PdfWriter.Write(SampleDocument.Full(), PageGeometry.A4, SampleDocument.Facts(SampleDocument.Note, binary, empty));
         var back = SpecificationFile.Attachments(pdf);
@@ -99,7 +109,8 @@ public sealed class PdfWriterTests
     }
 
     [Fact]
-    public void A_file_that_is_no_pdf_is_told_so() => Assert.Throws<InvalidDataException>(() => SpecificationFile.Attachments("not a PDF at all"u8.ToArray()));
+    public void A_file_that_is_no_pdf_is_told_so() =>
+        Assert.Throws<InvalidDataException>(() => SpecificationFile.Attachments("not a PDF at all"u8.ToArray()));
 
     [Fact]
     public void A_letter_that_no_font_has_stops_the_drawing() =>

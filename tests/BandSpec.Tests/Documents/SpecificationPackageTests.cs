@@ -29,7 +29,8 @@ public sealed class SpecificationPackageTests
     public void Page_and_Markdown_show_the_same_figures()
     {
         var page = Plain(Tools.Run("pdftotext", Feasible.Value["specification.pdf"], path => $"-layout {path} -"));
-        var figures = System.Text.RegularExpressions.Regex.Matches(Markdown(Feasible.Value), @"(?<![\w.])\u2212?\d+\.\d+(?![\w.])").Select(m => m.Value).Distinct().ToList();
+        var figures = System.Text.RegularExpressions.Regex.Matches(
+            Markdown(Feasible.Value), @"(?<![\w.])\u2212?\d+\.\d+(?![\w.])").Select(m => m.Value).Distinct().ToList();
         Assert.True(figures.Count > 80);
         Assert.All(figures, figure => Assert.Contains(figure, page));
     }
@@ -50,7 +51,8 @@ public sealed class SpecificationPackageTests
     [Fact]
     public void A_printed_limit_is_never_wider_than_the_limit()
     {
-        var rows = Encoding.UTF8.GetString(Feasible.Value["test-points.csv"]).Split('\n', StringSplitOptions.RemoveEmptyEntries).Skip(1).Select(line => line.Split(',')).ToList();
+        var rows = Encoding.UTF8.GetString(Feasible.Value["test-points.csv"]).Split(
+            '\n', StringSplitOptions.RemoveEmptyEntries).Skip(1).Select(line => line.Split(',')).ToList();
         Assert.Equal(Drafts.Feasible.VerificationPoints.Count, rows.Count);
         foreach (var (point, row) in Drafts.Feasible.VerificationPoints.Zip(rows))
         {
@@ -81,7 +83,8 @@ public sealed class SpecificationPackageTests
     {
         var german = Drafts.Draw(Drafts.Feasible, Drafts.Options with { Language = "de" });
         Assert.Contains("Fehlerband-Spezifikation", Markdown(german));
-        static IEnumerable<string> Figures(string text) => System.Text.RegularExpressions.Regex.Matches(text, @"\d+[.,]\d+").Select(m => m.Value.Replace(',', '.')).Distinct().Order();
+        static IEnumerable<string> Figures(string text) =>
+            System.Text.RegularExpressions.Regex.Matches(text, @"\d+[.,]\d+").Select(m => m.Value.Replace(',', '.')).Distinct().Order();
         var english = Figures(Markdown(Feasible.Value)).ToHashSet();
         Assert.All(Figures(Markdown(german)), figure => Assert.Contains(figure, english));
         Assert.Equal(Feasible.Value["test-points.csv"], german["test-points.csv"]);
@@ -91,7 +94,8 @@ public sealed class SpecificationPackageTests
     [Fact]
     public void Inputs_are_named_by_digest_and_attached()
     {
-        Assert.Contains(Convert.ToHexStringLower(System.Security.Cryptography.SHA256.HashData(Drafts.Sources[0].Bytes.Span)), Markdown(Feasible.Value));
+        Assert.Contains(
+            Convert.ToHexStringLower(System.Security.Cryptography.SHA256.HashData(Drafts.Sources[0].Bytes.Span)), Markdown(Feasible.Value));
         var attached = SpecificationFile.Attachments(Feasible.Value["specification.pdf"]);
         Assert.Equal(Drafts.Sources.Select(s => s.Name), attached.Select(a => a.Name));
         Assert.All(Drafts.Sources.Zip(attached), pair => Assert.True(pair.First.Bytes.Span.SequenceEqual(pair.Second.Bytes.Span)));

@@ -25,7 +25,9 @@ public sealed class TemplateFolderTests
 
     [Fact]
     public void A_language_that_nobody_wrote_is_told_so() =>
-        Assert.Contains("the language 'fr' is not known", Assert.Throws<TemplateException>(() => Drafts.Draw(Drafts.Feasible, Drafts.Options with { Language = "fr" })).Message);
+        Assert.Contains(
+            "the language 'fr' is not known",
+            Assert.Throws<TemplateException>(() => Drafts.Draw(Drafts.Feasible, Drafts.Options with { Language = "fr" })).Message);
 
     [Fact]
     public void The_built_in_languages_have_the_same_entries()
@@ -48,7 +50,8 @@ public sealed class TemplateFolderTests
         if (expected is null)
             Assert.Contains("mine.txt", Drafts.Draw(Drafts.Feasible, Drafts.Options with { Templates = folder }).Keys);
         else
-            Assert.Contains($"In mine.txt, which this layout writes, {expected}", Assert.Throws<TemplateException>(() => Markdown(folder)).Message);
+            Assert.Contains(
+                $"In mine.txt, which this layout writes, {expected}", Assert.Throws<TemplateException>(() => Markdown(folder)).Message);
     }
 
     [Fact]
@@ -67,6 +70,7 @@ public sealed class TemplateFolderTests
 
         public string? Read(string path) => files.Where(f => f.Path == path).Select(f => f.Text).FirstOrDefault();
 
-        public IReadOnlyList<string> Files(string folder) => [.. files.Select(f => f.Path).Where(p => p.StartsWith(folder + "/", StringComparison.Ordinal))];
+        public IReadOnlyList<string> Files(string folder) =>
+            [.. files.Select(f => f.Path).Where(p => p.StartsWith(folder + "/", StringComparison.Ordinal))];
     }
 }
