@@ -21,7 +21,7 @@ public static class SpecificationDraft
         Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
-        PlanChoice choice = new PlanSearch(application, progress).Run(cancellation);
+        PlanChoice choice = PlanChoosing.Choose(application, progress, cancellation);
         BandMap bands = BandMap.Of(application, choice.Plan);
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         return new Specification
