@@ -1,0 +1,76 @@
+using System.Globalization;
+using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
+using BandSpec.Files.Forms;
+
+namespace BandSpec.Files.Inputs;
+
+/// <summary>The forms of what a requirement says about capability, compensation, test and rounding.</summary>
+internal static class DesignForms
+{
+    private static readonly Key<double> Sample = new(
+        "sample", new NumberForm(AcceptedRanges.Capability), "Cpk judged on the spread within a lot; usually 1.67, five sigma.");
+
+    private static readonly Key<double> LongRun = new(
+        "long-run", new NumberForm(AcceptedRanges.Capability), "Cpk judged on the spread over lots; usually 1.33, four sigma.");
+
+    private static readonly Key<TemperatureDifference> CandidateStep = new(
+        "candidate-step", QuantityForms.Difference, "Step of the candidate temperatures.");
+
+    private static readonly Key<Counts> Temperatures = new(
+        "temperatures",
+        new PatternForm<Counts>(
+            "a number of plan temperatures, or the fewest and the most, such as `3..6`", "([0-9]{1,2})(\\.\\.([0-9]{1,2}))?",
+            groups => new Counts(Count(groups[1].Value), Count(groups[3].Success ? groups[3].Value : groups[1].Value))),
+        "How many plan temperatures: fewest..most.");
+
+    private static readonly Key<TemperatureDifference> Separation = new(
+        "separation", QuantityForms.Difference, "Least distance of neighbouring plan temperatures.");
+
+    private static readonly Key<TemperatureDifference> Reach = Key.Optional(
+        "reach", QuantityForms.Difference, TemperatureDifference.FromKelvin(15),
+        "Furthest that the operating range may extend beyond the outermost plan temperatures; 15 K when left out.");
+
+    private static readonly Key<PlanObjective> Objective = new(
+        "objective",
+        new ChoiceForm<PlanObjective>(
+            ("least-cost", PlanObjective.LeastCost), ("most-margin", PlanObjective.MostMargin), ("least-error", PlanObjective.LeastError)),
+        "Which of the plans that fit is chosen.");
+
+    private static readonly Key<double> GuardBand = new(
+        "guard-band", new NumberForm(AcceptedRanges.GuardBand), "Guard band in multiples of the expanded uncertainty; 0 is simple acceptance.");
+
+    private static readonly Key<WordOrList<Temperature>> TestTemperatures = Key.Optional(
+        "temperatures",
+        new WordOrListForm<Temperature>("auto", new ListForm<Temperature>("verification temperatures", QuantityForms.Temperature, 1, 20)),
+        new WordOrList<Temperature>(null), "Verification temperatures, or auto to have them chosen.");
+
+    private static readonly Key<PercentOfSpan> BandStep = new("band", QuantityForms.Error, "Step of band values, rounded up.");
+    private static readonly Key<PercentOfSpan> LimitStep = new("limit", QuantityForms.Error, "Step of acceptance limits, rounded inward.");
+
+    /// <summary>The form of <c>capability</c>.</summary>
+    internal static MapForm<CapabilityTarget> Capability { get; } = new(
+        "the capability to reach", [Sample, LongRun], v => new CapabilityTarget(v.Of(Sample), v.Of(LongRun)));
+
+    /// <summary>The form of <c>compensation</c>.</summary>
+    internal static MapForm<CompensationScope> Compensation { get; } = new(
+        "the compensation plans to consider", [CandidateStep, Temperatures, Separation, Reach, Objective],
+        v => new CompensationScope
+        {
+            CandidateStep = v.Of(CandidateStep), FewestTemperatures = v.Of(Temperatures).Fewest, MostTemperatures = v.Of(Temperatures).Most,
+            Separation = v.Of(Separation), Reach = v.Of(Reach), Objective = v.Of(Objective),
+        });
+
+    /// <summary>The form of <c>test</c>.</summary>
+    internal static MapForm<VerificationRules> Test { get; } = new(
+        "the verification test", [GuardBand, TestTemperatures], v => new VerificationRules(v.Of(GuardBand), v.Of(TestTemperatures).Items));
+
+    /// <summary>The form of <c>rounding</c>.</summary>
+    internal static MapForm<RoundingSteps> Rounding { get; } = new(
+        "the steps of rounding", [BandStep, LimitStep], v => new RoundingSteps(v.Of(BandStep), v.Of(LimitStep)));
+
+    private static int Count(string digits) => int.Parse(digits, CultureInfo.InvariantCulture);
+}
+
+/// <summary>The fewest and the most of something.</summary>
+internal sealed record Counts(int Fewest, int Most);
