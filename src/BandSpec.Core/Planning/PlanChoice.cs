@@ -4,10 +4,12 @@ using BandSpec.Core.Requirements;
 namespace BandSpec.Core.Planning;
 
 /// <summary>The plan that the search settled on, and how sure it is.</summary>
-/// <param name="Plan">The best plan; the one of largest margin when none is feasible.</param>
+/// <param name="Plan">The best plan; the one of largest margin when none is feasible; or the plan that the requirement pins.</param>
 /// <param name="Run">Its chamber run.</param>
 /// <param name="PlansConsidered">How many candidate plans the answer holds against, when it is proven.</param>
-/// <param name="Proven">Whether the answer is proven over all candidates; not when the search was ended early.</param>
+/// <param name="Proven">
+/// Whether the answer is proven over all candidates: not when the search was ended early, nor for a pinned plan that is not the best.
+/// </param>
 public sealed record PlanChoice(CompensationPlan Plan, ChamberRun Run, long PlansConsidered, bool Proven)
 {
     /// <summary>How many plans were decided one by one before the answer was there, in the last exchange round.</summary>
@@ -24,4 +26,9 @@ public sealed record PlanChoice(CompensationPlan Plan, ChamberRun Run, long Plan
 
     /// <summary>The plan's least margin over every pressure and temperature.</summary>
     public double ContinuousMargin => Everywhere.Min(r => r.Margin);
+
+    /// <summary>
+    /// Whether the plan keeps the allowed error between the nodes as well, but for the part in 10⁸ that a choice may fall short of its nodes.
+    /// </summary>
+    public bool HoldsEverywhere => ContinuousMargin >= 1 - PlanChoosing.Shortfall;
 }

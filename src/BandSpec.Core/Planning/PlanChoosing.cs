@@ -12,7 +12,7 @@ namespace BandSpec.Core.Planning;
 internal static class PlanChoosing
 {
     /// <summary>How far below its margin at the nodes, relative, a choice may fall between them.</summary>
-    private const double Shortfall = 1e-8;
+    internal const double Shortfall = 1e-8;
 
     /// <summary>A choice that still falls short after this many rounds is given as not proven; three or four are usual.</summary>
     private const int MostRounds = 60;
@@ -46,6 +46,26 @@ internal static class PlanChoosing
                 };
             added = [.. added, .. shortOf];
         }
+    }
+
+    /// <summary>The plan that the requirement pins, judged between the nodes as well; nothing when it pins none.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="optimum">What the search would have chosen.</param>
+    public static PlanChoice? Pinned(Application application, PlanChoice optimum)
+    {
+        if (application.Requirement.Compensation.Pinned is not { } pinned)
+            return null;
+        CompensationPlan plan = pinned.Complete(application.Requirement.Temperature.Reference, application.Platform, application.Station);
+        IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
+        bool isOptimum = plan.Temperatures.SequenceEqual(optimum.Plan.Temperatures)
+            && (plan.ZeroDegree, plan.SpanDegree) == (optimum.Plan.ZeroDegree, optimum.Plan.SpanDegree);
+        return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), optimum.PlansConsidered, optimum.Proven && isOptimum)
+        {
+            PlansDecided = optimum.PlansDecided,
+            AddedNodes = [.. Violated(everywhere, BandMap.Of(application, plan).Margin)],
+            ExchangeRounds = 1,
+            Everywhere = everywhere,
+        };
     }
 
     /// <summary>
