@@ -33,6 +33,17 @@ internal sealed class BernsteinNet
     /// <summary>The value at a corner of the rectangle.</summary>
     public double Corner(bool upperX, bool upperT) => net[(upperX ? (rows - 1) * columns : 0) + (upperT ? columns - 1 : 0)];
 
+    /// <summary>The largest step between neighbouring coefficients along one of the variables.</summary>
+    public double LargestStep(bool alongX)
+    {
+        double largest = 0;
+        int along = alongX ? columns : 1;
+        for (int at = 0; at + along < net.Length; at++)
+            if (alongX || (at + 1) % columns != 0)
+                largest = Math.Max(largest, Math.Abs(net[at + along] - net[at]));
+        return largest;
+    }
+
     /// <summary>The nets of the two halves, lower first, by de Casteljau's rule.</summary>
     public (BernsteinNet Lower, BernsteinNet Upper) Halve(bool alongX)
     {

@@ -36,29 +36,30 @@ internal sealed class Surface
         return new Surface(c);
     }
 
-    /// <summary><c>a²</c>.</summary>
-    public Surface Square()
+    /// <summary><c>a·b</c>.</summary>
+    public static Surface Multiply(Surface a, Surface b)
     {
-        var c = new double[(2 * DegreeInX) + 1, (2 * DegreeInT) + 1];
-        for (int i = 0; i <= DegreeInX; i++)
-            for (int k = 0; k <= DegreeInT; k++)
-                for (int j = 0; j <= DegreeInX; j++)
-                    for (int l = 0; l <= DegreeInT; l++)
-                        c[i + j, k + l] += coefficients[i, k] * coefficients[j, l];
+        var c = new double[a.DegreeInX + b.DegreeInX + 1, a.DegreeInT + b.DegreeInT + 1];
+        for (int i = 0; i <= a.DegreeInX; i++)
+            for (int k = 0; k <= a.DegreeInT; k++)
+                for (int j = 0; j <= b.DegreeInX; j++)
+                    for (int l = 0; l <= b.DegreeInT; l++)
+                        c[i + j, k + l] += a[i, k] * b[j, l];
         return new Surface(c);
     }
 
-    /// <summary>The surface with <c>t = origin + slope·v</c>, as a polynomial in <c>x</c> and <c>v</c>.</summary>
-    public Surface SubstituteT(double origin, double slope)
+    /// <summary>The surface in new variables <c>u, v</c>: <c>x</c> replaced by a surface in them, <c>t</c> by a polynomial in <c>v</c>.</summary>
+    public Surface Substitute(Surface x, double[] t)
     {
-        var c = new double[DegreeInX + 1, DegreeInT + 1];
-        for (int i = 0; i <= DegreeInX; i++)
+        Surface result = Product([], []);
+        for (int i = DegreeInX; i >= 0; i--)
         {
-            double[] inT = Polynomials.Substitute([.. Enumerable.Range(0, DegreeInT + 1).Select(k => coefficients[i, k])], origin, slope);
-            for (int k = 0; k < inT.Length; k++)
-                c[i, k] = inT[k];
+            double[] inV = [];
+            for (int k = DegreeInT; k >= 0; k--)
+                inV = Polynomials.Add(Polynomials.Multiply(inV, t), [coefficients[i, k]]);
+            result = Add(Multiply(result, x), Product([1], inV));
         }
 
-        return new Surface(c);
+        return result;
     }
 }

@@ -119,10 +119,10 @@ internal sealed class PlanFamilies
     /// <summary>Whether a list is one of the candidate plans.</summary>
     public bool Allows(int[] list)
     {
-        if (list[0] < 0 || list[^1] >= Candidates.Count)
+        if (list[0] < 0)
             return false;
         for (int i = 1; i < list.Length; i++)
-            if (list[i] <= list[i - 1] || !Apart(list[i - 1], list[i]))
+            if (list[i] <= list[i - 1] || list[i] >= Candidates.Count || !Apart(list[i - 1], list[i]))
                 return false;
         return ends.Contains((list[0], list[^1]));
     }

@@ -100,7 +100,7 @@ internal sealed class ResidueSurface
         byShape.Select((p, s) => Surface.Product(Shapes[s], p)).Aggregate((a, b) => Surface.Add(a, b));
 
     private static Surface SumOfSquares(IEnumerable<double[][]> rows) =>
-        rows.Select(r => Sum(r).Square()).Aggregate(Surface.Product([], []), (a, b) => Surface.Add(a, b));
+        rows.Select(Sum).Aggregate(Surface.Product([], []), (sum, row) => Surface.Add(sum, Surface.Multiply(row, row)));
 }
 
 /// <summary>The operating range mapped to −1 … 1.</summary>

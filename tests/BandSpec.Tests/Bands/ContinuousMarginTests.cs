@@ -18,7 +18,7 @@ public sealed class ContinuousMarginTests
 
     [Fact]
     public void It_is_found_for_a_band_that_added_errors_alone_overfill() =>
-        Judge(ApplicationOf(4, 0.1, 0, 0, 0.2));
+        Judge(ApplicationOf(3, 0.2, 0, 0, 0.2));
 
     [Fact]
     public void Without_scatter_it_is_unlimited()

@@ -29,8 +29,8 @@ public sealed record ContinuousMargin(int Region, double Margin, NodePlace Worst
             .. Enumerable.Range(0, application.Requirement.AllowedError.Count).Select(r =>
             {
                 AllowedErrorRegion region = application.Requirement.AllowedError[r];
-                var judged = new RegionSurfaces(application.Requirement, region, surface, steady, scale);
-                (double margin, double x, double along) = new LeastMarginSearch(judged).Run();
+                IEnumerable<RegionPiece> pieces = RegionPiece.AllOf(application.Requirement, region, surface, steady, scale);
+                (double margin, double x, double along) = new LeastMarginSearch(pieces).Run();
                 return new ContinuousMargin(r, margin, new NodePlace(x, At(region, along), r));
             }),
         ];
