@@ -15,7 +15,7 @@ public sealed class PlanChoosingTests
     [Fact]
     public void The_choice_keeps_its_margin_at_every_place()
     {
-        Application application = Given.Application(Given.Requirement with { Compensation = Small });
+        Application application = Given.Application();
         PlanChoice choice = PlanChoosing.Choose(application, null, default);
         Assert.True(choice.Proven);
         Assert.NotEmpty(choice.AddedNodes);
