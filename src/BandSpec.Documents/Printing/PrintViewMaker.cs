@@ -61,9 +61,13 @@ internal sealed class PrintViewMaker
             allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
             allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
             Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
-            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, 6))),
-            Shown(Rounded.Given(band.Worst.Temperature.Celsius)));
+            Shown(Rounded.Given(Coarse(_requirement.Pressure.At(band.Worst.PressureFraction).Value, _requirement.Pressure.Upper.Value))),
+            Shown(Rounded.Given(Math.Round(band.Worst.Temperature.Celsius, 1))));
     }
+
+    // Where the margin is least matters to a thousandth of the range; more digits are those of a search, not of the figure.
+    private static double Coarse(double value, double upper) =>
+        Math.Round(value, Math.Clamp(3 - (int)Math.Floor(Math.Log10(Math.Abs(upper) + double.Epsilon)) - 1, 0, 9));
 
     private ProfileView Profile(InputViews inputs)
     {
