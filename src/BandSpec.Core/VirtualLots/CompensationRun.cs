@@ -45,6 +45,53 @@ internal sealed class CompensationRun
     public IEnumerable<double> Numbers =>
         correction.Numbers.Concat(taus).Concat(shapes.Select(s => s.Span)).Concat([soak, noise, standardZero, standardProportional]);
 
+    /// <summary>What a run without any chance leaves of a raw error.</summary>
+    /// <param name="raw">The raw error's coefficients, one number a place.</param>
+    public double[] LeftOf(double[] raw)
+    {
+        Lanes[] error = [.. raw.Select(Vector512.Create)];
+        Lanes[] still = new Lanes[Points];
+        Compensate(new RunChance(still, still, new Lanes[2]), new Lanes[Points], error);
+        return [.. error.Select(e => e.ToScalar())];
+    }
+
+    /// <summary>
+    /// What one standard deviation of each error of the run leaves in the coefficients: noise and unsettled temperature at each point, the
+    /// standard's zero and proportional error. Unsettled temperature has the variance of its product with the slopes of units.
+    /// </summary>
+    /// <param name="nominal">Mean coefficients of the raw error.</param>
+    /// <param name="sources">What scatters them, one standard deviation each.</param>
+    public IEnumerable<double[]> CarriedSources(double[] nominal, IReadOnlyList<double[]> sources)
+    {
+        for (int i = 0; i < Points; i++)
+        {
+            double slopes = Square(SlopeAt(i, nominal)) + sources.Sum(s => Square(SlopeAt(i, s)));
+            double sigma = Math.Sqrt((noise * noise) + (soak * soak * slopes));
+            int point = i;
+            yield return Carried(p => p == point ? sigma : 0);
+        }
+        yield return Carried(_ => standardZero);
+        yield return Carried(p => standardProportional * shapes[p].Span);
+    }
+
+    private double[] Carried(Func<int, double> reading)
+    {
+        Lanes[] error = new Lanes[places.Count];
+        correction.Subtract([.. Enumerable.Range(0, Points).Select(p => Vector512.Create(reading(p)))], error);
+        return [.. error.Select(e => e.ToScalar())];
+    }
+
+    /// <summary>Slope of an error over reduced temperature at a point, from two readings close by; the step leaves 1e-6 of it at most.</summary>
+    private double SlopeAt(int point, double[] coefficients)
+    {
+        const double Step = 5e-4;
+        Lanes[] error = [.. coefficients.Select(Vector512.Create)];
+        double Reading(double tau) => places.At(error, 1, shapes[point], Vector512.Create(tau)).ToScalar();
+        return (Reading(taus[point] + Step) - Reading(taus[point] - Step)) / (2 * Step);
+    }
+
+    private static double Square(double value) => value * value;
+
     /// <summary>Reads eight units, fits and stores.</summary>
     /// <param name="chance">Standard normal numbers of the run.</param>
     /// <param name="readings">Room for <see cref="Points"/> readings.</param>

@@ -43,6 +43,34 @@ internal sealed class RawErrorLaw
     /// <summary>The mean coefficients of all production.</summary>
     public void Nominal(Span<double> lotMeans) => means.CopyTo(lotMeans);
 
+    /// <summary>The mean coefficients of all production, each at its place.</summary>
+    /// <param name="count">How many places there are.</param>
+    public double[] NominalCoefficients(int count) => AtPlaces(means, count);
+
+    /// <summary>
+    /// What each of independent standard normal numbers does to the coefficients of a unit whose lot is drawn with it: units and lots scatter
+    /// independently, with the same correlations.
+    /// </summary>
+    /// <param name="count">How many places there are.</param>
+    public IEnumerable<double[]> Sources(int count)
+    {
+        foreach (double[] scatter in new[] { sigmas, lotSigmas })
+            for (int column = 0; column < Count; column++)
+            {
+                double[] source = [.. factor.Select((row, j) => scatter[j] * row.FirstOrDefault(e => e.Column == column).Weight)];
+                if (source.Any(v => v != 0))
+                    yield return AtPlaces(source, count);
+            }
+    }
+
+    private double[] AtPlaces(double[] coefficients, int count)
+    {
+        double[] result = new double[count];
+        for (int j = 0; j < places.Length; j++)
+            result[places[j]] = coefficients[j];
+        return result;
+    }
+
     /// <summary>The coefficients of eight units of a lot.</summary>
     /// <param name="lotMeans">The lot's means, <see cref="Count"/> of them.</param>
     /// <param name="normals">Independent standard normal numbers, as many; zeros for the lot's mean unit.</param>

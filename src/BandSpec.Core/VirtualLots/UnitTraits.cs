@@ -52,6 +52,27 @@ internal sealed class UnitTraits
         (hysteresis.Mean.Percent / 2 * shapes.Bow) + thermal.Mean.Percent + ConstantBound + (ProportionalBound * shapes.Span);
 
     /// <summary>
+    /// What one standard deviation of each trait does to the error at a pressure, in the order pressure hysteresis, thermal hysteresis, drift
+    /// of zero, drift of span, further terms. Hystereses add on either side; the others turn round with the side.
+    /// </summary>
+    public double[] Sources(in ShapeValues shapes)
+    {
+        double x = shapes.Span;
+        return
+        [
+            hysteresis.Sigma.Percent / 2 * shapes.Bow, thermal.Sigma.Percent,
+            AgeFactor * ageing.Zero.Sigma.Percent, AgeFactor * ageing.Span.Sigma.Percent * x,
+            .. further.Select(f => f.Sigma.Percent * (f.Shape == FurtherTermShape.Constant ? 1 : x)),
+        ];
+    }
+
+    /// <summary>How many traits scatter.</summary>
+    public int Count => 4 + further.Length;
+
+    /// <summary>Half the mean pressure hysteresis at a pressure.</summary>
+    public double MeanHysteresis(in ShapeValues shapes) => hysteresis.Mean.Percent / 2 * shapes.Bow;
+
+    /// <summary>
     /// By how much truncation at zero raises thermal hysteresis and half the pressure hysteresis at its peak, together:
     /// <c>σ·φ(α)/Φ(α)</c> with <c>α = mean/σ</c> each.
     /// </summary>

@@ -1,5 +1,6 @@
 using System.Runtime.CompilerServices;
 using System.Runtime.Intrinsics;
+using BandSpec.Core.Numerics.RareEvents;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
 using Lanes = System.Runtime.Intrinsics.Vector512<double>;
@@ -63,6 +64,28 @@ internal sealed class VerificationRun
             streams.TestStandard.FillNormals(units, 0, standard);
             lot.Accepted[group] = TestGroup(lot, group, new RunChance(unit, station, standard), plan, counts);
         }
+    }
+
+    /// <summary>The test as linear readings of a unit, in %FS; the output's steps enter with their variance.</summary>
+    /// <param name="law">The law, for the mean unit.</param>
+    /// <param name="unit">How units move.</param>
+    public Readings Linear(LotLaw law, LinearUnit unit)
+    {
+        Readings readings = new(unit.Dimensions + law.Traits.Count, standardZero);
+        double own = (repeatability * repeatability) + (reading * reading) + (steps.Step * steps.Step / 12);
+        double[] weights = new double[readings.Dimensions];
+        foreach (TestPoint point in points)
+        {
+            Array.Clear(weights);
+            unit.WeightsAt(point.Shapes, point.Tau, weights);
+            weights[unit.Dimensions] = point.Side * law.Traits.Sources(point.Shapes)[0];
+            double mean = law.Nominal.At(point.Shapes, point.Tau) + (point.Side * law.Traits.MeanHysteresis(point.Shapes));
+            double first = (point.Lower - point.Nominal) / outputPerPercent;
+            double second = (point.Upper - point.Nominal) / outputPerPercent;
+            (double lower, double upper) = outputPerPercent > 0 ? (first, second) : (second, first);
+            readings.Add(weights, new Reading(mean, lower, upper, Math.Sqrt(own), standardProportional * point.Shapes.Span));
+        }
+        return readings;
     }
 
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]

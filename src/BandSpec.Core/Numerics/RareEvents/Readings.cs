@@ -1,3 +1,6 @@
+using System.Runtime.Intrinsics;
+using Lanes = System.Runtime.Intrinsics.Vector512<double>;
+
 namespace BandSpec.Core.Numerics.RareEvents;
 
 /// <summary>
@@ -16,9 +19,6 @@ internal sealed class Readings(int dimensions, double commonZero)
 
     /// <summary>How many readings there are; with none, everything is accepted.</summary>
     public int Count => readings.Count;
-
-    /// <summary>Standard deviation of the common error that is the same in all readings.</summary>
-    public double CommonZero => commonZero;
 
     /// <summary>No reading at all.</summary>
     public static Readings None(int dimensions) => new(dimensions, 0);
@@ -39,8 +39,29 @@ internal sealed class Readings(int dimensions, double commonZero)
     /// <summary>The larger of the two limits in size: the scale of the reading, never quite 0.</summary>
     public double Limit(int v) => Math.Max(1e-9, Math.Max(Math.Abs(readings[v].Lower), Math.Abs(readings[v].Upper)));
 
-    /// <summary>A reading.</summary>
-    public Reading this[int v] => readings[v];
+    /// <summary>A reading before its noise, <c>m_v + a_vᵀx</c>, for eight <c>x</c>.</summary>
+    public Lanes Exact(int v, ReadOnlySpan<Lanes> x)
+    {
+        ReadOnlySpan<double> weight = Weight(v);
+        Lanes value = Vector512.Create(readings[v].Mean);
+        for (int i = 0; i < weight.Length; i++)
+            value = Vector512.FusedMultiplyAdd(Vector512.Create(weight[i]), x[i], value);
+        return value;
+    }
+
+    /// <summary>Whether a reading with its noise lies between its limits, as lanes with all bits set or none.</summary>
+    /// <param name="v">Which reading.</param>
+    /// <param name="exact">The reading before its noise.</param>
+    /// <param name="noise">Standard normal numbers: the two common ones, then one a reading.</param>
+    public Lanes Within(int v, Lanes exact, ReadOnlySpan<Lanes> noise)
+    {
+        Reading reading = readings[v];
+        Lanes value = Vector512.FusedMultiplyAdd(Vector512.Create(reading.Noise), noise[v + 2], exact);
+        value = Vector512.FusedMultiplyAdd(Vector512.Create(commonZero), noise[0], value);
+        value = Vector512.FusedMultiplyAdd(Vector512.Create(reading.Common), noise[1], value);
+        return Vector512.GreaterThanOrEqual(value, Vector512.Create(reading.Lower))
+            & Vector512.LessThanOrEqual(value, Vector512.Create(reading.Upper));
+    }
 }
 
 /// <summary>One reading but for its weights.</summary>

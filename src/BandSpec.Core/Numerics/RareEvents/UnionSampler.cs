@@ -101,15 +101,10 @@ internal sealed class UnionSampler
         Lanes lean = Lanes.Zero;
         for (int v = 0; v < readings.Count; v++)
         {
-            Reading reading = readings[v];
-            Lanes value = At(readings.Weight(v), Vector512.Create(reading.Mean));
-            Lanes scaled = value * Vector512.Create(1 / readings.Limit(v));
+            Lanes exact = readings.Exact(v, x);
+            Lanes scaled = exact * Vector512.Create(1 / readings.Limit(v));
             lean = Vector512.FusedMultiplyAdd(scaled, scaled, lean);
-            value = Vector512.FusedMultiplyAdd(Vector512.Create(reading.Noise), noise[v + 2], value);
-            value = Vector512.FusedMultiplyAdd(Vector512.Create(readings.CommonZero), noise[0], value);
-            value = Vector512.FusedMultiplyAdd(Vector512.Create(reading.Common), noise[1], value);
-            accepted &= Vector512.GreaterThanOrEqual(value, Vector512.Create(reading.Lower))
-                & Vector512.LessThanOrEqual(value, Vector512.Create(reading.Upper));
+            accepted &= readings.Within(v, exact, noise);
         }
         density = Lanes.Zero;
         for (int lane = 0; lane < 8; lane++)
