@@ -5,6 +5,9 @@ namespace BandSpec.Core.VirtualLots;
 /// <summary>Everything about a lot that is the same for all its units, worked out once.</summary>
 internal sealed class LotLaw
 {
+    /// <summary>Goes up with every change of what is drawn or summed, so that parts made by different versions are not mixed.</summary>
+    private const ulong Generation = 1;
+
     /// <summary>The law of a subject.</summary>
     /// <exception cref="ArgumentException">The plan's points do not determine its correction.</exception>
     public LotLaw(LotSubject subject)
@@ -54,7 +57,7 @@ internal sealed class LotLaw
     {
         get
         {
-            ulong hash = 0xCBF2_9CE4_8422_2325;
+            ulong hash = 0xCBF2_9CE4_8422_2325 + Generation;
             IEnumerable<double> numbers =
                 RawError.Numbers.Concat(Run.Numbers).Concat(Traits.Numbers).Concat(Test.Numbers).Concat(Map.Numbers).Concat(Profile.Numbers);
             foreach (double number in numbers)

@@ -1,4 +1,3 @@
-using BandSpec.Core.Quantities;
 using BandSpec.Core.Specifying;
 
 namespace BandSpec.Core.VirtualLots;
@@ -42,12 +41,6 @@ public sealed record LotReport
     /// <summary>Closed form beside simulation.</summary>
     public required IReadOnlyList<Twin> Twins { get; init; }
 
-    /// <summary>
-    /// By how much the mean thermal hysteresis, and half the mean pressure hysteresis, is larger than the closed form's because no
-    /// hysteresis is negative: a difference that more units make visible and that is not a fault of either.
-    /// </summary>
-    public required PercentOfSpan TruncationShift { get; init; }
-
     /// <summary>Reads the figures of a result.</summary>
     /// <param name="specification">The specification whose units were made, for the closed form's side.</param>
     /// <param name="result">What was made; at least two lots.</param>
@@ -76,7 +69,6 @@ public sealed record LotReport
             UseOutside = rates.OfAcceptedMoments((int)Counted.UseOutside),
             Histogram = ErrorHistogram.Of(result.Tally, law.Profile.HistogramEnd),
             Twins = VirtualLots.Twins.Of(specification, law, result),
-            TruncationShift = PercentOfSpan.FromPercent(law.Traits.TruncationShift),
         };
     }
 }

@@ -25,31 +25,47 @@ internal static class Twins
         string place = string.Create(CultureInfo.InvariantCulture, $"x {node.PressureFraction} at {node.Temperature}, region {node.Region + 1}");
         (double fresh, double side, double centre) = law.Map.NominalAt(index);
         NodeFigures found = new(result.Tally, index, result.Order.LotSize);
-        double added = side * (centre + found.Off);
-        double sample = 3 * target.Sample;
-        double longRun = 3 * target.LongRun;
-        bool sampleGoverns = sample * node.SigmaSample.Percent > longRun * node.SigmaLongRun.Percent;
-        double maximum = added + (sampleGoverns ? sample * found.SigmaSample : longRun * found.SigmaLongRun);
-        double room = node.Design.Percent - added;
+        (double mean, double variance) = law.Traits.TruncationAt(ShapeValues.At(node.PressureFraction));
+        BandSums closed = new(node.Added.Percent, node.SigmaSample.Percent, node.SigmaLongRun.Percent);
+        BandSums expected = new(closed.Added + mean, Shifted(closed.Sample, variance), Shifted(closed.LongRun, variance));
+        BandSums simulated = new(side * (centre + found.Off), found.SigmaSample, found.SigmaLongRun);
 
         yield return new Twin("mean", place, node.Mean.Percent, fresh + found.ResidueOff, found.ResidueError);
-        yield return new Twin("added", place, node.Added.Percent, added, found.ErrorOf(side, 0, 0));
-        yield return new Twin("sigma-sample", place, node.SigmaSample.Percent, found.SigmaSample, found.ErrorOf(0, 1, 0));
-        yield return new Twin("sigma-long-run", place, node.SigmaLongRun.Percent, found.SigmaLongRun, found.ErrorOf(0, 0, 1));
-        yield return new Twin(
-            "maximum", place, node.Maximum.Percent, maximum,
-            sampleGoverns ? found.ErrorOf(side, sample, 0) : found.ErrorOf(side, 0, longRun));
-        yield return new Twin("typical", place, node.Typical.Percent, added + (3 * found.SigmaLongRun), found.ErrorOf(side, 0, 3));
-        if (found.SigmaSample == 0)
-            yield break;
-        double cpkSample = room / (3 * found.SigmaSample);
-        double cpkLongRun = room / (3 * found.SigmaLongRun);
-        yield return new Twin(
-            "cpk-sample", place, node.CpkSample, cpkSample, found.ErrorOf(-side / (3 * found.SigmaSample), -cpkSample / found.SigmaSample, 0));
-        yield return new Twin(
-            "cpk-long-run", place, node.CpkLongRun, cpkLongRun,
-            found.ErrorOf(-side / (3 * found.SigmaLongRun), 0, -cpkLongRun / found.SigmaLongRun));
+        foreach (Combination figure in Combinations(node, target, simulated))
+            yield return new Twin(
+                figure.Name, place, figure.Of(closed), figure.Of(simulated), found.ErrorOf(side * figure.PerAdded, figure.PerSample, figure.PerLongRun),
+                figure.Of(expected) - figure.Of(closed));
     }
+
+    private static double Shifted(double sigma, double variance) => Math.Sqrt(Math.Max(0, (sigma * sigma) + variance));
+
+    /// <summary>The figures of a place that are made of what adds and of the two spreads, with their slopes at the simulated values.</summary>
+    private static IEnumerable<Combination> Combinations(BandNode node, CapabilityTarget target, BandSums at)
+    {
+        double sample = 3 * target.Sample;
+        double longRun = 3 * target.LongRun;
+        double design = node.Design.Percent;
+        yield return new Combination("added", s => s.Added, 1, 0, 0);
+        yield return new Combination("sigma-sample", s => s.Sample, 0, 1, 0);
+        yield return new Combination("sigma-long-run", s => s.LongRun, 0, 0, 1);
+        yield return sample * node.SigmaSample.Percent > longRun * node.SigmaLongRun.Percent
+            ? new Combination("maximum", s => s.Added + (sample * s.Sample), 1, sample, 0)
+            : new Combination("maximum", s => s.Added + (longRun * s.LongRun), 1, 0, longRun);
+        yield return new Combination("typical", s => s.Added + (3 * s.LongRun), 1, 0, 3);
+        if (at.Sample == 0)
+            yield break;
+        double room = design - at.Added;
+        yield return new Combination(
+            "cpk-sample", s => (design - s.Added) / (3 * s.Sample), -1 / (3 * at.Sample), -room / (3 * at.Sample * at.Sample), 0);
+        yield return new Combination(
+            "cpk-long-run", s => (design - s.Added) / (3 * s.LongRun), -1 / (3 * at.LongRun), 0, -room / (3 * at.LongRun * at.LongRun));
+    }
+
+    /// <summary>What adds and the two spreads at a place, in %FS.</summary>
+    private readonly record struct BandSums(double Added, double Sample, double LongRun);
+
+    /// <summary>A figure made of them.</summary>
+    private sealed record Combination(string Name, Func<BandSums, double> Of, double PerAdded, double PerSample, double PerLongRun);
 
     private static IEnumerable<Twin> OfProfile(ProfileFigures profile, LotLaw law, LotResult result)
     {

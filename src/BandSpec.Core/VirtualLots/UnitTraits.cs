@@ -72,11 +72,14 @@ internal sealed class UnitTraits
     /// <summary>Half the mean pressure hysteresis at a pressure.</summary>
     public double MeanHysteresis(in ShapeValues shapes) => hysteresis.Mean.Percent / 2 * shapes.Bow;
 
-    /// <summary>
-    /// By how much truncation at zero raises thermal hysteresis and half the pressure hysteresis at its peak, together:
-    /// <c>σ·φ(α)/Φ(α)</c> with <c>α = mean/σ</c> each.
-    /// </summary>
-    public double TruncationShift => ShiftOf(thermal) + (ShiftOf(hysteresis) / 2);
+    /// <summary>By how much truncation at zero changes mean and variance of what the two hystereses add at a pressure.</summary>
+    public (double Mean, double Variance) TruncationAt(in ShapeValues shapes)
+    {
+        (double pressureMean, double pressureVariance) = ChangeOf(hysteresis);
+        (double thermalMean, double thermalVariance) = ChangeOf(thermal);
+        double half = shapes.Bow / 2;
+        return (thermalMean + (half * pressureMean), thermalVariance + (half * half * pressureVariance));
+    }
 
     /// <summary>Draws the traits of a whole lot.</summary>
     public void Draw(LotStreams streams, ulong firstUnit, LotUnits lot)
@@ -95,10 +98,17 @@ internal sealed class UnitTraits
         }
     }
 
-    private static double ShiftOf(Spread spread)
+    /// <summary>
+    /// With <c>α = mean/σ</c> and <c>λ = φ(α)/Φ(α)</c> the truncated mean is larger by <c>σλ</c>, the variance smaller by <c>σ²λ(λ + α)</c>.
+    /// </summary>
+    private static (double Mean, double Variance) ChangeOf(Spread spread)
     {
-        double alpha = spread.Sigma.Percent > 0 ? spread.Mean.Percent / spread.Sigma.Percent : double.PositiveInfinity;
-        return alpha < 38 ? spread.Sigma.Percent * NormalTail.Density(alpha) / (1 - NormalTail.Probability(alpha)) : 0;
+        double sigma = spread.Sigma.Percent;
+        double alpha = sigma > 0 ? spread.Mean.Percent / sigma : double.PositiveInfinity;
+        if (alpha > 38)
+            return (0, 0);
+        double lambda = NormalTail.Density(alpha) / (1 - NormalTail.Probability(alpha));
+        return (sigma * lambda, -sigma * sigma * lambda * (lambda + alpha));
     }
 
     private Lanes Drift(Spread spread, Lanes normal) =>

@@ -14,6 +14,9 @@ namespace BandSpec.Core.VirtualLots;
 /// </summary>
 internal sealed class VerificationRun
 {
+    /// <summary>The tolerance is worked out with the C library's functions; what these differ by on two machines is cut off.</summary>
+    private const int ToleranceDigits = 9;
+
     private readonly TestPoint[] points;
     private readonly OutputSteps steps;
     private readonly ShapePlaces places;
@@ -131,8 +134,8 @@ internal sealed class VerificationRun
         double tau = (point.Temperature - subject.Platform.Temperature.Reference).Kelvin / 100;
         return new TestPoint(
             tau, ShapeValues.At(point.PressureFraction), point.Direction == PressureDirection.Rising ? -1 : 1,
-            point.Nominal, steps.NominalAt(point.PressureFraction), point.Lower, point.Upper, point.Tolerance.Percent, stage,
-            ReferenceEquals(point, last));
+            point.Nominal, steps.NominalAt(point.PressureFraction), point.Lower, point.Upper, Math.Round(point.Tolerance.Percent, ToleranceDigits),
+            stage, ReferenceEquals(point, last));
     }
 
     /// <summary>One point of the test, in plain numbers; a unit lags, so that it reads low when the pressure rises.</summary>

@@ -45,6 +45,8 @@ public sealed record InputChange(InputFile File, string Path, string Value)
     public InputContent In(InputContent content)
     {
         ArgumentNullException.ThrowIfNull(content);
+        if (content.Refusal is not null)
+            return content;
         FoundFaults faults = new(File);
         SourceText text = SourceText.Decode(content.Bytes.Span, faults);
         YamlNode? root = faults.Count == 0 ? TreeReading.Read(text, faults) : null;
