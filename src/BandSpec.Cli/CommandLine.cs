@@ -57,6 +57,8 @@ internal static class CommandLine
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
+        root.Add(TryCommand.Create(terminal));
+        root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
