@@ -35,6 +35,8 @@ public sealed class LotCollector
     private readonly Dictionary<string, int>.AlternateLookup<ReadOnlySpan<char>> lotBySpan;
     private readonly List<int> lotOfUnit = [];
 
+    private (string Name, int Index) lastLot = ("", -1);
+
     /// <summary>A collector for readings that are held against these limits.</summary>
     public LotCollector(LotLimits limits)
     {
@@ -100,8 +102,11 @@ public sealed class LotCollector
 
     private int LotIndex(ReadOnlySpan<char> lot)
     {
-        if (lotBySpan.TryGetValue(lot, out int index))
-            return index;
+        // Readings of a lot mostly come together, and comparing is cheaper than looking up.
+        if (lastLot.Index >= 0 && lot.SequenceEqual(lastLot.Name))
+            return lastLot.Index;
+        if (lotBySpan.TryGetValue(lot, out string? name, out int index))
+            return (lastLot = (name, index)).Index;
         if (lots.Count >= MostLots)
             return MostLots;
         lots.Add(lot.ToString(), lots.Count);

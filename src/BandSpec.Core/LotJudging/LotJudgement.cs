@@ -43,7 +43,9 @@ public sealed record LotJudgement
         LotLimits limits = collected.Limits;
         IReadOnlyList<DerivedFigure> figures = DerivedFigure.AllOf(limits);
         var judging = new UnitJudging(limits, collected.Units, figures);
-        UnitVerdict[] verdicts = [.. Enumerable.Range(0, collected.Units.Count).Select(judging.VerdictOf)];
+        long[] verdicts = new long[Enum.GetValues<UnitVerdict>().Length];
+        for (int unit = 0; unit < collected.Units.Count; unit++)
+            verdicts[(int)judging.VerdictOf(unit)]++;
         IEnumerable<CharacteristicJudgement> points = limits.Points.Select((point, i) =>
             CharacteristicJudging.Judge(point.Id, "", false, collected.Tallies[i], limits, collected.Units));
         IEnumerable<CharacteristicJudgement> derived = figures.Zip(Tallied(collected, figures), (figure, tally) =>
@@ -54,8 +56,7 @@ public sealed record LotJudgement
             Characteristics = [.. points, .. derived],
             Readings = collected.Readings,
             LotNames = collected.LotNames,
-            UnitCounts = (verdicts.LongCount(v => v == UnitVerdict.Pass), verdicts.LongCount(v => v == UnitVerdict.Fail),
-                verdicts.LongCount(v => v == UnitVerdict.Incomplete)),
+            UnitCounts = (verdicts[(int)UnitVerdict.Pass], verdicts[(int)UnitVerdict.Fail], verdicts[(int)UnitVerdict.Incomplete]),
             Units = Enumerable.Range(0, collected.Units.Count).Select(judging.Judge),
             Faults = collected.Faults,
         };

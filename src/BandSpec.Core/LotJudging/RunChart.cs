@@ -9,30 +9,38 @@ internal sealed class RunChart
     /// <summary>Stretches at most; a chart shows at least half as many once this is passed.</summary>
     public const int MostStretches = 240;
 
-    private readonly List<RunStretch> stretches = [];
+    private readonly List<RunStretch> done = [];
     private long valuesEach = 1;
+    private long count;
+    private double sum;
+    private double smallest = double.PositiveInfinity;
+    private double largest = double.NegativeInfinity;
 
     /// <summary>The stretches in order; all but the last hold equally many values.</summary>
-    public IReadOnlyList<RunStretch> Stretches => stretches;
+    public IReadOnlyList<RunStretch> Stretches => count == 0 ? done : [.. done, Open];
+
+    private RunStretch Open => new(count, sum / count, smallest, largest);
 
     /// <summary>Takes the next value.</summary>
     public void Add(double value)
     {
-        if (stretches.Count == 0 || stretches[^1].Count == valuesEach)
-        {
-            if (stretches.Count == MostStretches)
-                Condense();
-            stretches.Add(new(0, 0, double.PositiveInfinity, double.NegativeInfinity));
-        }
-
-        stretches[^1] = stretches[^1].With(new(1, value, value, value));
+        if (count == valuesEach)
+            Close();
+        count++;
+        sum += value;
+        smallest = Math.Min(smallest, value);
+        largest = Math.Max(largest, value);
     }
 
-    private void Condense()
+    private void Close()
     {
+        done.Add(Open);
+        (count, sum, smallest, largest) = (0, 0, double.PositiveInfinity, double.NegativeInfinity);
+        if (done.Count < MostStretches)
+            return;
         for (int k = 0; k < MostStretches / 2; k++)
-            stretches[k] = stretches[2 * k].With(stretches[2 * k + 1]);
-        stretches.RemoveRange(MostStretches / 2, MostStretches / 2);
+            done[k] = done[2 * k].With(done[2 * k + 1]);
+        done.RemoveRange(MostStretches / 2, MostStretches / 2);
         valuesEach *= 2;
     }
 }
