@@ -29,6 +29,12 @@ public sealed class Application
         return Checked<Application>.Of(FindingsIn(requirement, platform, station), () => new Application(requirement, platform, station));
     }
 
+    /// <summary>The same application with another platform, known to fit as the first one did.</summary>
+    internal Application With(Platform platform) => new(Requirement, platform, Station);
+
+    /// <summary>The same application with another requirement, known to fit as the first one did.</summary>
+    internal Application With(Requirement requirement) => new(requirement, Platform, Station);
+
     /// <summary>
     /// The findings of every rule that can be judged: those of an input that could not be read are left out, and so is how it fits the others.
     /// </summary>

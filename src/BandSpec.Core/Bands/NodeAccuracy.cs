@@ -1,0 +1,53 @@
+using BandSpec.Core.Numerics;
+using BandSpec.Core.Requirements;
+
+namespace BandSpec.Core.Bands;
+
+/// <summary>How uncertain the figures of a node are because the platform's statistics come from a sample.</summary>
+/// <param name="MeanVariance">Variance of the estimate of <c>M</c>, (%FS)².</param>
+/// <param name="SampleVarianceError">Standard error of the estimate of <c>σ_w²</c>, (%FS)².</param>
+/// <param name="LongRunVarianceError">Standard error of the estimate of <c>σ_t²</c>, (%FS)².</param>
+internal readonly record struct NodeAccuracy(double MeanVariance, double SampleVarianceError, double LongRunVarianceError)
+{
+    /// <summary>More than this is exact for every purpose, and keeps the noncentral t in its proven range.</summary>
+    private const double Exact = 1e5;
+
+    /// <summary>The lower bound on a node's margin at a one-sided confidence.</summary>
+    public double Margin(BandNode node, CapabilityTarget target, double confidence) => Math.Min(
+        Limit(node.CpkSample, node.SigmaSample.Percent, MeanVariance, SampleVarianceError, confidence) / target.Sample,
+        Limit(node.CpkLongRun, node.SigmaLongRun.Percent, MeanVariance, LongRunVarianceError, confidence) / target.LongRun);
+
+    /// <summary>About the same by normal quantiles, for ranking: <c>Ĉ − z√(1/(9n) + Ĉ²/(2ν))</c> (Bissell 1990, Appl. Statist. 39, 331-340).</summary>
+    public double RoughMargin(BandNode node, CapabilityTarget target, double quantile) => Math.Min(
+        Rough(node.CpkSample, node.SigmaSample.Percent, SampleVarianceError, quantile) / target.Sample,
+        Rough(node.CpkLongRun, node.SigmaLongRun.Percent, LongRunVarianceError, quantile) / target.LongRun);
+
+    /// <summary>
+    /// The lower bound on a capability index whose mean and variance are sums of independent estimates. The variance counts as one with
+    /// <c>ν = 2σ⁴/Var(σ̂²)</c> degrees of freedom (Satterthwaite 1946, Biometrics Bull. 2, 110-114), the mean as one of <c>n = σ²/Var(M̂)</c>
+    /// readings; <c>3√n·Ĉ</c> is then noncentral t. With a single term this is the one-sided tolerance factor of ISO 16269-6, exactly.
+    /// </summary>
+    public static double Limit(double index, double sigma, double meanVariance, double varianceError, double confidence)
+    {
+        if (!double.IsFinite(index))
+            return index;
+        (double readings, double freedom) = Counts(sigma, meanVariance, varianceError);
+        return CapabilityLaw.OneSidedLimit(index, readings, freedom, confidence);
+    }
+
+    private double Rough(double index, double sigma, double varianceError, double quantile)
+    {
+        if (!double.IsFinite(index))
+            return index;
+        (double readings, double freedom) = Counts(sigma, MeanVariance, varianceError);
+        return index - (quantile * Math.Sqrt((1 / (9 * readings)) + (index * index / (2 * freedom))));
+    }
+
+    private static (double Readings, double Freedom) Counts(double sigma, double meanVariance, double varianceError)
+    {
+        double variance = sigma * sigma;
+        return (
+            Math.Min(Exact, variance / meanVariance),
+            Math.Clamp(2 * variance * variance / (varianceError * varianceError), 1, Exact));
+    }
+}
