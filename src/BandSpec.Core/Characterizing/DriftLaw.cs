@@ -1,5 +1,5 @@
 using BandSpec.Core.Quantities;
-using BandSpec.Core.Residuals;
+using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Characterizing;
 

@@ -13,6 +13,11 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
     private const double EnergyScale = 0.1;
     private const double ExponentScale = 0.1;
 
+    /// <summary>Spreads at the law that the search begins with, relative to that of a reading: the place where every later search begins.</summary>
+    private readonly Lazy<double[]> rough = new(() => NestedEstimation.RoughSpreads(
+        new NestedLikelihood(Sample(units, new DriftLaw(scope, support.StartEnergy, support.StartExponent)), restricted: false),
+        [true, true], [false, false]).Within);
+
     /// <summary>The drift law that the readings make most likely.</summary>
     public DriftLaw MostLikely()
     {
@@ -34,11 +39,12 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
     /// <summary>The most likely spreads of drift in zero and span.</summary>
     public (NestedLikelihood Likelihood, NestedFit Fit) Fit(DriftLaw law, bool restricted)
     {
-        NestedSample sample = new(2, [units.Select(unit => unit.Summary(law)).ToList()]);
-        NestedLikelihood likelihood = new(sample, restricted);
-        (double[] within, double[] between) = NestedEstimation.RoughSpreads(likelihood, [true, true], [false, false]);
-        return (likelihood, NestedEstimation.Fit(likelihood, new SharedCorrelationLaw(within, between, [], [])));
+        NestedLikelihood likelihood = new(Sample(units, law), restricted);
+        return (likelihood, NestedEstimation.Fit(likelihood, new SharedCorrelationLaw(rough.Value, [0, 0], [], [])));
     }
+
+    private static NestedSample Sample(IReadOnlyList<StoredUnit> units, DriftLaw law) =>
+        new(2, [units.Select(unit => unit.Summary(law)).ToList()]);
 
     /// <summary>The smallest deviance with one figure held.</summary>
     public double Profile(DriftFigure held, double value)

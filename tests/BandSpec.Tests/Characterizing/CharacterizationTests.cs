@@ -16,7 +16,7 @@ public sealed class CharacterizationTests
         Characterization found = Of(new SimulatedFamily(Families.Curved, 7) { Gaps = 0.1 }.Readings(3, 16));
         Assert.Equal(
             ["zero.0", "zero.1", "zero.2", "zero.3", "span.0", "span.1", "span.2", "bow.0"],
-            found.Coefficients.Select(c => ReadingColumn.KeyOf(c.Name)));
+            found.Coefficients.Select(c => c.Name.ToString()));
         Assert.NotNull(found.PressureHysteresis);
         Assert.NotNull(found.ThermalHysteresis);
         Assert.Empty(found.SuspectUnits);
