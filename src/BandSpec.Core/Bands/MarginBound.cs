@@ -16,7 +16,7 @@ public sealed record MarginBound(double Confidence, double Lower, BandNode Worst
     /// How many nodes are worked out in full: those that a first guess by normal quantiles ranks lowest. The guess errs by a few percent, but
     /// alike at nodes that are close to each other.
     /// </summary>
-    private const int Candidates = 4;
+    private const int Candidates = 2;
 
     /// <summary>The bound of a plan; <see langword="null"/> when the platform does not say what it rests on.</summary>
     /// <param name="application">The application.</param>

@@ -9,8 +9,8 @@ namespace BandSpec.Core.Bands;
 /// <param name="LongRunVarianceError">Standard error of the estimate of <c>σ_t²</c>, (%FS)².</param>
 internal readonly record struct NodeAccuracy(double MeanVariance, double SampleVarianceError, double LongRunVarianceError)
 {
-    /// <summary>More than this is exact for every purpose, and keeps the noncentral t in its proven range.</summary>
-    private const double Exact = 1e5;
+    /// <summary>Readings or degrees of freedom beyond this number move a bound by less than a thousandth, and only cost time.</summary>
+    private const double Plenty = 1e4;
 
     /// <summary>The lower bound on a node's margin at a one-sided confidence.</summary>
     /// <remarks>Of the two criteria the one that a first guess finds lower by more than a tenth is not worth a second look at the other.</remarks>
@@ -62,7 +62,7 @@ internal readonly record struct NodeAccuracy(double MeanVariance, double SampleV
     {
         double variance = sigma * sigma;
         return (
-            Math.Min(Exact, variance / meanVariance),
-            Math.Clamp(2 * variance * variance / (varianceError * varianceError), 1, Exact));
+            Math.Min(Plenty, variance / meanVariance),
+            Math.Clamp(2 * variance * variance / (varianceError * varianceError), 1, Plenty));
     }
 }

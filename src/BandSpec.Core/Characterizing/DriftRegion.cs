@@ -28,7 +28,7 @@ internal sealed class DriftRegion(
             return new Estimate(value, value, value);
         double error = Math.Sqrt(covariance[(int)figure, (int)figure]);
         double quantile = FisherSnedecor.InvCDF(1, freedom, confidence);
-        double Excess(double errors) => likelihood.Profile(figure, value + (errors * error)) - lowest - quantile;
+        double Excess(double errors) => Profile(figure, errors * error) - lowest - quantile;
         double below = -Math.Min(Farthest, value / error);
         return new Estimate(
             value, Excess(below) > 0 ? value + (error * Edge(Excess, below)) : 0,
@@ -43,6 +43,16 @@ internal sealed class DriftRegion(
         double quantile = 2 * FisherSnedecor.InvCDF(2, freedom, confidence);
         Grid root = Cholesky.Factor(covariance);
         return [.. Enumerable.Range(0, Corners).Select(corner => Corner(root, 2 * Math.PI * corner / Corners, quantile))];
+    }
+
+    /// <summary>The profile deviance with one figure moved; the other's guess is its regression on the first.</summary>
+    private double Profile(DriftFigure figure, double shift)
+    {
+        int held = (int)figure, other = 1 - held;
+        double slope = covariance[held, other] / covariance[held, held];
+        double rest = Math.Sqrt(Math.Max(0, covariance[other, other] - (slope * covariance[held, other])));
+        return likelihood.Profile(figure, likelihood.LawAt(
+            law.Energy + (held == 0 ? shift : slope * shift), Math.Max(0, law.Exponent + (held == 1 ? shift : slope * shift))), rest);
     }
 
     private DriftFigures Corner(Grid root, double angle, double quantile)
