@@ -39,15 +39,24 @@ public sealed record AgeingStatistics
     /// <summary>What the readings cannot tell, and what was assumed instead.</summary>
     public required IReadOnlyList<LeftOutTerm> LeftOut { get; init; }
 
-    /// <summary>What the planned test would add; <see langword="null"/> when none was asked for.</summary>
-    public required PlannedTestWorth? PlannedTest { get; init; }
+    /// <summary>Standard errors of the drift figures.</summary>
+    public required DriftErrors Errors { get; init; }
+
+    /// <summary>What they would be with the planned test besides; <see langword="null"/> when none was asked for.</summary>
+    public required DriftErrors? ErrorsWithPlannedTest { get; init; }
 
     /// <summary>The drift of every unit at every time, for looking at.</summary>
     public required IReadOnlyList<UnitDrift> Drifts { get; init; }
 
     /// <summary>The statistics as they stand in a platform.</summary>
     public Ageing ToAgeing() => new(
-        Spread(Zero), Spread(Span), Scope.TestTemperature, Scope.TestDuration, ActivationEnergy.Value, TimeExponent.Value);
+        Spread(Zero), Spread(Span), Scope.TestTemperature, Scope.TestDuration,
+        MeaningfulRounding.Of(ActivationEnergy.Value, Errors.ActivationEnergy), MeaningfulRounding.Of(TimeExponent.Value, Errors.TimeExponent));
+
+    /// <summary>Their accuracy as it stands in a platform.</summary>
+    public AgeingAccuracy ToAccuracy() => new(
+        Units, Accuracy(Zero), Accuracy(Span), MeaningfulRounding.ToDigits(Errors.ActivationEnergy, 4),
+        MeaningfulRounding.ToDigits(Errors.TimeExponent, 4));
 
     /// <summary>Estimates the statistics, or finds why the readings do not suffice.</summary>
     /// <param name="readings">The readings.</param>
@@ -60,8 +69,12 @@ public sealed record AgeingStatistics
         return Checked<AgeingStatistics>.Of(DriftSupport.FindingsIn(units, scope), () => new DriftStatistics(units, scope).Estimate());
     }
 
-    private static Spread Spread(SpreadEstimate estimate) =>
-        new(PercentOfSpan.FromPercent(estimate.Mean.Value), PercentOfSpan.FromPercent(estimate.Sigma.Value));
+    private static Spread Spread(SpreadEstimate estimate) => new(
+        PercentOfSpan.FromPercent(MeaningfulRounding.Of(estimate.Mean.Value, estimate.MeanError)),
+        PercentOfSpan.FromPercent(MeaningfulRounding.Spread(estimate.Sigma.Value, estimate.VarianceError)));
+
+    private static SpreadAccuracy Accuracy(SpreadEstimate estimate) => new(
+        PercentOfSpan.FromPercent(MeaningfulRounding.ToDigits(estimate.MeanError, 4)), MeaningfulRounding.ToDigits(estimate.VarianceError, 4));
 }
 
 /// <summary>A pair of the drift law's figures.</summary>
@@ -78,11 +91,6 @@ public readonly record struct DriftFigures(double ActivationEnergy, double TimeE
 /// <param name="SpanSigma">Of the spread of drift of span, %FS.</param>
 public sealed record DriftErrors(
     double ActivationEnergy, double TimeExponent, double ZeroMean, double SpanMean, double ZeroSigma, double SpanSigma);
-
-/// <summary>What a further ageing test would add.</summary>
-/// <param name="Now">Standard errors with the readings at hand.</param>
-/// <param name="Then">Standard errors with those of the planned test besides.</param>
-public sealed record PlannedTestWorth(DriftErrors Now, DriftErrors Then);
 
 /// <summary>The change of one unit since its beginning.</summary>
 /// <param name="Unit">Its name.</param>

@@ -43,7 +43,8 @@ internal sealed class DriftStatistics
             Region = region.Edge(),
             Repeatability = Characterizing.Estimate.Of(fit.Residual, variances.Residual.SpreadInterval(scope.Confidence)),
             LeftOut = [.. support.Assumed()],
-            PlannedTest = scope.PlannedTest is { } planned ? new PlannedTestWorth(now, accuracy.With(planned)) : null,
+            Errors = now,
+            ErrorsWithPlannedTest = scope.PlannedTest is { } planned ? accuracy.With(planned) : null,
             Drifts = [.. units.SelectMany(Drifts)],
         };
     }
