@@ -51,6 +51,8 @@ internal static class CommandLine
         root.Add(CheckCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
+        root.Add(CharacterizeCommand.Create(terminal));
+        root.Add(AgeCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
         return root;
