@@ -26,6 +26,8 @@ internal static class CrossRules
         findings.Require(
             requirement.Capability?.Confidence is null || platform.RawError is null || platform.Sample is not null, "capability.confidence", "no-sample",
             "the platform does not say what its statistics rest on", "a platform with `sample`, or no confidence");
+        if (requirement.Compensation?.Pinned is { } pinned)
+            PinnedPlanRules.JudgeWith(pinned, platform, findings);
         TestUncertainty.Judge(requirement, platform, station, findings);
     }
 

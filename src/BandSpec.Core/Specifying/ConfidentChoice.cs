@@ -27,7 +27,7 @@ internal static class ConfidentChoice
         double raise = 1;
         for (int round = 0; round < MostRounds; round++)
         {
-            double lower = MarginBound.Of(application, choice.Plan, BandMap.Of(application, choice.Plan), confidence)!.Lower;
+            double lower = MarginBound.Of(application, choice.Plan, Bands(application, choice), confidence)!.Lower;
             if (lower >= 1 || lower * MostRaise <= raise)
                 return choice;
             raise *= (1 + 1e-6) / lower;
@@ -36,10 +36,14 @@ internal static class ConfidentChoice
                 Capability = application.Requirement.Capability.Raised(raise),
             });
             choice = search(raised);
-            if (BandMap.Of(raised, choice.Plan).Margin < 1)
+            bool fits = Bands(raised, choice).Margin >= 1;
+            choice = choice with { Everywhere = ContinuousMargin.AllOf(application, choice.Plan) };
+            if (!fits)
                 return choice;
         }
 
         return choice;
     }
+
+    private static BandMap Bands(Application application, PlanChoice choice) => BandMap.Of(application, choice.Plan, choice.AddedNodes);
 }

@@ -12,8 +12,11 @@ public sealed record Specification
     /// <summary>The inputs.</summary>
     public required Application Application { get; init; }
 
-    /// <summary>The chosen compensation plan.</summary>
+    /// <summary>The compensation plan: the chosen one, or the one that the requirement pins.</summary>
     public required PlanChoice Choice { get; init; }
+
+    /// <summary>What the search would have chosen; the same as <see cref="Choice"/> unless the requirement pins a plan.</summary>
+    public required PlanChoice Optimum { get; init; }
 
     /// <summary>Its band.</summary>
     public required BandMap Bands { get; init; }
@@ -39,5 +42,6 @@ public sealed record Specification
     /// <summary>
     /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.
     /// </summary>
-    public bool Feasible => Bands.Margin >= 1 && (Application.Requirement.Capability.Confidence is null || Bound is not { Lower: < 1 });
+    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere
+        && (Application.Requirement.Capability.Confidence is null || Bound is not { Lower: < 1 });
 }
