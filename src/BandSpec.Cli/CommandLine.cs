@@ -57,6 +57,8 @@ internal static class CommandLine
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
+        root.Add(TryCommand.Create(terminal));
+        root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
         root.Add(CharacterizeCommand.Create(terminal));
         root.Add(AgeCommand.Create(terminal));

@@ -27,11 +27,12 @@ internal sealed class InputFolder
     /// <param name="file">The requirement as the user named it.</param>
     /// <param name="root">The folder that the others have to be in; null to find it.</param>
     /// <param name="workingFolder">The folder that relative paths are counted from.</param>
-    public static InputSet Read(string file, string? root, string workingFolder)
+    /// <param name="changes">Values to be read as if they were written otherwise; null for none.</param>
+    public static InputSet Read(string file, string? root, string workingFolder, IReadOnlyList<InputChange>? changes = null)
     {
         string path = Path.GetFullPath(file, workingFolder);
         InputFolder inputs = new(file, path, root is null ? null : Path.GetFullPath(root, workingFolder));
-        return InputReading.Read(OpenedContent.Open(path, file, MostBytes), inputs.Follow, Letters.Missing);
+        return InputReading.Read(OpenedContent.Open(path, file, MostBytes), inputs.Follow, Letters.Missing, changes);
     }
 
     /// <summary>The folder of the project that a folder belongs to: the nearest above with <c>.git</c> in it, or the folder itself.</summary>

@@ -13,15 +13,20 @@ public static class InputReading
     /// <param name="missing">
     /// The letters of a text that no document can show; <see langword="null"/> when none is going to be written.
     /// </param>
+    /// <param name="changes">Values to be read as if they were written otherwise; <see langword="null"/> for none.</param>
+    /// <exception cref="FormatException">A change has no value to replace.</exception>
     public static InputSet Read(
-        InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null)
+        InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null,
+        IReadOnlyList<InputChange>? changes = null)
     {
         ArgumentNullException.ThrowIfNull(requirement);
         ArgumentNullException.ThrowIfNull(open);
-        OpenedFile asked = OpenedFile.Open(InputFile.Requirement, requirement);
+        InputContent Changed(InputFile kind, InputContent content) =>
+            (changes ?? []).Where(change => change.File == kind).Aggregate(content, (before, change) => change.In(before));
+        OpenedFile asked = OpenedFile.Open(InputFile.Requirement, Changed(InputFile.Requirement, requirement));
         double? span = asked.Find(RequirementForm.Pressure)?.SpanInPascals;
-        OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, open);
-        OpenedFile? line = Follow(asked, RequirementForm.StationFile, InputFile.Station, open);
+        OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, path => Changed(InputFile.Platform, open(path)));
+        OpenedFile? line = Follow(asked, RequirementForm.StationFile, InputFile.Station, path => Changed(InputFile.Station, open(path)));
         RequirementParts wanted = asked.Read(RequirementForm.Form, span) ?? new RequirementParts();
         PlatformParts platform = family?.Read(PlatformForm.Form, span) ?? new PlatformParts();
         StationParts station = line?.Read(StationForm.Form, span) ?? new StationParts();
