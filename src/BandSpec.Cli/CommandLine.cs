@@ -60,6 +60,8 @@ internal static class CommandLine
         root.Add(TryCommand.Create(terminal));
         root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
+        root.Add(CharacterizeCommand.Create(terminal));
+        root.Add(AgeCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
         return root;
