@@ -3,10 +3,10 @@ using BandSpec.Files.Inputs;
 
 namespace BandSpec.Tests;
 
-/// <summary>The demo files, and variants of them made by replacing text.</summary>
+/// <summary>A wide and easy example, kept apart from the demos that users see, and variants of it made by replacing text.</summary>
 internal static class Demo
 {
-    public static string Folder { get; } = Path.Combine(RootFolder(), "requirements-demo");
+    public static string Folder { get; } = Path.Combine(RootFolder(), "tests", "BandSpec.Tests", "Example");
 
     public const string Brine = "brine-reinjection.yaml";
 
@@ -25,7 +25,7 @@ internal static class Demo
             Xunit.Assert.Equal(at, files[name].LastIndexOf(old, StringComparison.Ordinal));
             files[name] = files[name].Replace(old, replacement, StringComparison.Ordinal);
         }
-        return InputReading.Read(Text(Brine, files[Brine]), path => Text(path, files[path]));
+        return InputReading.Read(Text(Brine, files[Brine]), path => files.TryGetValue(path, out string? text) ? Text(path, text) : InputContent.Refused(path, "there is no such file"));
     }
 
     public static InputContent Text(string name, string text) => InputContent.Of(name, Encoding.UTF8.GetBytes(text));

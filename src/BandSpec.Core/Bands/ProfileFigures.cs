@@ -1,7 +1,6 @@
 using BandSpec.Core.Numerics;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
-using BandSpec.Core.Residuals;
 
 namespace BandSpec.Core.Bands;
 

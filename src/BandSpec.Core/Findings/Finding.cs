@@ -1,6 +1,6 @@
 namespace BandSpec.Core.Findings;
 
-/// <summary>Which of the three input files a field is in.</summary>
+/// <summary>Which of the input files a field is in.</summary>
 public enum InputFile
 {
     /// <summary>The customer's application and what is promised for it.</summary>
@@ -11,6 +11,9 @@ public enum InputFile
 
     /// <summary>What the production equipment can do.</summary>
     Station,
+
+    /// <summary>Readings that statistics are made of.</summary>
+    Readings,
 }
 
 /// <summary>Where a field stands in an input: keys joined by points, list items counted from zero, such as <c>temperature.profile[2].to</c>.</summary>
@@ -26,6 +29,9 @@ public readonly record struct FieldPath(InputFile File, string Path)
 
     /// <summary>A field of the station.</summary>
     public static FieldPath InStation(string path) => new(InputFile.Station, path);
+
+    /// <summary>A column of the readings, or the readings as a whole.</summary>
+    public static FieldPath InReadings(string path) => new(InputFile.Readings, path);
 }
 
 /// <summary>

@@ -23,7 +23,8 @@ public static class Spelling
             .Where(word => word.Length <= LongestWord)
             .Select(word => (word, slips: Slips(written.ToUpperInvariant(), word.ToUpperInvariant())))
             .Where(candidate => candidate.slips <= near && candidate.slips < candidate.word.Length)
-            .MinBy(candidate => candidate.slips).word;
+            .OrderBy(candidate => candidate.slips)
+            .FirstOrDefault().word;
     }
 
     /// <summary>Optimal string alignment distance (the restricted form of Damerau 1964): insert, leave out, replace, exchange neighbours.</summary>

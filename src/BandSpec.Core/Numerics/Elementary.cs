@@ -16,6 +16,21 @@ internal static class Elementary
         return sum == 0 || double.IsInfinity(sum) ? Math.Log(sum) : Math.Log(sum) * (x / (sum - 1));
     }
 
+    /// <summary><c>ln(1 + x) − x</c> for x &gt; −1, which is near −x²/2: no digits lost as x goes to 0.</summary>
+    /// <remarks>
+    /// With <c>r = x/(2 + x)</c>, <c>ln(1 + x) = 2·artanh r</c> and <c>2r − x = −x·r</c>, so the difference starts at second order;
+    /// nine terms in r² are enough for |x| ≤ 0.3.
+    /// </remarks>
+    public static double LogOnePlusMinus(double x)
+    {
+        if (Math.Abs(x) > 0.3)
+            return LogOnePlus(x) - x;
+        double r = x / (2 + x), square = r * r, series = 0;
+        for (int k = 19; k >= 3; k -= 2)
+            series = series * square + 1.0 / k;
+        return r * (2 * square * series - x);
+    }
+
     /// <summary><c>e^x − 1</c>, to a few units in the last place also for tiny <paramref name="x"/>.</summary>
     /// <remarks>Kahan's correction, as above, with the roles exchanged.</remarks>
     public static double ExpMinusOne(double x)

@@ -39,6 +39,27 @@ internal static class Roots
         return a;
     }
 
+    /// <summary>
+    /// The root of a rising function, its bracket found by steps that double from <paramref name="step"/> on away from
+    /// <paramref name="start"/>. The function may be negative or positive infinity far out.
+    /// </summary>
+    /// <exception cref="ArgumentException">No change of sign within 200 doublings, or the function is not a number at the start.</exception>
+    public static double Rising(Func<double, double> f, double start, double step)
+    {
+        double value = f(start), from = start;
+        if (value == 0)
+            return start;
+        double towards = value < 0 ? step : -step;
+        for (int doubling = 0; doubling < StepLimit; doubling++)
+        {
+            double to = from + towards;
+            if (Math.Sign(f(to)) != Math.Sign(value))
+                return Bracketed(f, from, to);
+            (from, towards) = (to, 2 * towards);
+        }
+        throw new ArgumentException($"No root found from {start:R}.", nameof(f));
+    }
+
     private static double NextFraction(double a, double b, double c, double fa, double fb, double fc)
     {
         double place = (a - b) / (c - b), value = (fa - fb) / (fc - fb);

@@ -21,7 +21,7 @@ internal sealed class PlanFamilies
     {
         Requirement requirement = application.Requirement;
         scope = requirement.Compensation;
-        Candidates = CandidateTemperatures.Of(requirement);
+        Candidates = CandidateTemperatures.Of(scope, requirement.Temperature);
         All = [.. FamiliesOf(requirement, application.Station).OrderBy(f => f.Minutes).ThenBy(f => f.Count).ThenBy(f => f.First).ThenBy(f => f.Last)];
         DegreesOf = [.. Enumerable.Range(0, scope.MostTemperatures + 1).Select(n => DegreePairs(n, application.Platform))];
     }

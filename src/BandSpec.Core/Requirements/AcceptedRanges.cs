@@ -69,8 +69,11 @@ public static class AcceptedRanges
     /// <summary>Exponent of the time law of ageing.</summary>
     public static AcceptedRange TimeExponent { get; } = new(0, 2, "");
 
+    /// <summary>Temperature of an ageing test; colder, nothing would age in it.</summary>
+    public static AcceptedRange AgeingTemperature { get; } = new(-50, 500, "°C");
+
     /// <summary>Length of an ageing test.</summary>
-    public static AcceptedRange AgeingTest { get; } = new(0, 100_000, "h") { IsAbove = true };
+    public static AcceptedRange AgeingTest { get; } = new(1, 100_000, "h");
 
     /// <summary>Readings averaged at a point.</summary>
     public static AcceptedRange ReadingsAveraged { get; } = new(1, 10_000, "");

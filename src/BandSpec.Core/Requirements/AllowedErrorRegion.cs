@@ -18,12 +18,14 @@ public sealed record AllowedErrorRegion(Temperature From, Temperature To, Percen
     /// </summary>
     /// <param name="temperature">A temperature inside the region.</param>
     /// <param name="magnitude">The size of the pressure as a part of the span, <see cref="PressureRange.MagnitudeAt"/>.</param>
-    public double At(Temperature temperature, double magnitude)
+    public double At(Temperature temperature, double magnitude) => Math.Max(LimitAlong(temperature), 100 * OfReading * magnitude);
+
+    private double LimitAlong(Temperature temperature)
     {
-        double end = (LimitAtEnd ?? Limit).Percent;
         double width = (To - From).Kelvin;
-        double along = width > 0 ? (temperature - From).Kelvin / width : 0;
-        double line = ((1 - along) * Limit.Percent) + (along * end);
-        return Math.Max(line, 100 * OfReading * magnitude);
+        if (LimitAtEnd is not { } end || width <= 0)
+            return Limit.Percent;
+        double along = (temperature - From).Kelvin / width;
+        return ((1 - along) * Limit.Percent) + (along * end.Percent);
     }
 }

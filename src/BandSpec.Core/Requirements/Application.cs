@@ -26,18 +26,28 @@ public sealed class Application
         ArgumentNullException.ThrowIfNull(requirement);
         ArgumentNullException.ThrowIfNull(platform);
         ArgumentNullException.ThrowIfNull(station);
-        return Checked<Application>.Of(FindingsIn(requirement, platform, station), () => new Application(requirement, platform, station));
+        IReadOnlyList<Finding> findings =
+            FindingsIn(RequirementParts.Of(requirement), PlatformParts.Of(platform), StationParts.Of(station));
+        return Checked<Application>.Of(findings, () => new Application(requirement, platform, station));
     }
 
-    /// <summary>
-    /// The findings of every rule that can be judged: those of an input that could not be read are left out, and so is how it fits the others.
-    /// </summary>
-    /// <param name="requirement">The requirement, if there is one.</param>
-    /// <param name="platform">The platform, if there is one.</param>
-    /// <param name="station">The station, if there is one.</param>
-    public static IReadOnlyList<Finding> FindingsIn(Requirement? requirement, Platform? platform, Station? station)
+    /// <summary>The findings of every rule that can be judged of what was read.</summary>
+    /// <param name="requirement">The requirement as far as it was read.</param>
+    /// <param name="platform">The platform as far as it was read.</param>
+    /// <param name="station">The station as far as it was read.</param>
+    public static IReadOnlyList<Finding> FindingsIn(RequirementParts requirement, PlatformParts platform, StationParts station)
     {
+        ArgumentNullException.ThrowIfNull(requirement);
+        ArgumentNullException.ThrowIfNull(platform);
+        ArgumentNullException.ThrowIfNull(station);
         List<Finding> findings = [];
+        FileFindings ofRequirement = new(InputFile.Requirement, findings);
+        RequirementRules.Judge(requirement, ofRequirement);
+        PlatformRules.Judge(platform, new FileFindings(InputFile.Platform, findings));
+        StationRules.Judge(station, new FileFindings(InputFile.Station, findings));
+        // How inputs fit is only worth saying of figures that make sense in themselves.
+        if (!findings.Any(finding => finding.Rule == "out-of-range"))
+            CrossRules.Judge(requirement, platform, station, ofRequirement);
         return findings;
     }
 }

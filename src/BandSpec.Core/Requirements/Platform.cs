@@ -1,3 +1,4 @@
+using System.Globalization;
 using BandSpec.Core.Quantities;
 
 namespace BandSpec.Core.Requirements;
@@ -73,7 +74,20 @@ public enum PressureShape
 /// <summary>The name of a coefficient of <c>ψ_j(x)·τ^k</c>, written <c>zero.1</c> in files.</summary>
 /// <param name="Shape">The pressure shape <c>j</c>.</param>
 /// <param name="Degree">The power <c>k</c> of reduced temperature, 0 to 8.</param>
-public readonly record struct CoefficientName(PressureShape Shape, int Degree);
+public readonly record struct CoefficientName(PressureShape Shape, int Degree)
+{
+    /// <summary>The shape's word in files: <c>zero</c>, <c>span</c>, <c>bow</c> or <c>s-shape</c>.</summary>
+    public string Word => Shape switch
+    {
+        PressureShape.Zero => "zero",
+        PressureShape.Span => "span",
+        PressureShape.Bow => "bow",
+        _ => "s-shape",
+    };
+
+    /// <summary>The name as it is written in files: <c>zero.1</c>.</summary>
+    public override string ToString() => string.Create(CultureInfo.InvariantCulture, $"{Word}.{Degree}");
+}
 
 /// <summary>Statistics of one coefficient of the raw error, in %FS.</summary>
 /// <param name="Name">Which coefficient.</param>

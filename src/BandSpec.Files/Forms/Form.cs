@@ -28,7 +28,7 @@ internal abstract class Form
         {
             ListNode => "a list",
             MapNode => "keys with values",
-            ScalarNode { Text.Length: 0 } => "nothing",
+            ScalarNode { Text.Length: 0 } => "nothing is written here",
             ScalarNode scalar => $"`{Shorten(scalar.Text)}`",
             _ => null,
         };

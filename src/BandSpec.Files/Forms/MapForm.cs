@@ -8,7 +8,8 @@ namespace BandSpec.Files.Forms;
 /// <param name="what">What the map is, in words.</param>
 /// <param name="keys">Its keys in the order in which they are usually written.</param>
 /// <param name="build">Makes the record of values that were all read; null when it added a finding.</param>
-internal sealed class MapForm<T>(string what, IReadOnlyList<Key> keys, Func<MapValues, T?> build) : Form
+/// <param name="isLenient">Whether the record is made also when some values could not be read: it then has to ask for each.</param>
+internal sealed class MapForm<T>(string what, IReadOnlyList<Key> keys, Func<MapValues, T?> build, bool isLenient = false) : Form
     where T : class
 {
     internal override string Accepted => $"{what}: the keys {string.Join(", ", keys.Select(key => key.Name))}";
@@ -27,7 +28,10 @@ internal sealed class MapForm<T>(string what, IReadOnlyList<Key> keys, Func<MapV
             else if (key.IsRequired)
                 complete = Miss(key, map, path, reading);
         }
-        return complete && build(values) is { } built && !values.HasComplaint ? built : null;
+        if (!complete && !isLenient)
+            return null;
+        T? built = build(values);
+        return values.HasComplaint && !isLenient ? null : built;
     }
 
     /// <summary>

@@ -17,7 +17,7 @@ internal sealed class QuantityForm<T>(string what, string range, string example,
 {
     internal override string Accepted => $"{what} with its unit, such as `{example}`";
 
-    private string UnitNames => string.Join(", ", units.Select(unit => unit.Symbol));
+    private string UnitNames => (units.Count == 1 ? "unit: " : "units: ") + string.Join(", ", units.Select(unit => unit.Symbol));
 
     internal override void Describe(Utf8JsonWriter schema)
     {
@@ -53,7 +53,7 @@ internal sealed class QuantityForm<T>(string what, string range, string example,
             return Numbers.TryRead(text[..length], out number, out why);
         // Not a number followed by a unit: say what is wrong with the first word if that is to be a number, else show what is wanted.
         string first = text.Split(' ', 2)[0];
-        why = length == text.Length ? new Misreading("unit", $"`{Shorten(text)}` without a unit", $"{Accepted}; units: {UnitNames}")
+        why = length == text.Length ? new Misreading("unit", $"`{Shorten(text)}` without a unit", $"{Accepted}; {UnitNames}")
             : length > 0 || first.Length < text.Length ? BadNumber(first)
             : new Misreading("kind", $"`{Shorten(text)}`", Accepted);
         return false;
@@ -66,6 +66,6 @@ internal sealed class QuantityForm<T>(string what, string range, string example,
         Numbers.TryRead(first, out _, out Misreading? why) ? new Misreading("kind", $"`{Shorten(first)}`", Accepted) : why;
 
     private Misreading WrongUnit(string text, string symbol) =>
-        new("unit", $"`{Shorten(text)}` is not {what}: unit `{Shorten(symbol)}`", $"units: {UnitNames}",
+        new("unit", $"`{Shorten(text)}` is not {what}: unit `{Shorten(symbol)}`", UnitNames,
             Spelling.Nearest(symbol, units.SelectMany(unit => unit.Spellings)));
 }

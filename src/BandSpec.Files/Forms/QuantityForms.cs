@@ -31,7 +31,7 @@ internal static class QuantityForms
 
     /// <summary>An error: percent of span, or a pressure that is converted with the requirement's span.</summary>
     internal static QuantityForm<PercentOfSpan> Error { get; } = new(
-        "an error", "any number", "0.5 %FS",
+        "an error", "a part of the span", "0.5 %FS",
         [new("%FS", MakeError), .. PressureUnit.All.Select(unit => new Unit<PercentOfSpan>(unit.Symbol, MakeErrorFrom(unit)))]);
 
     /// <summary>A length of time.</summary>
@@ -78,7 +78,9 @@ internal static class QuantityForms
     private static MakeQuantity<PercentOfSpan> MakeErrorFrom(PressureUnit unit) => (double number, Reading reading, out PercentOfSpan value) =>
     {
         reading.SpanIsMissed |= reading.SpanInPascals is null;
-        return MakeError(100 * number * unit.Pascals / (reading.SpanInPascals ?? 1), reading, out value);
+        double percent = 100 * number * unit.Pascals / (reading.SpanInPascals ?? 1);
+        bool finite = double.IsFinite(percent);
+        return MakeError(finite ? percent : 0, reading, out value) && finite;
     };
 
     private static MakeQuantity<Duration> MakeTime(double hours) => (double number, Reading _, out Duration value) =>

@@ -18,17 +18,25 @@ public static class InputReading
         double? span = asked.Find(RequirementForm.Pressure)?.SpanInPascals;
         OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, open);
         OpenedFile? line = Follow(asked, RequirementForm.StationFile, InputFile.Station, open);
-        Requirement? wanted = asked.Read(RequirementForm.Form, span);
-        Platform? platform = family?.Read(PlatformForm.Form, span);
-        Station? station = line?.Read(StationForm.Form, span);
+        RequirementParts wanted = asked.Read(RequirementForm.Form, span) ?? new RequirementParts();
+        PlatformParts platform = family?.Read(PlatformForm.Form, span) ?? new PlatformParts();
+        StationParts station = line?.Read(StationForm.Form, span) ?? new StationParts();
 
         OpenedFile[] files = [.. new[] { asked, family, line }.OfType<OpenedFile>()];
         foreach (Finding finding in Application.FindingsIn(wanted, platform, station))
             files.First(file => file.Kind == finding.Field.File).Place(finding);
         PlacedFinding[] findings = [.. files.SelectMany(file => file.PlacedFindings())];
         InputSource[] sources = [.. files.Select(file => file.Source).OfType<InputSource>()];
-        Application? application = findings.Length == 0 ? Application.Check(wanted!, platform!, station!).Value : null;
-        return new InputSet(application, sources, findings);
+        return new InputSet(findings.Length == 0 ? Whole(asked, wanted, platform, station) : null, sources, findings);
+    }
+
+    /// <summary>The application of three inputs without a finding.</summary>
+    private static Application Whole(OpenedFile asked, RequirementParts wanted, PlatformParts platform, StationParts station)
+    {
+        Requirement requirement = RequirementForm.Whole(
+            wanted, asked.Find(RequirementForm.PlatformFile)!, asked.Find(RequirementForm.StationFile)!);
+        return Application.Check(requirement, PlatformForm.Whole(platform), StationForm.Whole(station)).Value
+            ?? throw new InvalidOperationException("the rules judge a whole input and its parts alike");
     }
 
     /// <summary>Opens the file that a key of the requirement names; a file that cannot be had is a finding at that key.</summary>

@@ -40,7 +40,7 @@ internal sealed class OpenedFile
             ? key.Form.Read(entry.Value, key.Name, new Reading(new FoundFaults(Kind), null)) as T
             : null;
 
-    /// <summary>The file's record; null when something is missing or cannot be read.</summary>
+    /// <summary>What could be read of the file; null when it is no YAML, or has errors that are parts of an unknown span.</summary>
     internal T? Read<T>(MapForm<T> form, double? spanInPascals)
         where T : class
     {

@@ -55,16 +55,26 @@ internal static class PlatformForm
     private static readonly Key<Ageing> Ageing = new("ageing", AgeingForm.Form, "Drift with time and temperature.");
 
     /// <summary>The form.</summary>
-    internal static MapForm<Platform> Form { get; } = new(
+    internal static MapForm<PlatformParts> Form { get; } = new(
         "a platform", [Family, Range, Rating, Raw, Correction, PressureHysteresis, ThermalHysteresis, Repeatability, Ageing],
-        v => new Platform
+        v => new PlatformParts
         {
-            Name = v.Of(Family).Name, Revision = v.Of(Family).Revision, Temperature = v.Of(Range), Pressure = v.Of(Rating),
-            RawError = v.Of(Raw).Coefficients, Correlations = v.Of(Raw).Correlations,
-            ZeroDegree = v.Of(Correction).Zero, SpanDegree = v.Of(Correction).Span,
-            PressureHysteresis = v.Of(PressureHysteresis), ThermalHysteresis = v.Of(ThermalHysteresis),
-            Repeatability = v.Of(Repeatability), Ageing = v.Of(Ageing),
-        });
+            Name = v.Find(Family)?.Name, Revision = v.Find(Family)?.Revision, Temperature = v.Find(Range), Pressure = v.Find(Rating),
+            RawError = v.Find(Raw)?.Coefficients, Correlations = v.Find(Raw)?.Correlations,
+            ZeroDegree = v.Find(Correction)?.Zero, SpanDegree = v.Find(Correction)?.Span,
+            PressureHysteresis = v.Find(PressureHysteresis), ThermalHysteresis = v.Find(ThermalHysteresis),
+            Repeatability = v.FindValue(Repeatability), Ageing = v.Find(Ageing),
+        },
+        isLenient: true);
+
+    /// <summary>The platform whose parts were all read.</summary>
+    internal static Platform Whole(PlatformParts parts) => new()
+    {
+        Name = parts.Name!, Revision = parts.Revision!, Temperature = parts.Temperature!, Pressure = parts.Pressure!,
+        RawError = parts.RawError!, Correlations = parts.Correlations!, ZeroDegree = parts.ZeroDegree!.Value, SpanDegree = parts.SpanDegree!.Value,
+        PressureHysteresis = parts.PressureHysteresis!, ThermalHysteresis = parts.ThermalHysteresis!,
+        Repeatability = parts.Repeatability!.Value, Ageing = parts.Ageing!,
+    };
 }
 
 /// <summary>A family's name and the revision of its statistics.</summary>

@@ -40,19 +40,29 @@ internal static class RequirementForm
         "rounding", DesignForms.Rounding, "Steps to which printed and tested values are rounded.");
 
     /// <summary>The form.</summary>
-    internal static MapForm<Requirement> Form { get; } = new(
+    internal static MapForm<RequirementParts> Form { get; } = new(
         "a requirement",
         [
             Identity, PlatformFile, StationFile, Pressure, Output, Temperature, AllowedError, SafetyFactor, Capability,
             HeldTerms, FurtherTerms, Compensation, Test, Rounding,
         ],
-        v => new Requirement
+        v => new RequirementParts
         {
-            Identity = v.Of(Identity), PlatformFile = v.Of(PlatformFile), StationFile = v.Of(StationFile),
-            Pressure = v.Of(Pressure), Output = v.Of(Output),
-            Temperature = v.Of(Temperature).Range, Profile = v.Of(Temperature).Profile,
-            AllowedError = v.Of(AllowedError), SafetyFactor = v.Of(SafetyFactor), Capability = v.Of(Capability),
-            HeldTerms = v.Of(HeldTerms), FurtherTerms = v.Of(FurtherTerms),
-            Compensation = v.Of(Compensation), Test = v.Of(Test), Rounding = v.Of(Rounding),
-        });
+            Identity = v.Find(Identity), Pressure = v.Find(Pressure), Output = v.Find(Output),
+            Temperature = v.Find(Temperature)?.Range, Profile = v.Find(Temperature)?.Profile,
+            AllowedError = v.Find(AllowedError), SafetyFactor = v.FindValue(SafetyFactor), Capability = v.Find(Capability),
+            HeldTerms = v.Find(HeldTerms), FurtherTerms = v.Find(FurtherTerms),
+            Compensation = v.Find(Compensation), Test = v.Find(Test), Rounding = v.Find(Rounding),
+        },
+        isLenient: true);
+
+    /// <summary>The requirement whose parts were all read.</summary>
+    internal static Requirement Whole(RequirementParts parts, string platformFile, string stationFile) => new()
+    {
+        Identity = parts.Identity!, PlatformFile = platformFile, StationFile = stationFile, Pressure = parts.Pressure!, Output = parts.Output!,
+        Temperature = parts.Temperature!, Profile = parts.Profile!, AllowedError = parts.AllowedError!,
+        SafetyFactor = parts.SafetyFactor!.Value, Capability = parts.Capability!,
+        HeldTerms = parts.HeldTerms!, FurtherTerms = parts.FurtherTerms!,
+        Compensation = parts.Compensation!, Test = parts.Test!, Rounding = parts.Rounding!,
+    };
 }

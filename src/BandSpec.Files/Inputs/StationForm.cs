@@ -42,15 +42,24 @@ internal static class StationForm
     private static readonly Key<Money> RejectCost = new("reject-cost", ChamberForm.Sum, "What one rejected unit costs.");
 
     /// <summary>The form.</summary>
-    internal static MapForm<Station> Form { get; } = new(
+    internal static MapForm<StationParts> Form { get; } = new(
         "a station",
         [Line, Standard, ReadingNoise, ReadingsAveraged, SoakGradient, PressurePoints, TestPoints, Chamber, RejectCost],
-        v => new Station
+        v => new StationParts
         {
-            Name = v.Of(Line), StandardZero = v.Of(Standard).Zero, StandardProportional = v.Of(Standard).Proportional,
-            ReadingNoise = v.Of(ReadingNoise), ReadingsAveraged = v.Of(ReadingsAveraged), SoakGradient = v.Of(SoakGradient),
-            PressurePoints = v.Of(PressurePoints), TestPoints = v.Of(TestPoints), Chamber = v.Of(Chamber), RejectCost = v.Of(RejectCost),
-        });
+            Name = v.Find(Line), StandardZero = v.Find(Standard)?.Zero, StandardProportional = v.Find(Standard)?.Proportional,
+            ReadingNoise = v.FindValue(ReadingNoise), ReadingsAveraged = v.FindValue(ReadingsAveraged), SoakGradient = v.FindValue(SoakGradient),
+            PressurePoints = v.Find(PressurePoints), TestPoints = v.Find(TestPoints), Chamber = v.Find(Chamber), RejectCost = v.Find(RejectCost),
+        },
+        isLenient: true);
+
+    /// <summary>The station whose parts were all read.</summary>
+    internal static Station Whole(StationParts parts) => new()
+    {
+        Name = parts.Name!, StandardZero = parts.StandardZero!.Value, StandardProportional = parts.StandardProportional!.Value,
+        ReadingNoise = parts.ReadingNoise!.Value, ReadingsAveraged = parts.ReadingsAveraged!.Value, SoakGradient = parts.SoakGradient!.Value,
+        PressurePoints = parts.PressurePoints!, TestPoints = parts.TestPoints!, Chamber = parts.Chamber!, RejectCost = parts.RejectCost!,
+    };
 }
 
 /// <summary>Standard uncertainties of a pressure standard.</summary>

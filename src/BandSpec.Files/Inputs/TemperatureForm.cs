@@ -31,11 +31,15 @@ internal static class TemperatureForm
     /// <summary>The form.</summary>
     internal static MapForm<TemperatureSection> Form { get; } = new(
         "the operating temperatures", [Lower, Upper, Reference, ServiceLife, Profile],
-        v => new TemperatureSection(new OperatingTemperature(v.Of(Lower), v.Of(Upper), v.Of(Reference)), ReadProfile(v)));
+        v => new TemperatureSection(ReadRange(v), ReadProfile(v)), isLenient: true);
 
-    private static IReadOnlyList<DwellBin> ReadProfile(MapValues v)
+    private static OperatingTemperature? ReadRange(MapValues v) =>
+        v.Has(Lower) && v.Has(Upper) && v.Has(Reference) ? new OperatingTemperature(v.Of(Lower), v.Of(Upper), v.Of(Reference)) : null;
+
+    private static DwellBin[]? ReadProfile(MapValues v)
     {
-        IReadOnlyList<WrittenBin> bins = v.Of(Profile);
+        if (v.Find(Profile) is not { } bins)
+            return null;
         int shares = bins.Count(bin => bin.Dwell.Percent is not null);
         if (shares != 0 && shares != bins.Count)
             v.Complain(
@@ -47,6 +51,8 @@ internal static class TemperatureForm
                 shares > 0 ? "`service-life`, such as `15 y`" : "leave `service-life` out, or give every dwell in percent");
         else if (shares > 0 && bins.Sum(bin => bin.Dwell.Percent!.Value) is var sum && Math.Abs(sum - 100) > ShareSlack)
             v.Complain(Profile, "profile-sum", FormattableString.Invariant($"dwells of {sum:0.###} % in all"), "100 % in all");
+        if (v.HasComplaint)
+            return null;
         double life = v.Has(ServiceLife) ? v.Of(ServiceLife).Hours : 0;
         return [.. bins.Select(bin => new DwellBin(
             bin.From, bin.To, bin.Dwell.Time ?? Duration.FromHours(bin.Dwell.Percent!.Value / 100 * life)))];
@@ -56,5 +62,5 @@ internal static class TemperatureForm
 /// <summary>A bin as it was written.</summary>
 internal sealed record WrittenBin(Temperature From, Temperature To, Dwell Dwell);
 
-/// <summary>What a requirement says about temperature.</summary>
-internal sealed record TemperatureSection(OperatingTemperature Range, IReadOnlyList<DwellBin> Profile);
+/// <summary>What a requirement says about temperature, as far as it could be read.</summary>
+internal sealed record TemperatureSection(OperatingTemperature? Range, IReadOnlyList<DwellBin>? Profile);

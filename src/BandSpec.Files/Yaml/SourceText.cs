@@ -24,7 +24,7 @@ internal sealed class SourceText
     /// <summary>A line counted from 1; empty outside the file.</summary>
     internal string Line(int number) => number >= 1 && number <= Lines.Count ? Lines[number - 1] : "";
 
-    /// <summary>Decodes a file. What keeps it from being read is added to the findings; the text is then empty.</summary>
+    /// <summary>Decodes a file. What keeps it from being read is added to the findings; the text is then not to be read.</summary>
     internal static SourceText Decode(ReadOnlySpan<byte> bytes, FoundFaults faults)
     {
         if (bytes.Length > LargestFile)
@@ -36,7 +36,8 @@ internal sealed class SourceText
         try
         {
             SourceText source = new(Strict.GetString(bytes));
-            return source.HasOddCharacter(faults) ? new SourceText("") : source;
+            source.RefuseOddCharacter(faults);
+            return source;
         }
         catch (DecoderFallbackException)
         {
@@ -54,7 +55,7 @@ internal sealed class SourceText
     /// Looks for characters that an editor does not show, or that make a line show something else than it says. Only the first is reported: a
     /// file with one of them mostly has many.
     /// </summary>
-    private bool HasOddCharacter(FoundFaults faults)
+    private void RefuseOddCharacter(FoundFaults faults)
     {
         for (int line = 0; line < Lines.Count; line++)
         {
@@ -64,8 +65,7 @@ internal sealed class SourceText
             faults.Add(
                 new Extent(line + 1, column + 1, 1), "", "odd-character",
                 $"an invisible character, U+{(int)Lines[line][column]:X4}", "printable text, spaces and line ends");
-            return true;
+            return;
         }
-        return false;
     }
 }

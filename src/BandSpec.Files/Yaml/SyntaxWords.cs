@@ -12,6 +12,8 @@ internal static class SyntaxWords
     internal static string Of(YamlException fault)
     {
         string words = fault.Message.Trim().TrimEnd('.');
+        if (words.Contains("tab", StringComparison.Ordinal))
+            return "a tab where only spaces can indent";
         return words.Length == 0 ? "no sense can be made of this" : char.ToLowerInvariant(words[0]) + words[1..];
     }
 }

@@ -95,7 +95,7 @@ internal sealed class TreeReading
                 entries.Add(new MapEntry(text, Owned(value, text)));
         }
         Extent extent = start.Style == MappingStyle.Flow || entries.Count == 0 ? ExtentOf(start.Start, parser.Current!.End) : entries[0].Key.Extent;
-        return new MapNode(extent, entries);
+        return new MapNode(extent, SplitNumbers.Join(entries, faults));
     }
 
     private void RefuseAgain(ScalarNode key, int firstLine) => faults.Add(
@@ -131,7 +131,7 @@ internal sealed class TreeReading
         }
         catch (YamlException fault)
         {
-            throw new UnreadableException(ExtentOf(fault.Start, fault.Start), "syntax", SyntaxWords.Of(fault), SyntaxWords.Accepted);
+            throw new UnreadableException(ExtentOf(fault.End, fault.End), "syntax", SyntaxWords.Of(fault), SyntaxWords.Accepted);
         }
         catch (Exception fault) when (fault is InvalidOperationException or ArgumentException or IndexOutOfRangeException or FormatException)
         {

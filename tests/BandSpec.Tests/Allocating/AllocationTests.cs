@@ -48,7 +48,7 @@ public sealed class AllocationTests
         budgets =>
         {
             double[] exact = ProgressiveFilling.Fill(budgets.List, budgets.Held), naive = NaiveFilling(budgets.List, budgets.Held);
-            return exact.Zip(naive, (e, n) => Math.Abs(e - n) <= 2 * Step * Math.Max(1, e)).All(same => same);
+            return exact.Zip(naive, (e, n) => Math.Abs(e - n) <= Allowed * Math.Max(1, e)).All(same => same);
         },
         iter: 200);
 
@@ -99,7 +99,13 @@ public sealed class AllocationTests
         }
     }
 
-    private const double Step = 1e-3;
+    private const double Step = 2e-4;
+
+    /// <summary>
+    /// The naive filling stops each slot up to a step early, and what it left over lets later ones rise further: by up to
+    /// (m·s²) early over (m·s²) late, at most ten for each of five others with the variances drawn here.
+    /// </summary>
+    private const double Allowed = 5 * 10 * Step;
 
     /// <summary>Raises all free multipliers together by small steps and stops each when one of its budgets would overflow.</summary>
     private static double[] NaiveFilling(IReadOnlyList<Budget> budgets, IReadOnlyList<double?> held)

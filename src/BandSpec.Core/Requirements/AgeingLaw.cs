@@ -1,8 +1,7 @@
 using BandSpec.Core.Numerics;
 using BandSpec.Core.Quantities;
-using BandSpec.Core.Requirements;
 
-namespace BandSpec.Core.Residuals;
+namespace BandSpec.Core.Requirements;
 
 /// <summary>Ageing over a temperature profile: Arrhenius in temperature, a power law in time.</summary>
 public static class AgeingLaw
