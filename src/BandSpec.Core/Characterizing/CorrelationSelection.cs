@@ -1,6 +1,5 @@
 using BandSpec.Core.Numerics;
 using BandSpec.Core.Numerics.NestedModels;
-using MathNet.Numerics.Distributions;
 
 namespace BandSpec.Core.Characterizing;
 
@@ -24,7 +23,7 @@ internal static class CorrelationSelection
             if (open.Count == 0)
                 return fit;
             (int First, int Second) clearest = open.MaxBy(pair => Score(fit.Fit, pair));
-            if (Score(fit.Fit, clearest) < ChiSquared.InvCDF(1, 1 - (FamilyLevel / open.Count)))
+            if (Score(fit.Fit, clearest) < ChiSquared.Quantile(1 - (FamilyLevel / open.Count), 1))
                 return fit;
             fit = fit.WithPair(clearest);
         }

@@ -1,5 +1,3 @@
-using MathNet.Numerics.Distributions;
-
 namespace BandSpec.Core.Numerics.NestedModels;
 
 /// <summary>A variance estimated as the excess of a mean square over what the members' own estimates scatter.</summary>
@@ -24,7 +22,7 @@ internal readonly record struct VarianceEstimate(double Variance, double Samplin
         if (!double.IsFinite(StandardError) || !(Freedom > 0))
             return new Interval(0, double.PositiveInfinity);
         double square = Variance + Sampling, freedom = Freedom, tail = (1 - confidence) / 2, sampling = Sampling;
-        double Root(double quantile) => Math.Sqrt(Math.Max(0, (square * freedom / ChiSquared.InvCDF(freedom, quantile)) - sampling));
+        double Root(double quantile) => Math.Sqrt(Math.Max(0, (square * freedom / ChiSquared.Quantile(quantile, freedom)) - sampling));
         return new Interval(Root(1 - tail), Root(tail));
     }
 }
