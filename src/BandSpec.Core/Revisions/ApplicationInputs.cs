@@ -1,3 +1,4 @@
+using BandSpec.Core.Findings;
 using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Revisions;
@@ -8,6 +9,6 @@ internal sealed record ApplicationInputs(Requirement Requirement, Platform Platf
     /// <summary>The inputs of an application.</summary>
     public static ApplicationInputs Of(Application application) => new(application.Requirement, application.Platform, application.Station);
 
-    /// <summary>The application, if the inputs fit each other.</summary>
-    public Application? Check() => Application.Check(Requirement, Platform, Station).Value;
+    /// <summary>The application, or why the inputs do not fit each other.</summary>
+    public Checked<Application> Check() => Application.Check(Requirement, Platform, Station);
 }

@@ -1,6 +1,3 @@
-using BandSpec.Core.Requirements;
-using BandSpec.Core.Specifying;
-
 namespace BandSpec.Core.Revisions;
 
 /// <summary>A part of the inputs that changed, and what its change does alone: the older inputs solved again with this part of the newer.</summary>
@@ -40,31 +37,4 @@ public sealed record Cause(
         FigureSubject.Verification => change.Name is VerificationFigures.LowerLimit or VerificationFigures.UpperLimit,
         _ => false,
     };
-}
-
-/// <summary>Swaps parts of the newer inputs into the older ones.</summary>
-internal sealed class InputSwaps(Comparison comparison)
-{
-    private readonly ApplicationInputs old = ApplicationInputs.Of(comparison.Old.Application);
-    private readonly ApplicationInputs now = ApplicationInputs.Of(comparison.New.Application);
-
-    /// <summary>The groups that changed; those that do not fit the older inputs alone are joined into one.</summary>
-    public IEnumerable<IReadOnlyList<InputGroup>> Groups()
-    {
-        List<InputGroup> changed = [.. InputGroup.All.Where(group => Comparison.InputsBetween(old, group.Swap(old, now)).Count > 0)];
-        List<InputGroup> joined = [.. changed.Where(group => group.Swap(old, now).Check() is null)];
-        IEnumerable<IReadOnlyList<InputGroup>> alone = changed.Except(joined).Select(group => (IReadOnlyList<InputGroup>)[group]);
-        return joined.Count == 0 ? alone : alone.Append(joined);
-    }
-
-    /// <summary>What the groups' change does alone.</summary>
-    public Cause CauseOf(IReadOnlyList<InputGroup> groups, CancellationToken cancellation)
-    {
-        ApplicationInputs swapped = groups.Aggregate(old, (inputs, group) => group.Swap(inputs, now));
-        Application? application = swapped.Check();
-        return new Cause(
-            [.. groups.Select(group => (group.Subject, group.Name))],
-            Comparison.InputsBetween(old, swapped),
-            application is null ? null : Comparison.Of(comparison.Old, SpecificationDraft.Draft(application, null, cancellation)).Outcome);
-    }
 }

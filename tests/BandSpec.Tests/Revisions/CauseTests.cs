@@ -24,6 +24,25 @@ public sealed class CauseTests
     }
 
     [Fact]
+    public void The_causes_together_name_every_changed_field_that_enters_the_result()
+    {
+        Comparison comparison = Comparison.Of(Drafted.First, Drafted.Variants[^1]);
+        string[] named = [.. Cause.Of(comparison).SelectMany(c => c.Inputs).Select(c => $"{c.Subject} {c.Name}").Distinct().Order()];
+        string[] changed = [.. comparison.Inputs.Select(c => $"{c.Subject} {c.Name}").Where(n => !n.StartsWith("Requirement specification.", StringComparison.Ordinal)).Order()];
+        Assert.Equal(changed.Where(n => n != "Platform platform.name"), named);
+    }
+
+    [Fact]
+    public void Parts_that_do_not_fit_the_older_inputs_one_by_one_are_swapped_together()
+    {
+        Cause[] joined = [.. Cause.Of(Comparison.Of(Drafted.First, Drafted.Variants[^1])).Where(c => c.Names.Count > 1)];
+        Assert.Equal(
+            ["temperature + temperature.profile + allowed-error", "chamber + reject-cost"],
+            joined.Select(c => string.Join(" + ", c.Names.Select(n => n.Key))));
+        Assert.All(joined, c => Assert.NotNull(c.Outcome));
+    }
+
+    [Fact]
     public void A_change_that_moves_no_limit_is_listed_with_no_movement()
     {
         Station station = Given.Station with { RejectCost = new Money(100, "EUR") };

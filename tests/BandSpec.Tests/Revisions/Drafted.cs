@@ -33,7 +33,7 @@ internal static class Drafted
     private static Specification Everything() => Of(
         Requirement with
         {
-            Identity = Requirement.Identity with { Number = "XY-9", Revision = "C", Changes = [.. Requirement.Identity.Changes, new RevisionNote("C", new DateOnly(2027, 1, 5), "Other skid")] },
+            Identity = Requirement.Identity with { Number = "XY-9", Revision = "C", Date = new DateOnly(2027, 1, 5), Changes = [.. Requirement.Identity.Changes, new RevisionNote("C", new DateOnly(2027, 1, 5), "Other skid")] },
             Pressure = new PressureRange(Pressure.From(0, PressureUnit.Psi), Pressure.From(400, PressureUnit.Psi), PressureReference.Absolute),
             Temperature = new OperatingTemperature(Given.C(-10), Given.C(120), Given.C(20)),
             Profile = [new DwellBin(Given.C(-10), Given.C(120), Duration.FromHours(40000))],
@@ -44,5 +44,5 @@ internal static class Drafted
             Rounding = new RoundingSteps(Given.P(0.1), Given.P(0.02)),
         },
         Given.Platform with { Name = "SK-41", RawError = [.. Given.Platform.RawError.Skip(1)], Correlations = [] },
-        Given.Station with { TestPoints = new PressureLists([0, 0.4, 1], [0, 1]), Chamber = Given.Station.Chamber with { HourlyRate = new Money(80, "USD") } });
+        Given.Station with { TestPoints = new PressureLists([0, 0.4, 1], [0, 1]), Chamber = Given.Station.Chamber with { HourlyRate = new Money(80, "USD") }, RejectCost = new Money(20, "USD") });
 }
