@@ -1,0 +1,120 @@
+using System.Globalization;
+using BandSpec.Core.Bands;
+using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.Specifying;
+
+namespace BandSpec.Documents.Printing;
+
+/// <summary>Rounds a finished specification, once: bands up, limits inward, margins down.</summary>
+internal sealed class PrintViewMaker
+{
+    private const double MarginStep = 0.001, CapabilityStep = 0.01;
+    private const int SigmaDecimals = 3;
+
+    private readonly Specification _specification;
+    private readonly Requirement _requirement;
+    private readonly string _sign;
+    private readonly int _bandDecimals;
+
+    public PrintViewMaker(Specification specification, string decimalSign)
+    {
+        (_specification, _requirement, _sign) = (specification, specification.Application.Requirement, decimalSign);
+        _bandDecimals = Rounded.Decimals(_requirement.Rounding.Band.Percent);
+        Regions = [.. specification.Bands.Regions.Select(Region)];
+    }
+
+    private IReadOnlyList<RegionView> Regions { get; }
+
+    public PrintView Make(IReadOnlyList<DigestView> inputs, string program, string standing)
+    {
+        var inputViews = new InputViews(_requirement, _sign);
+        var platform = _specification.Application.Platform;
+        return new PrintView(
+            inputViews.Identity, inputViews.Range(platform), inputViews.Output, inputViews.Temperature, Profile(inputViews), Regions,
+            Verdict(), new PlanViews(_specification, _sign).Plan, [.. Terms()], [.. Derived()],
+            [.. new PointViews(_requirement).Of(_specification.VerificationPoints)], Test(),
+            platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign);
+    }
+
+    private string Shown(Rounded figure) => figure.Shown(_sign);
+
+    private string Band(PercentOfSpan value) => Shown(Rounded.Up(value.Percent, _requirement.Rounding.Band.Percent));
+
+    private string Limit(PercentOfSpan value) => Shown(Rounded.Down(value.Percent, _requirement.Rounding.Limit.Percent));
+
+    // What is nothing by its nature is told apart from what rounds to nothing.
+    private string Sigma(PercentOfSpan value) => value.Percent == 0 ? "0" : Shown(Rounded.Nearest(value.Percent, SigmaDecimals));
+
+    private string Margin(double value) => double.IsInfinity(value) ? "\u221e" : Shown(Rounded.Down(value, MarginStep));
+
+    private RegionView Region(RegionBand band, int index)
+    {
+        var allowance = _requirement.AllowedError[index];
+        string Allowed(double percent) => Shown(Rounded.Given(percent, _bandDecimals));
+        return new RegionView(
+            Shown(Rounded.Given(band.From.Celsius)), Shown(Rounded.Given(band.To.Celsius)),
+            Allowed(band.AllowedTightest.Percent), Allowed(allowance.Limit.Percent),
+            allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
+            allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
+            Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
+            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, 6))), Shown(Rounded.Given(band.Worst.Temperature.Celsius)));
+    }
+
+    private ProfileView Profile(InputViews inputs)
+    {
+        var figures = _specification.Profile;
+        return new ProfileView(
+            inputs.Bins, inputs.Hours, inputs.Years, Shown(Rounded.Nearest(figures.RmsError.Percent, _bandDecimals + 1)),
+            Shown(Rounded.PerMillion(figures.OutsideProbability)), Shown(Rounded.Nearest(figures.EquivalentTime.Hours, 0)), Shown(Rounded.Nearest(figures.AgeFactor, 2)));
+    }
+
+    private VerdictView Verdict()
+    {
+        var bands = _specification.Bands;
+        var tightest = Enumerable.Range(0, Regions.Count).MinBy(i => bands.Regions[i].AllowedTightest.Percent);
+        return new VerdictView(
+            _specification.Feasible, Margin(bands.Margin), Margin(_specification.Floor.Margin), _specification.Floor.Margin >= 1,
+            Regions[bands.Worst.Region], Regions[tightest]);
+    }
+
+    private TestView Test()
+    {
+        var (rules, capability) = (_requirement.Test, _requirement.Capability);
+        string Given(double value) => Shown(Rounded.Given(value));
+        return new TestView(
+            Given(rules.GuardBand), rules.GuardBand > 0, Given(capability.Sample), Given(capability.LongRun),
+            Shown(Rounded.Nearest(3 * capability.Sample, 2)), Shown(Rounded.Nearest(3 * capability.LongRun, 2)),
+            Given(_requirement.SafetyFactor), Given(_requirement.Rounding.Band.Percent), Given(_requirement.Rounding.Limit.Percent),
+            _specification.Application.Station.ReadingsAveraged.ToString(CultureInfo.InvariantCulture));
+    }
+
+    // A region's own terms are shown at the region's point of least margin, shared terms at that of the whole range.
+    private IEnumerable<TermView> Terms()
+    {
+        foreach (var share in _specification.Bands.Worst.Terms)
+        {
+            var allotted = _specification.Allocation.Terms.Where(t => t.Term == share.Term).ToList();
+            var perRegion = share.Term.Scope == Core.Residuals.TermScope.Region;
+            if (!perRegion) yield return Term(share, null, allotted.FirstOrDefault());
+            else
+                for (int r = 0; r < Regions.Count; r++)
+                    yield return Term(_specification.Bands.Regions[r].Worst.Terms.First(t => t.Term == share.Term), r, allotted.FirstOrDefault(t => t.Region == r));
+        }
+    }
+
+    private TermView Term(TermShare share, int? region, Core.Allocating.TermAllocation? allotted)
+    {
+        var group = TermGroups.Of(share.Term.Key);
+        return new TermView(
+            group, share.Term.Key, group == TermGroups.Further ? share.Term.Key : "", region is { } r ? Regions[r] : null,
+            Sigma(share.Added), Sigma(share.SigmaSample), Sigma(share.SigmaLongRun),
+            allotted is null ? "" : Limit(allotted.Limit),
+            allotted is null ? "" : double.IsInfinity(allotted.Capability) ? "\u221e" : Shown(Rounded.Down(allotted.Capability, CapabilityStep)),
+            allotted is null ? "" : Shown(Rounded.PerMillion(allotted.OutsideFraction)),
+            allotted?.Held ?? false);
+    }
+
+    private IEnumerable<DerivedView> Derived() => _specification.DerivedLimits.GroupBy(d => d.Name).SelectMany(g => g).Select(d =>
+        new DerivedView(TermGroups.OfDerived(d.Name), d.Name, d.Region is { } r ? Regions[r] : null, Limit(d.Limit)));
+}
