@@ -1,6 +1,5 @@
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
-using BandSpec.Core.Residuals;
 using BandSpec.Tests.Numerics;
 using Xunit;
 

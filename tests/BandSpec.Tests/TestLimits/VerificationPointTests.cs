@@ -1,5 +1,6 @@
 using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
 using Xunit;
@@ -77,15 +78,15 @@ public sealed class VerificationPointTests
         }
     }
 
+    /// <summary>A guard band wider than the tolerance leaves an empty interval, and an empty interval accepts nothing.</summary>
     [Fact]
-    public void Nothing_is_accepted_where_the_station_eats_the_tolerance()
+    public void Limits_turned_over_accept_nothing()
     {
-        Station blunt = Given.Station with { ReadingNoise = Given.P(2) };
-        var application = Given.Application(Given.Requirement with { Test = new VerificationRules(3, null) }, station: blunt);
-        BandMap bands = BandMap.Of(application, Plan);
-        VerificationPoint point = VerificationPoint.AllOf(application, Plan, bands, Allocation.Of(application, Plan, bands))[0];
-        Assert.True(point.Lower > point.Upper);
-        Assert.Equal(0, point.ConsumerRisk);
+        (decimal lower, decimal upper) = AcceptanceLimits.Of(Given.Requirement, 0.5, -0.2);
+        Assert.True(lower > upper);
+        Interval accepted = AcceptanceLimits.InPercent(Given.Requirement.Output, 0.5, lower, upper);
+        Assert.True(accepted.IsEmpty);
+        Assert.Equal(0, ConformityRisk.Of(0, 0.1, 0.02, Interval.Symmetric(0.5), accepted).Consumer);
     }
 
     private static IReadOnlyList<VerificationPoint> PointsOf(Requirement requirement)

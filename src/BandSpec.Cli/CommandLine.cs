@@ -1,0 +1,67 @@
+using System.CommandLine;
+using System.CommandLine.Help;
+using System.CommandLine.Invocation;
+using BandSpec.Cli.Commands;
+using BandSpec.Cli.Printing;
+
+namespace BandSpec.Cli;
+
+/// <summary>The program: reads the command line, runs the command, and turns whatever happens into an exit code.</summary>
+internal static class CommandLine
+{
+    /// <summary>Name and version as documents show them.</summary>
+    public static string Program { get; } = $"BandSpec {typeof(CommandLine).Assembly.GetName().Version!.ToString(3)}";
+
+    /// <summary>Runs the program with its arguments; the exit code is one of <see cref="ExitCode"/>.</summary>
+    public static int Run(IReadOnlyList<string> arguments, Terminal terminal)
+    {
+        try
+        {
+            ParseResult parsed = Build(terminal).Parse(arguments);
+            if (parsed.Errors.Count > 0 && parsed.Action is ParseErrorAction)
+                return RefuseArguments(parsed, terminal);
+            return parsed.Invoke(new InvocationConfiguration
+            {
+                Output = terminal.Out, Error = terminal.Error, EnableDefaultExceptionHandler = false,
+            });
+        }
+        catch (OperationCanceledException)
+        {
+            terminal.Error.WriteLine("bandspec: stopped");
+            return (int)ExitCode.Fault;
+        }
+        catch (RefusalException refusal)
+        {
+            terminal.Error.WriteLine($"bandspec: {refusal.Message}");
+            return (int)ExitCode.Fault;
+        }
+        catch (Exception fault)
+        {
+            FaultReport.Write(fault, arguments, terminal);
+            return (int)ExitCode.Fault;
+        }
+    }
+
+    private static RootCommand Build(Terminal terminal)
+    {
+        RootCommand root = new(
+            "Turns a customer's application for a pressure transmitter into a proven custom error-band specification: how wide the band has to be, "
+            + "which compensation plan keeps it, how the error is shared out, and the limits to test against.");
+        root.Add(DraftCommand.Create(terminal));
+        root.Add(CheckCommand.Create(terminal));
+        root.Add(NewCommand.Create(terminal));
+        root.Add(SchemaCommand.Create(terminal));
+        HelpOption help = root.Options.OfType<HelpOption>().Single();
+        help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
+        return root;
+    }
+
+    private static int RefuseArguments(ParseResult parsed, Terminal terminal)
+    {
+        foreach (string message in parsed.Errors.Select(error => error.Message).Distinct())
+            terminal.Error.WriteLine($"bandspec: {message}");
+        string command = parsed.CommandResult.Command is RootCommand ? "" : $"{parsed.CommandResult.Command.Name} ";
+        terminal.Error.WriteLine($"bandspec: see `bandspec {command}--help`");
+        return (int)ExitCode.Findings;
+    }
+}

@@ -1,0 +1,46 @@
+using BandSpec.Cli.Opening;
+using BandSpec.Cli.Printing;
+using BandSpec.Cli.Storing;
+using BandSpec.Core.Specifying;
+using BandSpec.Files.Inputs;
+
+namespace BandSpec.Cli.Drafting;
+
+/// <summary>What came of one requirement.</summary>
+/// <param name="File">The requirement as the user named it.</param>
+/// <param name="Inputs">What was read, and the findings.</param>
+/// <param name="Specification">The finished record; null when there are findings.</param>
+/// <param name="Package">The package as it was written; null when there are findings.</param>
+internal sealed record Draft(string File, InputSet Inputs, Specification? Specification, WrittenPackage? Package)
+{
+    /// <summary>What the exit code says about this requirement.</summary>
+    public ExitCode ExitCode => Specification is null ? ExitCode.Findings : Specification.Feasible ? ExitCode.Done : ExitCode.AnswerIsNo;
+}
+
+/// <summary>A package on the disk.</summary>
+/// <param name="Folder">Its folder as the user would name it.</param>
+/// <param name="Files">The names of its files, in order.</param>
+internal sealed record WrittenPackage(string Folder, IReadOnlyList<string> Files);
+
+/// <summary>Drafts one requirement after the other; the search of each uses all processors.</summary>
+/// <param name="terminal">Where progress is shown.</param>
+/// <param name="outFolder">The folder for packages, as the user named it.</param>
+/// <param name="root">The folder that inputs have to be in; null to find it.</param>
+internal sealed class DraftRun(Terminal terminal, string outFolder, string? root)
+{
+    /// <summary>From a requirement to its package.</summary>
+    public Draft Run(string file, CancellationToken cancellation)
+    {
+        InputSet inputs = InputFolder.Read(file, root, terminal.Folder);
+        if (inputs.Application is not { } application)
+            return new Draft(file, inputs, null, null);
+        Specification specification;
+        using (SearchBar bar = new(terminal, application.Requirement.Identity.FolderName))
+            specification = SpecificationDraft.Draft(application, bar, cancellation);
+        PackageFolder folder = new(Path.GetFullPath(outFolder, terminal.Folder), application.Requirement.Identity.FolderName);
+        IReadOnlyList<Files.Json.PackageFile> files = PackageContents.Of(specification, inputs.Sources);
+        folder.Replace(files, terminal.Clock);
+        string shown = Path.Combine(outFolder, application.Requirement.Identity.FolderName);
+        return new Draft(file, inputs, specification, new WrittenPackage(shown, [.. files.Select(written => written.Name)]));
+    }
+}
