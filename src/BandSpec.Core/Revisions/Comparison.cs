@@ -23,6 +23,9 @@ public sealed class Comparison
     /// <summary>What that did to band, margin, plan, allocation and limits.</summary>
     public required IReadOnlyList<FigureChange> Outcome { get; init; }
 
+    /// <summary>The verification points among it, each with all its limits.</summary>
+    public IReadOnlyList<PointChange> Points => PointChange.Between(Old, New, Outcome);
+
     /// <summary>Whether nothing differs.</summary>
     public bool IsEmpty => Inputs.Count == 0 && Outcome.Count == 0;
 

@@ -43,6 +43,12 @@ public sealed record FigureChange(Figure? Old, Figure? New)
     public double Movement => LeewaysOf(figure => figure.Leeway.Production ?? figure.Leeway.Customer) is not var (a, b) || Figure.AreSame(a, b) ? 0
         : double.IsFinite(a) && double.IsFinite(b) ? Math.Abs(a - b) / Math.Max(Math.Abs(a), Math.Abs(b)) : 1;
 
+    /// <summary>
+    /// Both values to be shown side by side, with no more digits than it takes to tell them apart; <see langword="null"/> for a figure that is
+    /// not there.
+    /// </summary>
+    public (string? Old, string? New) Shown => ShownFigures.Of(Old, New);
+
     private Figure Either => New ?? Old ?? throw new InvalidOperationException("a change has at least one of its two figures");
 
     /// <summary>The figures that differ, in the order of the newer record; those that are gone follow.</summary>

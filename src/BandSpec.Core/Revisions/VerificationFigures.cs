@@ -1,4 +1,3 @@
-using System.Globalization;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Core.TestLimits;
@@ -17,7 +16,7 @@ internal sealed class VerificationFigures(Specification specification)
     public IReadOnlyList<Figure> All()
     {
         foreach (VerificationPoint point in specification.VerificationPoints)
-            ListPoint(point, PlaceOf(point));
+            ListPoint(point, PointChange.PlaceOf(point));
         return list.All;
     }
 
@@ -32,7 +31,7 @@ internal sealed class VerificationFigures(Specification specification)
         list.Number("nominal", point.Nominal, output.Unit, Leeway.None, place);
         list.Number(LowerLimit, point.Lower, output.Unit, l => RoomBetween(l, point.Nominal), place);
         list.Number(UpperLimit, point.Upper, output.Unit, u => RoomBetween(point.Nominal, u), place);
-        list.Error("tolerance", point.Tolerance, Leeway.ForCustomer, place);
+        list.Error(Tolerance, point.Tolerance, Leeway.ForCustomer, place);
         list.Error("guard band", point.GuardBand, Leeway.LessForProduction, place);
         list.Error("uncertainty", point.Uncertainty, Leeway.LessForProduction, place);
         list.Number("consumer's risk", point.ConsumerRisk, "", Leeway.ForCustomer, place);
@@ -47,6 +46,6 @@ internal sealed class VerificationFigures(Specification specification)
     /// <summary>The name of the upper acceptance limit.</summary>
     public const string UpperLimit = "upper limit";
 
-    private static string PlaceOf(VerificationPoint point) => string.Create(
-        CultureInfo.InvariantCulture, $"{point.Temperature}, {100 * point.PressureFraction} % of span, {Words.Of(point.Direction)}");
+    /// <summary>The name of the tolerance.</summary>
+    public const string Tolerance = "tolerance";
 }

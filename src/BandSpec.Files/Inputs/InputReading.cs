@@ -12,8 +12,16 @@ public static class InputReading
     /// <param name="open">Opens a file by its path as it is written in the requirement, relative to it.</param>
     public static InputSet Read(InputContent requirement, Func<string, InputContent> open)
     {
-        ArgumentNullException.ThrowIfNull(requirement);
         ArgumentNullException.ThrowIfNull(open);
+        return Read(requirement, (_, path) => open(path));
+    }
+
+    /// <summary>Reads the three files and checks all their rules; which file is asked for is told by its kind too.</summary>
+    /// <param name="requirement">The requirement's file.</param>
+    /// <param name="open">Opens the platform or the station by its path as it is written in the requirement.</param>
+    internal static InputSet Read(InputContent requirement, Func<InputFile, string, InputContent> open)
+    {
+        ArgumentNullException.ThrowIfNull(requirement);
         OpenedFile asked = OpenedFile.Open(InputFile.Requirement, requirement);
         double? span = asked.Find(RequirementForm.Pressure)?.SpanInPascals;
         OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, open);
@@ -40,11 +48,11 @@ public static class InputReading
     }
 
     /// <summary>Opens the file that a key of the requirement names; a file that cannot be had is a finding at that key.</summary>
-    private static OpenedFile? Follow(OpenedFile asked, Key<string> key, InputFile kind, Func<string, InputContent> open)
+    private static OpenedFile? Follow(OpenedFile asked, Key<string> key, InputFile kind, Func<InputFile, string, InputContent> open)
     {
         if (asked.Find(key) is not { } path)
             return null;
-        InputContent content = open(path);
+        InputContent content = open(kind, path);
         if (content.Refusal is not { } why)
             return OpenedFile.Open(kind, content);
         asked.Place(new Finding(new FieldPath(InputFile.Requirement, key.Name), "file", $"`{Form.Shorten(path)}`: {why}", key.Form.Accepted));
