@@ -3,6 +3,7 @@ using System.CommandLine.Help;
 using System.CommandLine.Invocation;
 using BandSpec.Cli.Commands;
 using BandSpec.Cli.Printing;
+using BandSpec.Documents.Templates;
 
 namespace BandSpec.Cli;
 
@@ -29,6 +30,11 @@ internal static class CommandLine
         {
             terminal.Error.WriteLine("bandspec: stopped");
             return (int)ExitCode.Fault;
+        }
+        catch (TemplateException template)
+        {
+            terminal.Error.WriteLine(template.Message);
+            return (int)ExitCode.Findings;
         }
         catch (RefusalException refusal)
         {

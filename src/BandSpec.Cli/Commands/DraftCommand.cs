@@ -1,6 +1,7 @@
 using System.CommandLine;
 using BandSpec.Cli.Drafting;
 using BandSpec.Cli.Printing;
+using BandSpec.Documents;
 using BandSpec.Files.Inputs;
 
 namespace BandSpec.Cli.Commands;
@@ -16,6 +17,12 @@ internal static class DraftCommand
         {
             Description = "Folder for the packages; `out` when left out.", DefaultValueFactory = _ => "out", HelpName = "DIR",
         };
+        Option<string?> templates = new("--templates")
+        {
+            Description = "Folder of your own templates; otherwise `templates` in the project, if there is one.", HelpName = "DIR",
+        };
+        Option<string> language = new("--language") { Description = "Language of the documents.", DefaultValueFactory = _ => "en", HelpName = "en|de" };
+        Option<Paper> paper = new("--paper") { Description = "Paper of the PDF.", HelpName = "A4|Letter" };
         (Option<bool> json, Option<bool> quiet, Option<string?> root) = (CommonOptions.Json(), CommonOptions.Quiet(), CommonOptions.Root());
         TaughtCommand command = new(
             "draft", "Turns requirements into specification packages, each in a folder of its number and revision.",
@@ -23,10 +30,13 @@ internal static class DraftCommand
             ("bandspec draft requirements/*.yaml --out packages", "many, one summary at the end"),
             ("bandspec draft pump.yaml --json", "verdict, margin and file names for programs"))
         {
-            files, output, json, quiet, root,
+            files, output, templates, language, paper, json, quiet, root,
         };
         command.SetAction((parsed, cancellation) => Task.FromResult((int)Run(
-            parsed.GetRequiredValue(files), new DraftRun(terminal, parsed.GetValue(output)!, parsed.GetValue(root)),
+            parsed.GetRequiredValue(files),
+            new DraftRun(
+                terminal, new DraftFolders(parsed.GetValue(output)!, parsed.GetValue(root), parsed.GetValue(templates)),
+                new DocumentOptions { Program = CommandLine.Program, Language = parsed.GetValue(language)!, Paper = parsed.GetValue(paper) }),
             parsed.GetValue(json), parsed.GetValue(quiet), terminal, cancellation)));
         return command;
     }

@@ -1,3 +1,4 @@
+using BandSpec.Documents.Fonts;
 using BandSpec.Files.Inputs;
 
 namespace BandSpec.Cli.Opening;
@@ -30,7 +31,7 @@ internal sealed class InputFolder
     {
         string path = Path.GetFullPath(file, workingFolder);
         InputFolder inputs = new(file, path, root is null ? null : Path.GetFullPath(root, workingFolder));
-        return InputReading.Read(Open(path, file), inputs.Follow);
+        return InputReading.Read(Open(path, file), inputs.Follow, Letters.Missing);
     }
 
     /// <summary>The folder of the project that a folder belongs to: the nearest above with <c>.git</c> in it, or the folder itself.</summary>

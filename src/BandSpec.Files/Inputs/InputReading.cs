@@ -10,7 +10,11 @@ public static class InputReading
     /// <summary>Reads the three files and checks all their rules.</summary>
     /// <param name="requirement">The requirement's file.</param>
     /// <param name="open">Opens a file by its path as it is written in the requirement, relative to it.</param>
-    public static InputSet Read(InputContent requirement, Func<string, InputContent> open)
+    /// <param name="missing">
+    /// The letters of a text that no document can show; <see langword="null"/> when none is going to be written.
+    /// </param>
+    public static InputSet Read(
+        InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null)
     {
         ArgumentNullException.ThrowIfNull(open);
         return Read(requirement, (_, path) => open(path));
@@ -32,6 +36,8 @@ public static class InputReading
 
         OpenedFile[] files = [.. new[] { asked, family, line }.OfType<OpenedFile>()];
         foreach (Finding finding in Application.FindingsIn(wanted, platform, station))
+            files.First(file => file.Kind == finding.Field.File).Place(finding);
+        foreach (Finding finding in missing is null ? [] : LetterRules.Judge(wanted, platform, station, missing))
             files.First(file => file.Kind == finding.Field.File).Place(finding);
         PlacedFinding[] findings = [.. files.SelectMany(file => file.PlacedFindings())];
         InputSource[] sources = [.. files.Select(file => file.Source).OfType<InputSource>()];

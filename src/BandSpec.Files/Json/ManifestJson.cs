@@ -1,6 +1,6 @@
 using System.Security.Cryptography;
+using System.Text.Json;
 using BandSpec.Core.Requirements;
-using BandSpec.Files.Inputs;
 
 namespace BandSpec.Files.Json;
 
@@ -19,7 +19,7 @@ public static class ManifestJson
     /// <param name="outputs">The other files of the package.</param>
     /// <param name="program">Name and version of the program.</param>
     public static ReadOnlyMemory<byte> Write(
-        SpecificationIdentity identity, IReadOnlyList<InputSource> inputs, IReadOnlyList<PackageFile> outputs, string program)
+        SpecificationIdentity identity, IReadOnlyList<ManifestInput> inputs, IReadOnlyList<PackageFile> outputs, string program)
     {
         ArgumentNullException.ThrowIfNull(identity);
         return JsonFile.Of(json =>
@@ -29,20 +29,29 @@ public static class ManifestJson
             json.Identity(identity);
             json.Objects("inputs", inputs, (file, input) =>
             {
-                file.WriteString("kind", input.Kind.ToString().ToLowerInvariant());
-                file.WriteString("name", Path.GetFileName(input.Name));
-                file.WriteNumber("bytes", input.Bytes.Length);
-                file.WriteString("sha256", input.Digest);
+                file.WriteString("kind", input.Kind);
+                WriteFile(file, input.Name, input.Bytes);
             });
             json.Objects("outputs", outputs.OrderBy(output => output.Name, StringComparer.Ordinal), (file, output) =>
             {
-                file.WriteString("name", output.Name);
-                file.WriteNumber("bytes", output.Bytes.Length);
-                file.WriteString("sha256", Convert.ToHexStringLower(SHA256.HashData(output.Bytes.Span)));
+                WriteFile(file, output.Name, output.Bytes);
             });
         });
     }
+
+    private static void WriteFile(Utf8JsonWriter json, string name, ReadOnlyMemory<byte> bytes)
+    {
+        json.WriteString("name", name);
+        json.WriteNumber("bytes", bytes.Length);
+        json.WriteString("sha256", Convert.ToHexStringLower(SHA256.HashData(bytes.Span)));
+    }
 }
+
+/// <summary>A file that a package was made from.</summary>
+/// <param name="Kind">What it is: <c>requirement</c>, <c>platform</c>, <c>station</c> or <c>template</c>.</param>
+/// <param name="Name">Its name, without the folders above it.</param>
+/// <param name="Bytes">Its bytes.</param>
+public sealed record ManifestInput(string Kind, string Name, ReadOnlyMemory<byte> Bytes);
 
 /// <summary>A file of a package before it is written.</summary>
 /// <param name="Name">Its name in the package's folder.</param>
