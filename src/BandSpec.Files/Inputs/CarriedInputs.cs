@@ -23,7 +23,7 @@ public static class CarriedInputs
     public static InputSet Read(string carrier, IReadOnlyDictionary<string, ReadOnlyMemory<byte>> files)
     {
         ArgumentNullException.ThrowIfNull(files);
-        return InputReading.Read(Carried(InputFile.Requirement), (kind, _) => Carried(kind));
+        return InputReading.Read(Carried(InputFile.Requirement), (kind, _) => Carried(kind), missing: null);
 
         InputContent Carried(InputFile kind)
         {

@@ -17,13 +17,15 @@ public static class InputReading
         InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null)
     {
         ArgumentNullException.ThrowIfNull(open);
-        return Read(requirement, (_, path) => open(path));
+        return Read(requirement, (_, path) => open(path), missing);
     }
 
     /// <summary>Reads the three files and checks all their rules; which file is asked for is told by its kind too.</summary>
     /// <param name="requirement">The requirement's file.</param>
     /// <param name="open">Opens the platform or the station by its path as it is written in the requirement.</param>
-    internal static InputSet Read(InputContent requirement, Func<InputFile, string, InputContent> open)
+    /// <param name="missing">The letters of a text that no document can show; <see langword="null"/> when none is going to be written.</param>
+    internal static InputSet Read(
+        InputContent requirement, Func<InputFile, string, InputContent> open, Func<string, IReadOnlyList<string>>? missing)
     {
         ArgumentNullException.ThrowIfNull(requirement);
         OpenedFile asked = OpenedFile.Open(InputFile.Requirement, requirement);

@@ -3,17 +3,17 @@ using BandSpec.Cli;
 using BandSpec.Cli.Printing;
 using Xunit;
 
-namespace BandSpec.Tests.Cli;
+namespace BandSpec.Tests.Revising;
 
 /// <summary>A folder of its own with a small project in it, and the program run there as a user would; removed at the end.</summary>
-internal sealed class Desk : IDisposable
+internal sealed class Workshop : IDisposable
 {
     public const string Brine = "brine.yaml", Platform = "platforms/cell.yaml", Station = "stations/line.yaml";
 
     /// <summary>An application close to the first demo, with few candidate plans, so that a draft takes a moment.</summary>
-    public Desk()
+    public Workshop()
     {
-        Folder = Directory.CreateTempSubdirectory("bandspec-desk-").FullName;
+        Folder = Directory.CreateTempSubdirectory("bandspec-shop-").FullName;
         foreach ((string name, string text) in Sample.Files)
             Write(name, text);
     }

@@ -1,10 +1,10 @@
-namespace BandSpec.Tests.Cli;
+namespace BandSpec.Tests.Revising;
 
 /// <summary>The input files of a small application that a plan fits, and whose search takes milliseconds.</summary>
 internal static class Sample
 {
     public static IReadOnlyList<(string Name, string Text)> Files { get; } =
-        [(Desk.Brine, Requirement), (Desk.Platform, Platform), (Desk.Station, Station)];
+        [(Workshop.Brine, Requirement), (Workshop.Platform, Platform), (Workshop.Station, Station)];
 
     private const string Requirement = """
         specification:
