@@ -18,7 +18,7 @@ public sealed record BandFloor(BandNode Worst, double Bound)
     {
         ArgumentNullException.ThrowIfNull(application);
         var formulas = new BandFormulas(application, correction: null);
-        BandMap map = BandMap.Of(application.Requirement, formulas);
+        BandMap map = BandMap.Of(application.Requirement, formulas, []);
         return new BandFloor(map.Worst, map.Nodes.Min(n => BoundAt(n, formulas.DriftMean(n.PressureFraction), application.Requirement)));
     }
 

@@ -16,25 +16,31 @@ public sealed record BandMap(IReadOnlyList<BandNode> Nodes, IReadOnlyList<Region
     /// <summary>The band of a plan at all design nodes.</summary>
     /// <param name="application">The application.</param>
     /// <param name="plan">The compensation plan.</param>
-    public static BandMap Of(Application application, CompensationPlan plan)
+    /// <param name="added">
+    /// Places between the design nodes that are judged as well; at the temperature of each the eleven pressures join too, so that every
+    /// temperature of a map has them.
+    /// </param>
+    public static BandMap Of(Application application, CompensationPlan plan, IReadOnlyList<NodePlace>? added = null)
     {
         ArgumentNullException.ThrowIfNull(application);
         ArgumentNullException.ThrowIfNull(plan);
-        return Of(application.Requirement, BandFormulas.Of(application, plan));
+        return Of(application.Requirement, BandFormulas.Of(application, plan), added ?? []);
     }
 
-    /// <summary>The band that formulas give at all design nodes.</summary>
-    internal static BandMap Of(Requirement requirement, BandFormulas formulas)
+    /// <summary>The band that formulas give at all design nodes and the added ones.</summary>
+    internal static BandMap Of(Requirement requirement, BandFormulas formulas, IReadOnlyList<NodePlace> added)
     {
         List<BandNode> nodes = [];
         List<RegionBand> regions = [];
         for (int r = 0; r < requirement.AllowedError.Count; r++)
         {
             AllowedErrorRegion allowance = requirement.AllowedError[r];
+            NodePlace[] between = [.. added.Where(a => a.Region == r)];
             List<BandNode> inRegion =
             [
-                .. from temperature in DesignNodes.TemperaturesOf(allowance)
-                   from fraction in DesignNodes.Fractions
+                .. from temperature in DesignNodes.TemperaturesOf(allowance).Concat(between.Select(b => b.Temperature)).Distinct().Order()
+                   from fraction in DesignNodes.Fractions.Concat(between.Where(b => b.Temperature == temperature).Select(b => b.PressureFraction))
+                       .Distinct().Order()
                    select formulas.At(fraction, temperature, r),
             ];
             nodes.AddRange(inRegion);

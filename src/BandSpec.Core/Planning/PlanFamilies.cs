@@ -16,6 +16,7 @@ internal readonly record struct PlanFamily(int First, int Last, int Count, doubl
 internal sealed class PlanFamilies
 {
     private readonly CompensationScope scope;
+    private readonly HashSet<(int First, int Last)> ends;
 
     public PlanFamilies(Application application)
     {
@@ -23,6 +24,7 @@ internal sealed class PlanFamilies
         scope = requirement.Compensation;
         Candidates = CandidateTemperatures.Of(scope, requirement.Temperature);
         All = [.. FamiliesOf(requirement, application.Station).OrderBy(f => f.Minutes).ThenBy(f => f.Count).ThenBy(f => f.First).ThenBy(f => f.Last)];
+        ends = [.. All.Select(f => (f.First, f.Last))];
         DegreesOf = [.. Enumerable.Range(0, scope.MostTemperatures + 1).Select(n => DegreePairs(n, application.Platform))];
     }
 
@@ -37,6 +39,18 @@ internal sealed class PlanFamilies
 
     /// <summary>How many plans there are.</summary>
     public long PlanCount() => All.Sum(f => ListsIn(f) * DegreesOf[f.Count].Count);
+
+    /// <summary>The families by what they cost, cheapest first; costs that tie are one level.</summary>
+    public IEnumerable<IReadOnlyList<PlanFamily>> CostLevels()
+    {
+        for (int begin = 0, end; begin < All.Count; begin = end)
+        {
+            end = begin + 1;
+            while (end < All.Count && All[end].Minutes <= Contest.TieAbove(All[begin].Minutes))
+                end++;
+            yield return [.. All.Skip(begin).Take(end - begin)];
+        }
+    }
 
     /// <summary>
     /// Calls back with each temperature list of a family, rising and in the order of the lists; <paramref name="second"/> fixes its second
@@ -77,6 +91,40 @@ internal sealed class PlanFamilies
         }
 
         return ways[family.Last];
+    }
+
+    /// <summary>Temperatures spread over the widest family as evenly as the separation allows; nothing when no plan has so many.</summary>
+    public int[]? SpreadList(int count)
+    {
+        PlanFamily[] widest = [.. All.Where(f => f.Count == count).OrderByDescending(f => f.Last - f.First).Take(1)];
+        if (widest.Length == 0)
+            return null;
+        (int first, int last) = (widest[0].First, widest[0].Last);
+        int[] list = [.. Enumerable.Repeat(last, count)];
+        for (int i = count - 2; i > 0; i--)
+            while (!Apart(list[i], list[i + 1]))
+                list[i]--;
+        list[0] = first;
+        for (int i = 1; i < count - 1; i++)
+        {
+            int even = first + (int)Math.Round(i * (double)(last - first) / (count - 1)), latest = list[i];
+            list[i] = Math.Min(even, latest);
+            while (!Apart(list[i - 1], list[i]))
+                list[i]++;
+        }
+
+        return list;
+    }
+
+    /// <summary>Whether a list is one of the candidate plans.</summary>
+    public bool Allows(int[] list)
+    {
+        if (list[0] < 0)
+            return false;
+        for (int i = 1; i < list.Length; i++)
+            if (list[i] <= list[i - 1] || list[i] >= Candidates.Count || !Apart(list[i - 1], list[i]))
+                return false;
+        return ends.Contains((list[0], list[^1]));
     }
 
     private void Fill(int[] list, int place, Action<int[]> visit)

@@ -1,3 +1,4 @@
+using System.Runtime.Intrinsics;
 using BandSpec.Core.Numerics;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Residuals;
@@ -5,125 +6,163 @@ using BandSpec.Core.Residuals;
 namespace BandSpec.Core.Planning;
 
 /// <summary>
-/// The correction of one plan after another, in memory that is used again: nothing is allocated for a plan. The result is the map
-/// from the correction's coefficients to the rows of <see cref="SearchTables"/>, followed by one row for the noise of each reading.
+/// The corrections of one batch of plans after another, in memory that is used again: nothing is allocated for a plan. A fit gives the
+/// coefficients of the correction for each row of <see cref="LeftoverRows"/>, and the noise of the coefficients.
 /// </summary>
 internal sealed class PlanFit
 {
+    private const int Lanes = PlanBatch.Lanes;
     private readonly SearchTables tables;
-    private readonly double[] design;
-    private readonly double[] triangle;
-    private readonly double[] inverse;
-    private readonly double[] map;
-    private readonly ReadingPoint[] points;
-    private readonly double[] taus;
+    private readonly FittedPoint[] points;
+    private readonly Vector512<double>[] sigmas;
+    private readonly Vector512<double>[] scaledPowers;
+    private readonly Vector512<double>[] tauPowers;
+    private readonly Vector512<double>[] design;
+    private readonly Vector512<double>[] triangle;
+    private readonly Vector512<double>[] inverse;
+    private readonly Vector512<double>[] coefficients;
+    private readonly int powers;
 
     public PlanFit(SearchTables tables)
     {
         this.tables = tables;
-        Station station = tables.Application.Station;
         int temperatures = tables.Application.Requirement.Compensation.MostTemperatures;
-        int most = station.PressurePoints.Reference.Count + (temperatures * station.PressurePoints.Others.Count);
-        int columns = (2 * temperatures) + 4;
-        points = new ReadingPoint[most];
-        taus = new double[most];
-        design = new double[most * columns];
-        inverse = new double[most * columns];
-        triangle = new double[columns * columns];
-        map = new double[columns * (tables.Rows.Length + most)];
+        int most = tables.Reference.Length + (temperatures * tables.Others.Length);
+        int columns = tables.Forms.Max(f => f.Form.Columns);
+        powers = 1 + Math.Max(tables.Raw.Names.Max(n => n.Degree), tables.Forms.Max(f => Math.Max(f.Form.ZeroDegree, f.Form.SpanDegree)));
+        points = new FittedPoint[most];
+        sigmas = new Vector512<double>[most];
+        scaledPowers = new Vector512<double>[temperatures * powers];
+        tauPowers = new Vector512<double>[temperatures * powers];
+        design = new Vector512<double>[most * columns];
+        inverse = new Vector512<double>[most * columns];
+        triangle = new Vector512<double>[columns * (columns + 1)];
+        coefficients = new Vector512<double>[columns * tables.Forms.Max(f => f.Count)];
+        Noise = new CoefficientNoise(powers);
     }
 
-    /// <summary>The form of the fitted correction.</summary>
-    public CorrectionForm Form { get; private set; }
-
-    /// <summary>How many readings the plan has.</summary>
+    /// <summary>How many readings each plan has.</summary>
     public int Readings { get; private set; }
 
-    /// <summary>How many rows the map has: those of <see cref="SearchTables"/>, then one a reading.</summary>
-    public int RowCount => tables.Rows.Length + Readings;
+    /// <summary>What the form of the last fit cannot follow.</summary>
+    public LeftoverRows Rows { get; private set; } = null!;
 
-    /// <summary>
-    /// The map, row by row: what a row sees of coefficient <c>c</c> is at <c>row·Columns + c</c>, coefficients in the order of the form.
-    /// </summary>
-    public ReadOnlySpan<double> Map => map.AsSpan(0, RowCount * Form.Columns);
+    /// <summary>The noise that the readings carry into the coefficients.</summary>
+    public CoefficientNoise Noise { get; }
 
-    /// <summary>Fits a plan.</summary>
-    /// <param name="list">Indices of its candidate temperatures, rising.</param>
-    /// <param name="form">The form of the correction.</param>
-    /// <returns>Whether the readings determine all coefficients.</returns>
-    public bool To(ReadOnlySpan<int> list, CorrectionForm form)
+    /// <summary>The correction's coefficients for a row, in the order of the form.</summary>
+    public ReadOnlySpan<Vector512<double>> Coefficients(int row) => coefficients.AsSpan(row * Rows.Form.Columns, Rows.Form.Columns);
+
+    /// <summary>Takes up the readings of a batch; any number of forms can then be fitted to them.</summary>
+    public void Load(PlanBatch batch)
     {
-        Form = form;
-        CollectPoints(list);
-        if (form.Columns > Readings)
-            return false;
-        FillDesign();
-        if (!LeastSquares.PseudoInverse(design, Readings, form.Columns, triangle, inverse))
-            return false;
-        FillMap();
-        return true;
-    }
-
-    private void CollectPoints(ReadOnlySpan<int> list)
-    {
-        int nearest = NearestReference(list);
         Readings = 0;
-        foreach (int candidate in list)
-            foreach (ReadingPoint point in (candidate == nearest ? tables.Reference : tables.Others)[candidate])
-            {
-                points[Readings] = point;
-                taus[Readings++] = tables.Taus[candidate];
-            }
-    }
-
-    /// <summary>The candidate nearest the reference temperature, the colder one on a tie.</summary>
-    private int NearestReference(ReadOnlySpan<int> list)
-    {
-        double reference = tables.Application.Requirement.Temperature.Reference.Celsius;
-        int nearest = list[0];
-        foreach (int candidate in list)
-            if (Distance(candidate) < Distance(nearest))
-                nearest = candidate;
-        return nearest;
-
-        double Distance(int candidate) => Math.Abs(tables.Families.Candidates[candidate].Celsius - reference);
-    }
-
-    /// <summary>The rows <c>q</c> of the points, stored column by column.</summary>
-    private void FillDesign()
-    {
-        for (int i = 0; i < Readings; i++)
+        for (int place = 0; place < batch.Temperatures; place++)
         {
-            double x = points[i].Fraction;
-            int at = FillPowers(i, 0, 1, Form.ZeroDegree);
-            at = FillPowers(i, at, x, Form.SpanDegree);
-            if (Form.HasBow)
-                design[(at++ * Readings) + i] = PressureShapes.At(PressureShape.Bow, x);
-            if (Form.HasSShape)
-                design[(at * Readings) + i] = PressureShapes.At(PressureShape.SShape, x);
+            FillPowers(batch, place);
+            bool isReference = place == batch.Nearest;
+            ReadingPressure[] pressures = isReference ? tables.Reference : tables.Others;
+            for (int i = 0; i < pressures.Length; i++)
+            {
+                points[Readings] = new FittedPoint(place, pressures[i]);
+                sigmas[Readings++] = SigmasOf(batch, place, isReference, i);
+            }
         }
     }
 
-    private int FillPowers(int i, int column, double shape, int degree)
+    /// <summary>Fits a form to the readings taken up.</summary>
+    /// <returns>All bits set in the lanes whose readings determine all coefficients.</returns>
+    public Vector512<double> To(LeftoverRows rows)
     {
-        double power = shape;
-        for (int k = 0; k <= degree; k++, power *= taus[i])
-            design[((column + k) * Readings) + i] = power;
-        return column + degree + 1;
+        Rows = rows;
+        if (rows.Form.Columns > Readings)
+            return Vector512<double>.Zero;
+        FillDesign(rows.Form);
+        Vector512<double> determined = LanewiseLeastSquares.PseudoInverse(design, Readings, rows.Form.Columns, triangle, inverse);
+        for (int row = 0; row < rows.Count; row++)
+            FillCoefficients(row);
+        Noise.Fill(rows.Form, inverse, sigmas, Readings);
+        return determined;
     }
 
-    private void FillMap()
+    private void FillPowers(PlanBatch batch, int place)
     {
-        int columns = Form.Columns, rows = tables.Rows.Length;
-        Array.Clear(map, 0, rows * columns);
-        for (int c = 0; c < columns; c++)
-            for (int i = 0; i < Readings; i++)
-            {
-                double weight = inverse[(c * Readings) + i];
-                double[] seen = points[i].Rows;
-                for (int r = 0; r < rows; r++)
-                    map[(r * columns) + c] += weight * seen[r];
-                map[((rows + i) * columns) + c] = weight * points[i].Noise;
-            }
+        Span<double> scaled = stackalloc double[Lanes], tau = stackalloc double[Lanes];
+        for (int lane = 0; lane < Lanes; lane++)
+            (scaled[lane], tau[lane]) = tables.Candidates[batch[lane][place]].Place;
+        Vector512<double> s = Vector512.Create<double>(scaled), t = Vector512.Create<double>(tau);
+        Span<Vector512<double>> ofScaled = scaledPowers.AsSpan(place * powers, powers), ofTau = tauPowers.AsSpan(place * powers, powers);
+        ofScaled[0] = ofTau[0] = Vector512<double>.One;
+        for (int k = 1; k < powers; k++)
+            (ofScaled[k], ofTau[k]) = (ofScaled[k - 1] * s, ofTau[k - 1] * t);
     }
+
+    private Vector512<double> SigmasOf(PlanBatch batch, int place, bool isReference, int pressure)
+    {
+        Span<double> sigma = stackalloc double[Lanes];
+        for (int lane = 0; lane < Lanes; lane++)
+        {
+            CandidateReadings candidate = tables.Candidates[batch[lane][place]];
+            sigma[lane] = (isReference ? candidate.ReferenceSigmas : candidate.OtherSigmas)[pressure];
+        }
+
+        return Vector512.Create<double>(sigma);
+    }
+
+    /// <summary>The rows <c>q</c> of the points, stored column by column.</summary>
+    private void FillDesign(CorrectionForm form)
+    {
+        for (int i = 0; i < Readings; i++)
+        {
+            FittedPoint point = points[i];
+            ReadOnlySpan<Vector512<double>> power = scaledPowers.AsSpan(point.Place * powers, powers);
+            int at = i;
+            for (int k = 0; k <= form.ZeroDegree; k++, at += Readings)
+                design[at] = power[k];
+            for (int k = 0; k <= form.SpanDegree; k++, at += Readings)
+                design[at] = power[k] * point.Pressure.Fraction;
+            if (form.HasBow)
+                design[at] = Vector512.Create(point.Pressure.Bow);
+            if (form.HasSShape)
+                design[at + Readings] = Vector512.Create(point.Pressure.SShape);
+        }
+    }
+
+    /// <summary><c>Q⁺y</c> for what the readings see of a row.</summary>
+    private void FillCoefficients(int row)
+    {
+        int columns = Rows.Form.Columns;
+        Span<Vector512<double>> target = coefficients.AsSpan(row * columns, columns);
+        target.Clear();
+        int place = -1;
+        ShapeVector seen = default;
+        for (int i = 0; i < Readings; i++)
+        {
+            if (points[i].Place != place)
+                seen = SeenAt(row, place = points[i].Place);
+            Vector512<double> reading = seen.At(points[i].Pressure);
+            for (int c = 0; c < target.Length; c++)
+                target[c] = Vector512.FusedMultiplyAdd(inverse[(c * Readings) + i], reading, target[c]);
+        }
+    }
+
+    private ShapeVector SeenAt(int row, int place)
+    {
+        ReadOnlySpan<Vector512<double>> power = tauPowers.AsSpan(place * powers, powers);
+        return new ShapeVector(
+            Sum(Rows.Polynomial(row, PressureShape.Zero), power), Sum(Rows.Polynomial(row, PressureShape.Span), power),
+            Sum(Rows.Polynomial(row, PressureShape.Bow), power), Sum(Rows.Polynomial(row, PressureShape.SShape), power));
+    }
+
+    private static Vector512<double> Sum(ReadOnlySpan<double> polynomial, ReadOnlySpan<Vector512<double>> power)
+    {
+        Vector512<double> sum = Vector512<double>.Zero;
+        for (int k = 0; k < polynomial.Length; k++)
+            if (polynomial[k] != 0)
+                sum = Vector512.FusedMultiplyAdd(Vector512.Create(polynomial[k]), power[k], sum);
+        return sum;
+    }
+
+    /// <summary>One reading of the plans in a batch: at which of their temperatures, and the pressure.</summary>
+    private readonly record struct FittedPoint(int Place, ReadingPressure Pressure);
 }

@@ -1,5 +1,5 @@
+using BandSpec.Core.Bands;
 using BandSpec.Core.Requirements;
-using BandSpec.Core.Residuals;
 
 namespace BandSpec.Core.Planning;
 
@@ -14,145 +14,104 @@ public readonly record struct SearchProgress(long Done, long Total);
 /// </summary>
 internal sealed class PlanSearch
 {
-    private readonly SearchTables tables;
-    private readonly MarginScore margin;
-    private readonly RmsScore rms;
+    private const double Feasible = 1;
     private readonly IProgress<SearchProgress>? progress;
-    private readonly long total;
+    private readonly int threads;
     private long done;
 
-    public PlanSearch(Application application, IProgress<SearchProgress>? progress)
+    /// <summary>Prepares the searches of an application.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="progress">Is told how far the search has come; may be <see langword="null"/>.</param>
+    /// <param name="threads">How many threads may be used; −1 for one a processor.</param>
+    public PlanSearch(Application application, IProgress<SearchProgress>? progress = null, int threads = -1)
     {
-        tables = new SearchTables(application);
-        margin = new MarginScore(tables);
-        rms = new RmsScore(tables);
-        total = tables.Families.PlanCount();
-        this.progress = progress;
+        Tables = new SearchTables(application);
+        Rms = new RmsScore(Tables);
+        PlanCount = Tables.Families.PlanCount();
+        (this.progress, this.threads) = (progress, threads);
     }
+
+    /// <summary>What is known of the application.</summary>
+    public SearchTables Tables { get; }
+
+    /// <summary>The score by rms error.</summary>
+    public RmsScore Rms { get; }
 
     /// <summary>How many candidate plans there are.</summary>
-    public long PlanCount => total;
+    public long PlanCount { get; }
 
-    /// <summary>The best plan by the requirement's objective; when none is feasible, the one that comes nearest.</summary>
-    public PlanChoice Run(CancellationToken cancellation)
+    /// <summary>The best plan by an objective; when none is feasible, the one that comes nearest.</summary>
+    /// <param name="objective">The objective.</param>
+    /// <param name="added">Nodes that are judged beside the design nodes.</param>
+    /// <param name="cancellation">Ends the search early; the best plan met so far is then returned.</param>
+    public SearchAnswer Run(PlanObjective objective, IReadOnlyList<NodePlace> added, CancellationToken cancellation = default)
     {
-        PlanObjective objective = tables.Application.Requirement.Compensation.Objective;
+        var margin = new MarginScore(Tables, added);
+        done = 0;
         Contender? winner = objective switch
         {
-            PlanObjective.LeastCost => Cheapest(cancellation),
-            PlanObjective.LeastError => Best(tables.Families.All, new Heat(Feasible, RmsFirst: true), cancellation),
+            PlanObjective.LeastCost => Cheapest(margin, cancellation),
+            PlanObjective.LeastError => Best(Tables.Families.All, new Heat(margin, Feasible, rmsFirst: true), cancellation),
             _ => null,
         };
-        winner ??= Best(tables.Families.All, new Heat(double.NegativeInfinity, RmsFirst: false), cancellation)
-            ?? throw new InvalidOperationException("an application has at least one candidate plan that its readings determine");
-        CompensationPlan plan = tables.PlanOf(winner.List, winner.Zero, winner.Span);
-        return new PlanChoice(plan, ChamberRun.Of(plan, tables.Application.Station.Chamber), total, Proven: true);
+        if (!cancellation.IsCancellationRequested)
+            winner ??= Best(Tables.Families.All, new Heat(margin, double.NegativeInfinity, rmsFirst: false), cancellation);
+        winner ??= new PlanAscent(Tables, margin, Rms).Climb();
+        return new SearchAnswer(winner, Interlocked.Read(ref done), !cancellation.IsCancellationRequested);
     }
 
-    private const double Feasible = 1;
-
     /// <summary>The cheapest feasible plan: the first cost level, from the cheapest up, that has one.</summary>
-    private Contender? Cheapest(CancellationToken cancellation)
+    private Contender? Cheapest(MarginScore margin, CancellationToken cancellation)
     {
-        IReadOnlyList<PlanFamily> families = tables.Families.All;
-        for (int begin = 0, end; begin < families.Count; begin = end)
+        foreach (IReadOnlyList<PlanFamily> level in Tables.Families.CostLevels())
         {
-            end = begin + 1;
-            while (end < families.Count && families[end].Minutes <= Contest.TieAbove(families[begin].Minutes))
-                end++;
-            Contender? winner = Best([.. families.Skip(begin).Take(end - begin)], new Heat(Feasible, RmsFirst: false), cancellation);
-            if (winner is not null)
+            Contender? winner = Best(level, new Heat(margin, Feasible, rmsFirst: false), cancellation);
+            if (winner is not null || cancellation.IsCancellationRequested)
                 return winner;
         }
 
         return null;
     }
 
-    /// <summary>The best plan of some families, shared out over all processors by family and second temperature.</summary>
+    /// <summary>
+    /// The best plan of some families, shared out over the processors by family and second temperature; the best of those looked at when
+    /// the search is ended early.
+    /// </summary>
     private Contender? Best(IReadOnlyList<PlanFamily> families, Heat heat, CancellationToken cancellation)
     {
-        IEnumerable<(PlanFamily Family, int Second)> shares = families.SelectMany(f => tables.Families.SecondsOf(f).Select(s => (f, s)));
-        Parallel.ForEach(
-            shares,
-            new ParallelOptions { CancellationToken = cancellation },
-            () => new Runner(this, heat),
-            (share, _, runner) => runner.Take(share.Family, share.Second),
-            runner => runner.HandIn());
+        IEnumerable<(PlanFamily Family, int Second)> shares = families.SelectMany(f => Tables.Families.SecondsOf(f).Select(s => (f, s)));
+        try
+        {
+            Parallel.ForEach(
+                shares,
+                new ParallelOptions { CancellationToken = cancellation, MaxDegreeOfParallelism = threads },
+                () => new PlanRunner(Tables, Rms, heat),
+                (share, _, runner) => Take(runner, share.Family, share.Second),
+                runner => Report(runner.Finish()));
+        }
+        catch (OperationCanceledException)
+        {
+            // What has been found so far is the answer; the caller marks it as not proven.
+        }
+
         return Contest.Winner(heat.Contenders, heat.RmsFirst);
+    }
+
+    private PlanRunner Take(PlanRunner runner, PlanFamily family, int second)
+    {
+        Report(runner.Take(family, second));
+        return runner;
     }
 
     private void Report(long plans)
     {
         long now = Interlocked.Add(ref done, plans);
-        progress?.Report(new SearchProgress(now, total));
-    }
-
-    /// <summary>One run over some families: what a plan must reach, and who has reached it.</summary>
-    private sealed class Heat(double least, bool RmsFirst)
-    {
-        private readonly Lock gate = new();
-        private double bestMargin = double.NegativeInfinity;
-        private double bestRms = double.PositiveInfinity;
-
-        public List<Contender> Contenders { get; } = [];
-
-        public bool RmsFirst { get; } = RmsFirst;
-
-        /// <summary>A margin below this is out: not feasible, or beaten by more than a tie.</summary>
-        public double LeastMargin => RmsFirst ? least : Math.Max(least, Contest.TieBelow(Volatile.Read(ref bestMargin)));
-
-        /// <summary>An rms above this is out.</summary>
-        public double MostRms => RmsFirst ? Contest.TieAbove(Volatile.Read(ref bestRms)) : double.PositiveInfinity;
-
-        public void Enter(Contender contender)
-        {
-            lock (gate)
-            {
-                if (contender.Margin < LeastMargin || contender.Rms > MostRms)
-                    return;
-                bestMargin = Math.Max(bestMargin, contender.Margin);
-                bestRms = Math.Min(bestRms, contender.Rms);
-                Contenders.RemoveAll(c => c.Margin < LeastMargin || c.Rms > MostRms);
-                Contenders.Add(contender);
-            }
-        }
-    }
-
-    /// <summary>One thread's work: fits and scores plans in memory of its own.</summary>
-    private sealed class Runner(PlanSearch search, Heat heat)
-    {
-        private readonly PlanFit fit = new(search.tables);
-        private int block;
-        private long plans;
-
-        public Runner Take(PlanFamily family, int second)
-        {
-            search.tables.Families.ForEachList(family, second, list => Try(list, family.Count));
-            HandIn();
-            return this;
-        }
-
-        public void HandIn()
-        {
-            search.Report(plans);
-            plans = 0;
-        }
-
-        private void Try(int[] list, int temperatures)
-        {
-            foreach ((int zero, int span) in search.tables.Families.DegreesOf[temperatures])
-            {
-                plans++;
-                if (!fit.To(list, CorrectionForm.For(search.tables.Application.Station, zero, span)))
-                    continue;
-                double least = heat.LeastMargin;
-                double margin = search.margin.Of(fit, least, ref block);
-                if (margin < least)
-                    continue;
-                double rms = search.rms.Of(fit);
-                if (rms <= heat.MostRms)
-                    heat.Enter(new Contender([.. list], zero, span, margin, rms));
-            }
-        }
+        progress?.Report(new SearchProgress(now, PlanCount));
     }
 }
+
+/// <summary>What a search has found.</summary>
+/// <param name="Winner">The best plan.</param>
+/// <param name="Decided">How many plans were decided one by one.</param>
+/// <param name="Proven">Whether no candidate plan is better.</param>
+internal sealed record SearchAnswer(Contender Winner, long Decided, bool Proven);

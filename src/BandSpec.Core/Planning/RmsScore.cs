@@ -9,37 +9,63 @@ internal sealed class RmsScore
 {
     private readonly PlaceGrid grid;
     private readonly PressureNode[] nodes;
-    private readonly Vector512<double>[] weights;
+    private readonly double[] weights;
+    private readonly double[] leastBeyond;
 
     public RmsScore(SearchTables tables)
     {
         List<(Temperature Temperature, int Region, double Weight)> places = [.. ProfilePoints.TemperaturesOf(tables.Application.Requirement)];
-        grid = new PlaceGrid(tables, [.. places.Select(p => tables.Reduced(p.Temperature))]);
+        grid = new PlaceGrid(tables, [.. places.Select(p => tables.PlaceOf(p.Temperature))]);
         nodes = PressureNode.AllOf(tables.Application);
-        IEnumerable<double> padding = Enumerable.Repeat(0.0, (grid.Blocks * Vector512<double>.Count) - places.Count);
-        weights = PlaceGrid.Pack([.. places.Select(p => p.Weight), .. padding]);
+        weights = [.. places.Select(p => p.Weight)];
+        double floor = nodes.Select((n, i) => ProfilePoints.PressureWeight(i) * LeastAt(n)).Sum();
+        leastBeyond = [.. places.Select((_, i) => floor * weights.Skip(i + 1).Sum())];
     }
 
-    /// <summary><c>√(mean of M² + σ_t²)</c> of a fitted plan, %FS.</summary>
-    public double Of(PlanFit fit)
+    /// <summary>
+    /// <c>√(mean of M² + σ_t²)</c> of eight fitted plans, %FS. It is left alone as soon as no plan can come to <paramref name="most"/>: what is
+    /// still to come adds at least what a perfect correction would; then the result is infinite.
+    /// </summary>
+    /// <param name="fit">The fitted plans.</param>
+    /// <param name="most">What a plan may have at most to be of interest.</param>
+    public Vector512<double> Of(PlanFit fit, double most)
     {
         Vector512<double> sum = Vector512<double>.Zero;
         ShapeMoments moments = default;
-        for (int block = 0; block < grid.Blocks; block++)
+        double limit = most * most;
+        for (int place = 0; place < grid.Count; place++)
         {
-            grid.Moments(fit, block, ref moments);
-            for (int n = 0; n < nodes.Length; n++)
-            {
-                ref readonly PressureNode node = ref nodes[n];
-                Vector512<double> added = node.AddedWith(node.Shapes.Mean(moments.Mean));
-                Vector512<double> variance = moments.Within.At(node.Shapes) + moments.Lots.At(node.Shapes) + Vector512.Create(node.Variance);
-                sum += weights[block] * ProfilePoints.PressureWeight(n) * ((added * added) + variance);
-            }
+            grid.Moments(fit, place, ref moments);
+            sum = Vector512.FusedMultiplyAdd(Vector512.Create(weights[place]), MeanSquareAt(moments), sum);
+            if (!Vector512.LessThanOrEqualAny(sum + Vector512.Create(leastBeyond[place]), Vector512.Create(limit)))
+                return Vector512.Create(double.PositiveInfinity);
         }
 
-        double total = 0;
-        for (int lane = 0; lane < Vector512<double>.Count; lane++)
-            total += sum[lane];
-        return Math.Sqrt(total);
+        return Vector512.Sqrt(sum);
+    }
+
+    private Vector512<double> MeanSquareAt(in ShapeMoments moments)
+    {
+        Vector512<double> sum = Vector512<double>.Zero;
+        for (int n = 0; n < nodes.Length; n++)
+        {
+            ref readonly PressureNode node = ref nodes[n];
+            Vector512<double> added = node.AddedWith(moments.Mean.At(node.Shapes));
+            Vector512<double> variance = moments.Within.At(node.Products) + moments.Lots.At(node.Products) + Vector512.Create(node.Variance);
+            Vector512<double> square = Vector512.FusedMultiplyAdd(added, added, variance);
+            sum = Vector512.FusedMultiplyAdd(Vector512.Create(ProfilePoints.PressureWeight(n)), square, sum);
+        }
+
+        return sum;
+    }
+
+    /// <summary>
+    /// The least mean square at a pressure, whatever the correction: <c>max(|μ|, |μ + d|) ≥ |d|/2</c>, and no variance below the steady
+    /// one. A part in 10⁹ is taken off for rounding.
+    /// </summary>
+    private static double LeastAt(PressureNode node)
+    {
+        double added = node.Added + (Math.Abs(node.Drift) / 2);
+        return ((added * added) + node.Variance) * (1 - 1e-9);
     }
 }

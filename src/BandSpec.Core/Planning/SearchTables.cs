@@ -1,33 +1,30 @@
-using BandSpec.Core.Numerics;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Residuals;
 
 namespace BandSpec.Core.Planning;
 
-/// <summary>
-/// What a search needs of an application, worked out once. The covariances come in factored form: with <c>Σ_w = L_w L_wᵀ</c> and
-/// <c>Σ_l = L_l L_lᵀ</c> the rows of <c>L_wᵀ</c>, of <c>L_lᵀ</c> and of <c>āᵀ</c> stand below each other, so that one linear map of what is
-/// left over gives the spread within a lot, the spread of the lots and the mean.
-/// </summary>
+/// <summary>What a search needs of an application, worked out once and never changed.</summary>
 internal sealed class SearchTables
 {
-    private readonly RawError raw;
+    private readonly OperatingTemperature range;
+    private readonly TemperatureScale scale;
+    private readonly Dictionary<CorrectionForm, LeftoverRows> rowsOf;
 
     public SearchTables(Application application)
     {
         (Platform platform, Station station) = (application.Platform, application.Station);
         Application = application;
         Families = new PlanFamilies(application);
-        raw = new RawError(platform);
-        double[][] within = SemidefiniteFactor.RowsOf(raw.Within), lots = SemidefiniteFactor.RowsOf(raw.Lots);
-        Rows = [.. within, .. lots, raw.Mean];
-        (WithinRows, LotRows) = (within.Length, lots.Length);
-
-        double noise = ReadingNoise.VarianceOf(platform, station);
-        Reference = PointsOf(station.PressurePoints.Reference, noise, station);
-        Others = PointsOf(station.PressurePoints.Others, noise, station);
-        Taus = [.. Families.Candidates.Select(raw.Reduced)];
+        range = application.Requirement.Temperature;
+        Raw = new RawError(platform);
+        scale = new TemperatureScale(range, Raw);
+        Reference = [.. station.PressurePoints.Reference.Select(ReadingPressure.At)];
+        Others = [.. station.PressurePoints.Others.Select(ReadingPressure.At)];
+        Candidates = [.. Families.Candidates.Select(t => CandidateOf(t, platform, station))];
+        IEnumerable<CorrectionForm> forms = Families.All.SelectMany(f => Families.DegreesOf[f.Count]).Distinct()
+            .Select(d => CorrectionForm.For(station, d.Zero, d.Span));
+        rowsOf = forms.Select((f, i) => new LeftoverRows(i, f, Raw)).ToDictionary(r => r.Form);
     }
 
     /// <summary>The application.</summary>
@@ -36,37 +33,35 @@ internal sealed class SearchTables
     /// <summary>The candidate plans.</summary>
     public PlanFamilies Families { get; }
 
-    /// <summary>The rows <c>L_wᵀ</c>, <c>L_lᵀ</c>, <c>āᵀ</c>, each as long as the raw error has coefficients.</summary>
-    public double[][] Rows { get; }
+    /// <summary>The raw error.</summary>
+    public RawError Raw { get; }
 
-    /// <summary>How many of <see cref="Rows"/> belong to the spread within a lot; they come first.</summary>
-    public int WithinRows { get; }
+    /// <summary>The pressures read at the temperature nearest the reference temperature.</summary>
+    public ReadingPressure[] Reference { get; }
 
-    /// <summary>How many of <see cref="Rows"/> belong to the spread of the lots; they follow.</summary>
-    public int LotRows { get; }
+    /// <summary>The pressures read at the other temperatures.</summary>
+    public ReadingPressure[] Others { get; }
 
-    /// <summary>The points at the temperature nearest the reference temperature, by candidate, then pressure.</summary>
-    public ReadingPoint[][] Reference { get; }
+    /// <summary>The candidate temperatures, rising.</summary>
+    public CandidateReadings[] Candidates { get; }
 
-    /// <summary>The points at the other temperatures, by candidate, then pressure.</summary>
-    public ReadingPoint[][] Others { get; }
+    /// <summary>The forms of all candidate plans, each with what it cannot follow.</summary>
+    public IEnumerable<LeftoverRows> Forms => rowsOf.Values;
 
-    /// <summary>Reduced temperature of each candidate.</summary>
-    public double[] Taus { get; }
+    /// <summary>What the form with these degrees cannot follow.</summary>
+    public LeftoverRows RowsOf(int zeroDegree, int spanDegree) => rowsOf[CorrectionForm.For(Application.Station, zeroDegree, spanDegree)];
 
-    /// <summary>Reduced temperature.</summary>
-    public double Reduced(Temperature temperature) => raw.Reduced(temperature);
+    /// <summary>The place of a temperature in the two scales.</summary>
+    public ScaledTemperature PlaceOf(Temperature temperature) => new(scale.Scaled(temperature), Raw.Reduced(temperature));
 
-    /// <summary>
-    /// What a row of <see cref="Rows"/> makes of one pressure shape of the raw error at a reduced temperature: <c>Σ_k row_jk τ^k</c>.
-    /// </summary>
-    public double RowAt(int row, PressureShape shape, double tau)
+    /// <summary>The place in a list that is nearest the requirement's reference temperature, the colder one on a tie.</summary>
+    public int NearestIn(ReadOnlySpan<int> list)
     {
-        double sum = 0;
-        for (int k = 0; k < raw.Names.Length; k++)
-            if (raw.Names[k].Shape == shape)
-                sum += Rows[row][k] * Powers.Of(tau, raw.Names[k].Degree);
-        return sum;
+        int nearest = 0;
+        for (int i = 1; i < list.Length; i++)
+            if (Candidates[list[i]].Distance < Candidates[list[nearest]].Distance)
+                nearest = i;
+        return nearest;
     }
 
     /// <summary>The plan of a list of candidates.</summary>
@@ -74,21 +69,37 @@ internal sealed class SearchTables
         [.. list.Select(i => Families.Candidates[i])], zeroDegree, spanDegree,
         Application.Requirement.Temperature.Reference, Application.Station.PressurePoints);
 
-    private ReadingPoint[][] PointsOf(IReadOnlyList<double> fractions, double noise, Station station) =>
-    [
-        .. Families.Candidates.Select(t => fractions.Select(x => PointAt(x, raw.Reduced(t), noise, station)).ToArray()),
-    ];
-
-    private ReadingPoint PointAt(double x, double tau, double noise, Station station)
+    private CandidateReadings CandidateOf(Temperature temperature, Platform platform, Station station)
     {
-        double[] basis = raw.Basis(x, tau);
-        double soak = Correction.SoakVariance(raw, station, x, tau);
-        return new ReadingPoint(x, [.. Rows.Select(r => Vectors.Dot(r, basis))], Math.Sqrt(noise + soak));
+        ScaledTemperature place = PlaceOf(temperature);
+        double noise = ReadingNoise.VarianceOf(platform, station);
+        double Sigma(ReadingPressure p) => Math.Sqrt(noise + Correction.SoakVariance(Raw, station, p.Fraction, place.Tau));
+        double distance = Math.Abs((temperature - range.Reference).Kelvin);
+        return new CandidateReadings(place, distance, [.. Reference.Select(Sigma)], [.. Others.Select(Sigma)]);
     }
 }
 
-/// <summary>One place where a plan may read: its pressure, what the rows make of the raw error there, and the reading's noise.</summary>
-/// <param name="Fraction">Pressure fraction.</param>
-/// <param name="Rows">The rows of <see cref="SearchTables"/> times <c>b(x,T)</c>.</param>
-/// <param name="Noise">Standard deviation of a reading, settling of the temperature included, %FS.</param>
-internal sealed record ReadingPoint(double Fraction, double[] Rows, double Noise);
+/// <summary>A temperature in the scale of the fit and in that of the raw error.</summary>
+/// <param name="Scaled">
+/// The operating range mapped to −1 … 1: corrections are fitted in powers of this number, which are far less alike than those of <c>τ</c>.
+/// The fit is the same, only its rounding is smaller.
+/// </param>
+/// <param name="Tau">Reduced temperature <c>τ</c>.</param>
+internal readonly record struct ScaledTemperature(double Scaled, double Tau);
+
+/// <summary>One pressure of a reading list.</summary>
+/// <param name="Fraction">Pressure fraction, the value of <c>ψ1</c>.</param>
+/// <param name="Bow">Value of <c>ψ2</c>.</param>
+/// <param name="SShape">Value of <c>ψ3</c>.</param>
+internal readonly record struct ReadingPressure(double Fraction, double Bow, double SShape)
+{
+    /// <summary>The pressure of a fraction.</summary>
+    public static ReadingPressure At(double x) => new(x, PressureShapes.At(PressureShape.Bow, x), PressureShapes.At(PressureShape.SShape, x));
+}
+
+/// <summary>One candidate temperature: where it lies and how noisy a reading is there.</summary>
+/// <param name="Place">Its place.</param>
+/// <param name="Distance">How far from the requirement's reference temperature, K.</param>
+/// <param name="ReferenceSigmas">Standard deviation of a reading at each pressure of the reference list, settling included, %FS.</param>
+/// <param name="OtherSigmas">The same for the other list.</param>
+internal sealed record CandidateReadings(ScaledTemperature Place, double Distance, double[] ReferenceSigmas, double[] OtherSigmas);

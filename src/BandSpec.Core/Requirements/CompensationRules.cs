@@ -21,6 +21,8 @@ internal static class CompensationRules
         findings.Require(
             scope.FewestTemperatures <= scope.MostTemperatures, "compensation.temperatures", "plan-count",
             $"{scope.FewestTemperatures}..{scope.MostTemperatures}: the fewest are more than the most", "fewest..most, such as `3..6`");
+        if (scope.Pinned is { } pinned)
+            PinnedPlanRules.Judge(pinned, range, findings);
         bool isCountable = AcceptedRanges.CandidateStep.Holds(scope.CandidateStep.Kelvin) && range.Lower < range.Upper
             && AcceptedRanges.PlanTemperatures.Holds(scope.FewestTemperatures) && AcceptedRanges.PlanTemperatures.Holds(scope.MostTemperatures);
         if (isCountable)

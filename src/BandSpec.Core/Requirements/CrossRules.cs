@@ -23,6 +23,8 @@ internal static class CrossRules
             JudgeHeld(held, requirement, platform, findings);
         if (requirement.Compensation is { } scope && station.PressurePoints is { } points)
             JudgePoints(scope, platform, points, findings);
+        if (requirement.Compensation?.Pinned is { } pinned)
+            PinnedPlanRules.JudgeWith(pinned, platform, findings);
         TestUncertainty.Judge(requirement, platform, station, findings);
     }
 

@@ -12,8 +12,11 @@ public sealed record Specification
     /// <summary>The inputs.</summary>
     public required Application Application { get; init; }
 
-    /// <summary>The chosen compensation plan.</summary>
+    /// <summary>The compensation plan: the chosen one, or the one that the requirement pins.</summary>
     public required PlanChoice Choice { get; init; }
+
+    /// <summary>What the search would have chosen; the same as <see cref="Choice"/> unless the requirement pins a plan.</summary>
+    public required PlanChoice Optimum { get; init; }
 
     /// <summary>Its band.</summary>
     public required BandMap Bands { get; init; }
@@ -34,5 +37,5 @@ public sealed record Specification
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
 
     /// <summary>Whether the plan keeps the allowed error with the stated capability everywhere.</summary>
-    public bool Feasible => Bands.Margin >= 1;
+    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere;
 }

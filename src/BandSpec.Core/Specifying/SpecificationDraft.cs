@@ -11,23 +11,26 @@ public static class SpecificationDraft
 {
     /// <summary>
     /// Chooses the compensation plan, works out its band, shares out the allowed error and derives the test limits. That no plan fits is an
-    /// answer like any other: see <see cref="Specification.Feasible"/>.
+    /// answer like any other: see <see cref="Specification.Feasible"/>. A plan that the requirement pins is judged as given.
     /// </summary>
     /// <param name="application">The inputs, known to fit each other.</param>
     /// <param name="progress">Is told how far the search has come, from several threads; may be <see langword="null"/>.</param>
-    /// <param name="cancellation">Ends the search early.</param>
-    /// <exception cref="OperationCanceledException">The search was ended before it had an answer.</exception>
+    /// <param name="cancellation">
+    /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
+    /// </param>
     public static Specification Draft(
         Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
-        PlanChoice choice = new PlanSearch(application, progress).Run(cancellation);
-        BandMap bands = BandMap.Of(application, choice.Plan);
+        PlanChoice optimum = PlanChoosing.Choose(application, progress, cancellation);
+        PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
+        BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         return new Specification
         {
             Application = application,
             Choice = choice,
+            Optimum = optimum,
             Bands = bands,
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),

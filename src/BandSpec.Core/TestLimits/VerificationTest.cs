@@ -39,12 +39,21 @@ internal sealed class VerificationTest
         }
     }
 
-    /// <summary>As the requirement says; otherwise the reference temperature, both ends of the range and the temperature of least margin.</summary>
+    /// <summary>
+    /// As the requirement says; otherwise the reference temperature, both ends of the range and the temperature of least margin, in whole
+    /// degrees as a chamber is set.
+    /// </summary>
     private IEnumerable<Temperature> Temperatures()
     {
         OperatingTemperature range = application.Requirement.Temperature;
-        return (application.Requirement.Test.Temperatures ?? [range.Lower, range.Reference, range.Upper, bands.Worst.Temperature])
+        return (application.Requirement.Test.Temperatures ?? [range.Lower, range.Reference, range.Upper, WholeDegrees(bands.Worst.Temperature, range)])
             .Distinct().Order();
+    }
+
+    private static Temperature WholeDegrees(Temperature temperature, OperatingTemperature range)
+    {
+        var rounded = Temperature.FromCelsius(Math.Round(temperature.Celsius));
+        return Temperature.Min(Temperature.Max(rounded, range.Lower), range.Upper);
     }
 
     private VerificationPoint PointAt(string id, Temperature temperature, double fraction, PressureDirection direction)

@@ -5,7 +5,9 @@ using OxyPlot.Series;
 
 namespace BandSpec.Documents.Charts;
 
-/// <summary>Time spent between two temperatures in °C: its share of the service life in percent, and how that is written over its bar.</summary>
+/// <summary>
+/// Time spent between two temperatures in °C: its share of the service life in percent, and how that is written over its bar.
+/// </summary>
 internal sealed record DwellBin(double From, double To, double Share, string Label);
 
 /// <summary>The temperature profile alone, as bars.</summary>
@@ -29,7 +31,10 @@ internal sealed record DwellChart(string Across, string Up, IReadOnlyList<DwellB
     {
         upright.Key = key;
         plot.Axes.Add(upright);
-        var bars = new RectangleBarSeries { YAxisKey = key, FillColor = ChartStyle.Frame, StrokeColor = ChartStyle.White, StrokeThickness = 0.8 };
+        var bars = new RectangleBarSeries
+        {
+            YAxisKey = key, FillColor = ChartStyle.Frame, StrokeColor = ChartStyle.White, StrokeThickness = 0.8
+        };
         foreach (var bin in bins) bars.Items.Add(new RectangleBarItem(bin.From, 0, bin.To, bin.Share));
         plot.Series.Add(bars);
     }
@@ -42,7 +47,9 @@ internal sealed record DwellChart(string Across, string Up, IReadOnlyList<DwellB
         {
             double left = across.Transform(bin.From), right = across.Transform(bin.To);
             if (Typeface.Of(Face.Regular).Width(bin.Label, ChartStyle.LabelSize) < right - left - 2)
-                Note(pen, new((left + right) / 2, up.Transform(bin.Share) - 2), bin.Label, HorizontalAlignment.Center, VerticalAlignment.Bottom, ChartStyle.Ink);
+                Note(
+                    pen, new((left + right) / 2, up.Transform(bin.Share) - 2), bin.Label, HorizontalAlignment.Center,
+                    VerticalAlignment.Bottom, ChartStyle.Ink);
         }
     }
 

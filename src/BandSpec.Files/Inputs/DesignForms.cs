@@ -37,6 +37,16 @@ internal static class DesignForms
             ("least-cost", PlanObjective.LeastCost), ("most-margin", PlanObjective.MostMargin), ("least-error", PlanObjective.LeastError)),
         "Which of the plans that fit is chosen.");
 
+    private static readonly Key<IReadOnlyList<Temperature>> Plan = Key.Optional<IReadOnlyList<Temperature>>(
+        "plan", new ListForm<Temperature>("plan temperatures", QuantityForms.Temperature, 2, 10),
+        "A plan to be used as given, cold to hot; the search then only tells what it would have chosen.");
+
+    private static readonly Key<int> ZeroDegree = Key.Optional<int>(
+        "zero-degree", new CountForm(AcceptedRanges.CorrectionDegree), "Degree of the zero correction of the plan given; the highest when left out.");
+
+    private static readonly Key<int> SpanDegree = Key.Optional<int>(
+        "span-degree", new CountForm(AcceptedRanges.CorrectionDegree), "Degree of the span correction of the plan given; the highest when left out.");
+
     private static readonly Key<double> GuardBand = new(
         "guard-band", new NumberForm(AcceptedRanges.GuardBand), "Guard band in multiples of the expanded uncertainty; 0 is simple acceptance.");
 
@@ -54,11 +64,14 @@ internal static class DesignForms
 
     /// <summary>The form of <c>compensation</c>.</summary>
     internal static MapForm<CompensationScope> Compensation { get; } = new(
-        "the compensation plans to consider", [CandidateStep, Temperatures, Separation, Reach, Objective],
+        "the compensation plans to consider", [CandidateStep, Temperatures, Separation, Reach, Objective, Plan, ZeroDegree, SpanDegree],
         v => new CompensationScope
         {
             CandidateStep = v.Of(CandidateStep), FewestTemperatures = v.Of(Temperatures).Fewest, MostTemperatures = v.Of(Temperatures).Most,
             Separation = v.Of(Separation), Reach = v.Of(Reach), Objective = v.Of(Objective),
+            Pinned = v.Has(Plan) || v.Has(ZeroDegree) || v.Has(SpanDegree)
+                ? new PinnedPlan(v.Has(Plan) ? v.Of(Plan) : [], v.FindValue(ZeroDegree), v.FindValue(SpanDegree))
+                : null,
         });
 
     /// <summary>The form of <c>test</c>.</summary>

@@ -1,7 +1,7 @@
+using System.Runtime.Intrinsics;
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
-using BandSpec.Core.Residuals;
 using Xunit;
 
 namespace BandSpec.Tests.Planning;
@@ -19,12 +19,16 @@ public sealed class FastAgainstPlain
         Application application = Given.Application();
         var tables = new SearchTables(application);
         int[] list = [.. celsius.Select(t => tables.Families.Candidates.ToList().IndexOf(Given.C(t)))];
+        var batch = new PlanBatch(list.Length, tables.NearestIn(list));
+        batch.Add(list);
         var fit = new PlanFit(tables);
-        Assert.True(fit.To(list, CorrectionForm.For(application.Station, zero, span)));
-        int block = 0;
+        fit.Load(batch);
+        Assert.Equal(Vector512<double>.AllBitsSet.AsInt64(), fit.To(tables.RowsOf(zero, span)).AsInt64());
+        int row = 0;
 
         CompensationPlan plan = tables.PlanOf(list, zero, span);
-        Assert.Equal(BandMap.Of(application, plan).Margin, new MarginScore(tables).Of(fit, double.NegativeInfinity, ref block), 1e-10);
-        Assert.Equal(ProfileFigures.Of(application, plan).RmsError.Percent, new RmsScore(tables).Of(fit), 1e-12);
+        double margin = new MarginScore(tables, []).Of(fit, double.NegativeInfinity, ref row)[0];
+        Assert.Equal(BandMap.Of(application, plan).Margin, margin, 1e-10);
+        Assert.Equal(ProfileFigures.Of(application, plan).RmsError.Percent, new RmsScore(tables).Of(fit, double.PositiveInfinity)[0], 1e-12);
     }
 }

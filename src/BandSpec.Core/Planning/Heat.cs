@@ -1,0 +1,38 @@
+namespace BandSpec.Core.Planning;
+
+/// <summary>One run over some families: what a plan must reach, and who has reached it. Safe for several threads.</summary>
+internal sealed class Heat(MarginScore margin, double least, bool rmsFirst)
+{
+    private readonly Lock gate = new();
+    private double bestMargin = double.NegativeInfinity;
+    private double bestRms = double.PositiveInfinity;
+
+    /// <summary>The score by margin.</summary>
+    public MarginScore Margin { get; } = margin;
+
+    /// <summary>Whether the smallest rms comes before the largest margin.</summary>
+    public bool RmsFirst { get; } = rmsFirst;
+
+    /// <summary>Everyone still in the running.</summary>
+    public List<Contender> Contenders { get; } = [];
+
+    /// <summary>A margin below this is out: not feasible, or beaten by more than a tie.</summary>
+    public double LeastMargin => RmsFirst ? least : Math.Max(least, Contest.TieBelow(Volatile.Read(ref bestMargin)));
+
+    /// <summary>An rms above this is out.</summary>
+    public double MostRms => RmsFirst ? Contest.TieAbove(Volatile.Read(ref bestRms)) : double.PositiveInfinity;
+
+    /// <summary>Takes a plan into the running and those out that it beats.</summary>
+    public void Enter(Contender contender)
+    {
+        lock (gate)
+        {
+            if (contender.Margin < LeastMargin || contender.Rms > MostRms)
+                return;
+            bestMargin = Math.Max(bestMargin, contender.Margin);
+            bestRms = Math.Min(bestRms, contender.Rms);
+            Contenders.RemoveAll(c => c.Margin < LeastMargin || c.Rms > MostRms);
+            Contenders.Add(contender);
+        }
+    }
+}

@@ -1,0 +1,77 @@
+using BandSpec.Core.Bands;
+using BandSpec.Core.Requirements;
+
+namespace BandSpec.Core.Planning;
+
+/// <summary>
+/// Chooses a plan whose claim holds at every pressure and temperature: a search over nodes, then a look at everything between them; places
+/// where the choice falls short of the margin it was chosen for join the nodes, and the search repeats. This is the exchange method for
+/// semi-infinite problems (Blankenship &amp; Falk 1976). Nodes only lower margins, so when a choice keeps its margin everywhere, no other plan
+/// beats it everywhere: the proof over nodes is then a proof over the continuous range.
+/// </summary>
+internal static class PlanChoosing
+{
+    /// <summary>How far below its margin at the nodes, relative, a choice may fall between them.</summary>
+    internal const double Shortfall = 1e-8;
+
+    /// <summary>A choice that still falls short after this many rounds is given as not proven; three or four are usual.</summary>
+    private const int MostRounds = 60;
+
+    /// <summary>The best plan by the requirement's objective.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="progress">Is told how far the search has come; may be <see langword="null"/>.</param>
+    /// <param name="cancellation">Ends the search early; the best plan so far is then the answer, not proven.</param>
+    public static PlanChoice Choose(Application application, IProgress<SearchProgress>? progress, CancellationToken cancellation) =>
+        Choose(new PlanSearch(application, progress), application.Requirement.Compensation.Objective, cancellation);
+
+    /// <summary>The best plan of a prepared search.</summary>
+    public static PlanChoice Choose(PlanSearch search, PlanObjective objective, CancellationToken cancellation = default)
+    {
+        Application application = search.Tables.Application;
+        List<NodePlace> added = [];
+        for (int round = 1; ; round++)
+        {
+            SearchAnswer answer = search.Run(objective, added, cancellation);
+            CompensationPlan plan = search.Tables.PlanOf(answer.Winner.List, answer.Winner.Zero, answer.Winner.Span);
+            IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
+            List<NodePlace> shortOf = [.. Violated(everywhere, answer.Winner.Margin).Where(p => !added.Contains(p))];
+            bool holds = shortOf.Count == 0;
+            if (holds || !answer.Proven || round == MostRounds)
+                return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), search.PlanCount, answer.Proven && holds)
+                {
+                    PlansDecided = answer.Decided,
+                    AddedNodes = added,
+                    ExchangeRounds = round,
+                    Everywhere = everywhere,
+                };
+            added = [.. added, .. shortOf];
+        }
+    }
+
+    /// <summary>The plan that the requirement pins, judged between the nodes as well; nothing when it pins none.</summary>
+    /// <param name="application">The application.</param>
+    /// <param name="optimum">What the search would have chosen.</param>
+    public static PlanChoice? Pinned(Application application, PlanChoice optimum)
+    {
+        if (application.Requirement.Compensation.Pinned is not { } pinned)
+            return null;
+        CompensationPlan plan = pinned.Complete(application.Requirement.Temperature.Reference, application.Platform, application.Station);
+        IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
+        bool isOptimum = plan.Temperatures.SequenceEqual(optimum.Plan.Temperatures)
+            && (plan.ZeroDegree, plan.SpanDegree) == (optimum.Plan.ZeroDegree, optimum.Plan.SpanDegree);
+        return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), optimum.PlansConsidered, optimum.Proven && isOptimum)
+        {
+            PlansDecided = optimum.PlansDecided,
+            AddedNodes = [.. Violated(everywhere, BandMap.Of(application, plan).Margin)],
+            ExchangeRounds = 1,
+            Everywhere = everywhere,
+        };
+    }
+
+    /// <summary>
+    /// The places at which a choice falls short. A plan whose added errors alone fill the band somewhere is an answer of "no" with or without
+    /// further nodes.
+    /// </summary>
+    private static IEnumerable<NodePlace> Violated(IReadOnlyList<ContinuousMargin> everywhere, double margin) =>
+        margin > 0 ? everywhere.Where(r => r.Margin < margin * (1 - Shortfall)).Select(r => r.Worst) : [];
+}
