@@ -56,6 +56,7 @@ internal static class CommandLine
             + "which compensation plan keeps it, how the error is shared out, and the limits to test against.");
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
+        root.Add(CompareCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
         root.Add(TryCommand.Create(terminal));
         root.Add(GatherCommand.Create(terminal));
