@@ -5,9 +5,12 @@ string root = args.Length > 1 ? args[1] : ".";
 switch (args.FirstOrDefault())
 {
     case "lots":
-        LotBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
+        LotBenchmark.Run(Demos.Draft(root, "brine-reinjection"), root);
+        return 0;
+    case "rare":
+        RareBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
         return 0;
     default:
-        Console.Error.WriteLine("usage: BandSpec.Benchmarks lots [ROOT]");
+        Console.Error.WriteLine("usage: BandSpec.Benchmarks lots|rare [ROOT]");
         return 2;
 }
