@@ -56,8 +56,13 @@ internal static class CommandLine
             + "which compensation plan keeps it, how the error is shared out, and the limits to test against.");
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
+        root.Add(CompareCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
+        root.Add(TryCommand.Create(terminal));
+        root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
+        root.Add(CharacterizeCommand.Create(terminal));
+        root.Add(AgeCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
         return root;
