@@ -57,6 +57,8 @@ internal static class CommandLine
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
         root.Add(CompareCommand.Create(terminal));
+        root.Add(JudgeCommand.Create(terminal));
+        root.Add(SampleCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
         root.Add(TryCommand.Create(terminal));
         root.Add(GatherCommand.Create(terminal));
