@@ -3,6 +3,7 @@ using System.CommandLine.Help;
 using System.CommandLine.Invocation;
 using BandSpec.Cli.Commands;
 using BandSpec.Cli.Printing;
+using BandSpec.Core.Findings;
 using BandSpec.Documents.Templates;
 
 namespace BandSpec.Cli;
@@ -55,10 +56,15 @@ internal static class CommandLine
             + "which compensation plan keeps it, how the error is shared out, and the limits to test against.");
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
+        root.Add(CompareCommand.Create(terminal));
+        root.Add(JudgeCommand.Create(terminal));
+        root.Add(SampleCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
         root.Add(TryCommand.Create(terminal));
         root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
+        root.Add(CharacterizeCommand.Create(terminal));
+        root.Add(AgeCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
         return root;
@@ -66,10 +72,19 @@ internal static class CommandLine
 
     private static int RefuseArguments(ParseResult parsed, Terminal terminal)
     {
-        foreach (string message in parsed.Errors.Select(error => error.Message).Distinct())
-            terminal.Error.WriteLine($"bandspec: {message}");
-        string command = parsed.CommandResult.Command is RootCommand ? "" : $"{parsed.CommandResult.Command.Name} ";
-        terminal.Error.WriteLine($"bandspec: see `bandspec {command}--help`");
+        Command command = parsed.CommandResult.Command;
+        string? unknown = command is RootCommand ? parsed.UnmatchedTokens.FirstOrDefault() : null;
+        if (unknown is not null)
+        {
+            string? nearest = Spelling.Nearest(unknown, command.Subcommands.Select(known => known.Name));
+            terminal.Error.WriteLine($"bandspec: there is no command `{unknown}`{(nearest is null ? "" : $"; did you mean `{nearest}`?")}");
+        }
+        else
+        {
+            foreach (string message in parsed.Errors.Select(error => error.Message).Distinct())
+                terminal.Error.WriteLine($"bandspec: {message}");
+        }
+        terminal.Error.WriteLine($"bandspec: see `bandspec {(command is RootCommand ? "" : $"{command.Name} ")}--help`");
         return (int)ExitCode.Findings;
     }
 }

@@ -1,4 +1,6 @@
 using System.CommandLine;
+using System.CommandLine.Parsing;
+using BandSpec.Core.Findings;
 
 namespace BandSpec.Cli.Commands;
 
@@ -6,10 +8,26 @@ namespace BandSpec.Cli.Commands;
 internal static class CommonOptions
 {
     /// <summary>One or more requirement files.</summary>
-    public static Argument<string[]> Files() => new("FILE")
+    public static Argument<string[]> Files()
     {
-        Description = "Requirement files; platform and station are found from there.", Arity = ArgumentArity.OneOrMore,
-    };
+        Argument<string[]> files = new("FILE")
+        {
+            Description = "Requirement files; platform and station are found from there.", Arity = ArgumentArity.OneOrMore,
+        };
+        files.Validators.Add(RefuseOptions);
+        return files;
+    }
+
+    /// <summary>A misspelt option would otherwise be taken for a file; a file with such a name can be given as <c>./-name</c>.</summary>
+    private static void RefuseOptions(ArgumentResult argument)
+    {
+        foreach (string option in argument.Tokens.Select(token => token.Value).Where(value => value.StartsWith('-')))
+        {
+            IEnumerable<string> known = argument.Parent is CommandResult { Command: { } command } ? command.Options.Select(o => o.Name) : [];
+            string? nearest = Spelling.Nearest(option, known);
+            argument.AddError($"there is no option `{option}`{(nearest is null ? "" : $"; did you mean `{nearest}`?")}");
+        }
+    }
 
     /// <summary>Output for machines.</summary>
     public static Option<bool> Json() => new("--json") { Description = "Write JSON to standard output, for programs." };

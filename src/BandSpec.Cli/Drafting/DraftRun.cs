@@ -42,9 +42,8 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
         InputSet inputs = InputFolder.Read(file, folders.Root, terminal.Folder);
         if (inputs.Application is not { } application)
             return new Draft(file, inputs, null, null);
-        Specification specification;
-        using (SearchBar bar = new(terminal, application.Requirement.Identity.FolderName))
-            specification = SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SearchBar.Over(
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
         TemplateFolder? templates = TemplateFolder.Find(folders.Templates, file, terminal.Folder);
         IReadOnlyList<PackageFile> files = PackageContents.Of(specification, inputs.Sources, templates, look);
         PackageFolder folder = new(Path.GetFullPath(folders.Out, terminal.Folder), application.Requirement.Identity.FolderName);

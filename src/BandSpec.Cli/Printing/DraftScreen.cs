@@ -3,8 +3,10 @@ using System.Text;
 using BandSpec.Cli.Drafting;
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
+using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using Spectre.Console;
 
 namespace BandSpec.Cli.Printing;
 
@@ -34,27 +36,29 @@ internal static class DraftScreen
     /// <summary>One line for each of several drafts.</summary>
     public static string SummaryOf(IReadOnlyList<Draft> drafts, Ink ink)
     {
-        int width = drafts.Max(draft => CellWidth.Of(draft.File));
-        StringBuilder screen = new("\n");
+        Table table = new Table().NoBorder().HideHeaders().AddColumns("file", "verdict", "margin", "folder");
+        foreach (TableColumn column in table.Columns)
+            column.NoWrap().PadRight(2);
         foreach (Draft draft in drafts)
         {
-            string file = draft.File + new string(' ', width - CellWidth.Of(draft.File));
-            string verdict = draft is not { Specification: { } specification, Package: { } package }
-                ? ink.Red($"{draft.Inputs.Findings.Count} finding{(draft.Inputs.Findings.Count == 1 ? "" : "s")}")
-                : $"{Verdict(specification, ink)}  margin {Margin(specification.Bands.Margin)}  {ink.Blue(package.Folder)}";
-            screen.Append(Plain, $"{file}  {verdict}\n");
+            int count = draft.Inputs.Findings.Count;
+            if (draft is { Specification: { } specification, Package: { } package })
+                table.AddRow(new Text(draft.File), Verdict(specification), new Text($"margin {Margin(specification.Bands.Margin)}"), new Text(package.Folder));
+            else
+                table.AddRow(new Text(draft.File), new Text($"{count} finding{(count == 1 ? "" : "s")}", Color.Red));
         }
-        return screen.ToString();
+        return "\n" + Tables.Of(table, ink);
     }
 
-    private static string Verdict(Specification specification, Ink ink) =>
-        specification.Feasible ? ink.Green("FEASIBLE    ") : ink.Red("NOT FEASIBLE");
+    private static Text Verdict(Specification specification) =>
+        specification.Feasible ? new Text("FEASIBLE", Color.Green) : new Text("NOT FEASIBLE", Color.Red);
 
     private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
     {
         BandNode worst = specification.Bands.Worst;
-        string place = $"{worst.Temperature} and {specification.Application.Requirement.Pressure.At(worst.PressureFraction)}";
-        screen.Append(Plain, $"{Verdict(specification, ink).TrimEnd()}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
+        string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
+        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red("NOT FEASIBLE"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
         screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
         if (!specification.Feasible && specification.Floor.Bound < 1)
@@ -73,24 +77,27 @@ internal static class DraftScreen
 
     private static void AppendRegions(StringBuilder screen, Specification specification, Ink ink)
     {
-        int decimals = Decimals(specification.Application.Requirement.Rounding.Band.Percent);
-        string format = $"F{decimals}";
-        screen.Append(Plain, $"{ink.Bold("Band")}      {ink.Faint("°C                  allowed   band  typical   margin")}     %FS\n");
+        string format = $"F{Decimals(specification.Application.Requirement.Rounding.Band.Percent)}";
+        Table table = new Table().SimpleBorder().AddColumns("Band, %FS", "allowed", "maximum", "typical", "margin");
+        for (int i = 1; i < table.Columns.Count; i++)
+            table.Columns[i].RightAligned();
         foreach (RegionBand region in specification.Bands.Regions)
-        {
-            string range = $"{region.From.Celsius.ToString(Plain),5} to {region.To.Celsius.ToString(Plain),-5}";
-            string margin = Margin(region.Margin);
-            screen.Append(Plain, $"          {range,-18}")
-                .Append(region.AllowedTightest.Percent.ToString(format, Plain).PadLeft(9))
-                .Append(region.Stated.Percent.ToString(format, Plain).PadLeft(7))
-                .Append(region.Typical.Percent.ToString(format, Plain).PadLeft(9))
-                .Append(Plain, $"{new string(' ', 9 - margin.Length)}{(region.Margin >= 1 ? margin : ink.Red(margin))}\n");
-        }
-        screen.Append('\n');
+            table.AddRow(
+                new Text(string.Create(Plain, $"{region.From.Celsius} to {region.To.Celsius} °C")),
+                Tables.Figure(region.AllowedTightest.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Stated.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Typical.Percent.ToString(format, Plain)),
+                Tables.Figure(Margin(region.Margin), region.Margin < 1 ? Color.Red : null));
+        screen.Append(Tables.Of(table, ink)).Append('\n');
     }
 
-    private static void AppendProfile(StringBuilder screen, ProfileFigures profile, Ink ink) => screen.Append(
-        Plain, $"{ink.Bold("Over life")} rms error {profile.RmsError.Percent:0.000} %FS; outside the allowed error {profile.OutsideProbability * 1e6:0.###} ppm of the time; drift {profile.AgeFactor:0.00} times the ageing test's\n\n");
+    private static void AppendProfile(StringBuilder screen, ProfileFigures profile, Ink ink)
+    {
+        double parts = profile.OutsideProbability * 1e6;
+        string outside = parts < 0.001 ? "less than 0.001" : parts.ToString(parts < 1 ? "0.000" : "0.#", Plain);
+        screen.Append(Plain, $"{ink.Bold("Over life")} rms error {profile.RmsError.Percent:0.000} %FS; beyond the allowed error {outside} millionths of the time;\n");
+        screen.Append(Plain, $"          drift {profile.AgeFactor:0.00} times that of the ageing test\n\n");
+    }
 
     /// <summary>Cut, not rounded: a margin of 0.9996 is not 1.</summary>
     private static string Margin(double margin) =>

@@ -61,8 +61,15 @@ internal sealed class PrintViewMaker
             allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
             allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
             Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
-            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, 6))),
-            Shown(Rounded.Given(band.Worst.Temperature.Celsius)));
+            Shown(Rounded.Given(Coarse(_requirement.Pressure, band.Worst.PressureFraction))),
+            Shown(Rounded.Given(Math.Round(band.Worst.Temperature.Celsius, 1))));
+    }
+
+    // Where the margin is least matters to a thousandth of the range; more digits are those of a search, not of the figure.
+    private static double Coarse(PressureRange range, double fraction)
+    {
+        var span = range.At(1).Value - range.At(0).Value;
+        return Math.Round(range.At(fraction).Value, Math.Clamp(2 - (int)Math.Floor(Math.Log10(span)), 0, 9));
     }
 
     private ProfileView Profile(InputViews inputs)

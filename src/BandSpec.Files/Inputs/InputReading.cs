@@ -19,14 +19,25 @@ public static class InputReading
         InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null,
         IReadOnlyList<InputChange>? changes = null)
     {
-        ArgumentNullException.ThrowIfNull(requirement);
         ArgumentNullException.ThrowIfNull(open);
         InputContent Changed(InputFile kind, InputContent content) =>
             (changes ?? []).Where(change => change.File == kind).Aggregate(content, (before, change) => change.In(before));
-        OpenedFile asked = OpenedFile.Open(InputFile.Requirement, Changed(InputFile.Requirement, requirement));
+        return Read(
+            Changed(InputFile.Requirement, requirement), (kind, path) => Changed(kind, open(path)), missing);
+    }
+
+    /// <summary>Reads the three files and checks all their rules; which file is asked for is told by its kind too.</summary>
+    /// <param name="requirement">The requirement's file.</param>
+    /// <param name="open">Opens the platform or the station by its path as it is written in the requirement.</param>
+    /// <param name="missing">The letters of a text that no document can show; <see langword="null"/> when none is going to be written.</param>
+    internal static InputSet Read(
+        InputContent requirement, Func<InputFile, string, InputContent> open, Func<string, IReadOnlyList<string>>? missing)
+    {
+        ArgumentNullException.ThrowIfNull(requirement);
+        OpenedFile asked = OpenedFile.Open(InputFile.Requirement, requirement);
         double? span = asked.Find(RequirementForm.Pressure)?.SpanInPascals;
-        OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, path => Changed(InputFile.Platform, open(path)));
-        OpenedFile? line = Follow(asked, RequirementForm.StationFile, InputFile.Station, path => Changed(InputFile.Station, open(path)));
+        OpenedFile? family = Follow(asked, RequirementForm.PlatformFile, InputFile.Platform, open);
+        OpenedFile? line = Follow(asked, RequirementForm.StationFile, InputFile.Station, open);
         RequirementParts wanted = asked.Read(RequirementForm.Form, span) ?? new RequirementParts();
         PlatformParts platform = family?.Read(PlatformForm.Form, span) ?? new PlatformParts();
         StationParts station = line?.Read(StationForm.Form, span) ?? new StationParts();
@@ -51,11 +62,11 @@ public static class InputReading
     }
 
     /// <summary>Opens the file that a key of the requirement names; a file that cannot be had is a finding at that key.</summary>
-    private static OpenedFile? Follow(OpenedFile asked, Key<string> key, InputFile kind, Func<string, InputContent> open)
+    private static OpenedFile? Follow(OpenedFile asked, Key<string> key, InputFile kind, Func<InputFile, string, InputContent> open)
     {
         if (asked.Find(key) is not { } path)
             return null;
-        InputContent content = open(path);
+        InputContent content = open(kind, path);
         if (content.Refusal is not { } why)
             return OpenedFile.Open(kind, content);
         asked.Place(new Finding(new FieldPath(InputFile.Requirement, key.Name), "file", $"`{Form.Shorten(path)}`: {why}", key.Form.Accepted));
