@@ -36,6 +36,14 @@ public sealed record Specification
     /// <summary>The points of the verification test.</summary>
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
 
+    /// <summary>
+    /// Why no plan fits and what would make one fit; also of a feasible specification when it was asked for, otherwise <see langword="null"/>.
+    /// </summary>
+    public Diagnosis? Diagnosis { get; init; }
+
+    /// <summary>What each input's small change does to the plan's margin; <see langword="null"/> unless it was asked for.</summary>
+    public IReadOnlyList<MarginGain>? Gains { get; init; }
+
     /// <summary>Whether the plan keeps the allowed error with the stated capability everywhere.</summary>
     public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere;
 }

@@ -18,13 +18,16 @@ public static class SpecificationDraft
     /// <param name="cancellation">
     /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
     /// </param>
+    /// <param name="extras">What is worked out beside the specification; a diagnosis always is when no plan is feasible.</param>
     public static Specification Draft(
-        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
+        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default,
+        DraftExtras extras = DraftExtras.None)
     {
         ArgumentNullException.ThrowIfNull(application);
         PlanChoice optimum = PlanChoosing.Choose(application, progress, cancellation);
         PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
         BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
+        bool fits = bands.Margin >= 1 && choice.HoldsEverywhere, asked = extras.HasFlag(DraftExtras.Diagnosis);
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         return new Specification
         {
@@ -37,6 +40,22 @@ public static class SpecificationDraft
             Allocation = allocation,
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
+            Diagnosis = asked || (!fits && optimum.Proven) ? Diagnosis.Of(application, bands, optimum) : null,
+            Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
     }
+}
+
+/// <summary>What can be worked out beside a specification; takes a second or so each.</summary>
+[Flags]
+public enum DraftExtras
+{
+    /// <summary>Nothing more.</summary>
+    None = 0,
+
+    /// <summary>Why the answer is what it is, and what single change would make a requirement feasible.</summary>
+    Diagnosis = 1,
+
+    /// <summary>What a small change of each input does to the margin.</summary>
+    Gains = 2,
 }
