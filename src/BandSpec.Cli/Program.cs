@@ -1,1 +1,3 @@
-return 0;
+using BandSpec.Cli;
+
+return CommandLine.Run(args, Terminal.OfProcess());

@@ -18,7 +18,9 @@ public sealed record DocumentOptions
     /// <summary>The paper; A4 unless said otherwise.</summary>
     public Paper Paper { get; init; } = Paper.A4;
 
-    /// <summary>The language of the words, named like their folder under <c>words</c>: <c>en</c> (the default) and <c>de</c> are built in.</summary>
+    /// <summary>
+    /// The language of the words, named like their folder under <c>words</c>: <c>en</c> (the default) and <c>de</c> are built in.
+    /// </summary>
     public string Language { get; init; } = "en";
 
     /// <summary>The user's own templates, which go before the built-in ones file by file; <see langword="null"/> for none.</summary>
@@ -34,7 +36,8 @@ public sealed record DocumentOptions
     public required string Program { get; init; }
 
     /// <summary>
-    /// Whether the PDF claims to follow PDF/A-3a and PDF/UA-1. It is built along both, but no validator has confirmed it: claim it only after
+    /// Whether the PDF claims to follow PDF/A-3a and PDF/UA-1. It is built along both, but no validator has confirmed it: claim it only
+    /// after
     /// one has.
     /// </summary>
     public bool ClaimsConformance { get; init; }

@@ -12,7 +12,9 @@ using BandSpec.Documents.Templates;
 
 namespace BandSpec.Documents;
 
-/// <summary>Draws the documents of a finished specification. The same arguments give the same bytes, on any machine, in any culture.</summary>
+/// <summary>
+/// Draws the documents of a finished specification. The same arguments give the same bytes, on any machine, in any culture.
+/// </summary>
 public static class SpecificationPackage
 {
     /// <summary>
@@ -24,8 +26,10 @@ public static class SpecificationPackage
     /// The files the document rests on and shows: inputs are listed with their digests; all are attached to the PDF, byte for byte.
     /// </param>
     /// <param name="options">Paper, language, templates and standing.</param>
-    /// <exception cref="TemplateException">A template cannot be read or carried out, or a layout of the limits drops or changes a figure.</exception>
-    /// <exception cref="Fonts.MissingLetterException">A text holds a letter that no embedded font has; see <see cref="Fonts.Letters.Missing"/>.</exception>
+    /// <exception cref="TemplateException">A template cannot be read or carried out, or a layout of the limits drops or changes a
+    /// figure.</exception>
+    /// <exception cref="Fonts.MissingLetterException">A text holds a letter that no embedded font has; see
+    /// <see cref="Fonts.Letters.Missing"/>.</exception>
     public static IReadOnlyList<DocumentFile> Draw(Specification specification, IReadOnlyList<SourceFile> sources, DocumentOptions options)
     {
         ArgumentNullException.ThrowIfNull(specification);
@@ -34,26 +38,35 @@ public static class SpecificationPackage
         var templates = new TemplateSources(options.Templates);
         var words = Words.Load(templates, options.Language);
         var standing = !specification.Feasible ? Standing.Refused : options.Released ? Standing.Plain : Standing.Draft;
-        var view = new PrintViewMaker(specification, words.Plain("decimal-sign")).Make(Digests(sources), options.Program, standing.ToString());
+        var view = new PrintViewMaker(specification, words.Plain("decimal-sign")).Make(
+            Digests(sources), options.Program, standing.ToString());
         words = words.About(ViewForTemplates.Of(view));
         var composition = new Composition(view, words, new SpecificationCharts(specification, view, words));
-        var document = SpecificationComposer.Compose(composition, specification.Application.Requirement.Identity.Date, options.Language, standing, sources.Count > 0);
+        var document = SpecificationComposer.Compose(
+            composition, specification.Application.Requirement.Identity.Date, options.Language, standing, sources.Count > 0);
         return
         [
-            new("specification.pdf", PdfWriter.Write(document, options.Paper == Paper.Letter ? PageGeometry.Letter : PageGeometry.A4, Facts(document.Frame, sources, options))),
+            new("specification.pdf", PdfWriter.Write(document, Sheet(options.Paper), Facts(document.Frame, sources, options))),
             Text("specification.md", MarkdownWriter.Write(document)),
-            .. document.Blocks.OfType<Figure>().Select(f => Text(f.FileName, SvgPen.Draw(f.Chart, $"{f.Label}: {f.Caption.Plain}", f.Alternative))),
+            .. document.Blocks.OfType<Figure>().Select(Picture),
             .. LimitsLayouts.Write(templates, view),
         ];
     }
+
+    private static PageGeometry Sheet(Paper paper) => paper == Paper.Letter ? PageGeometry.Letter : PageGeometry.A4;
+
+    private static DocumentFile Picture(Figure f) => Text(f.FileName, SvgPen.Draw(f.Chart, $"{f.Label}: {f.Caption.Plain}", f.Alternative));
 
     private static DocumentFile Text(string name, string text) => new(name, Encoding.UTF8.GetBytes(text));
 
     private static List<DigestView> Digests(IReadOnlyList<SourceFile> sources) =>
         [.. sources.Where(s => s.IsInput).Select(s => new DigestView(s.Name, Convert.ToHexStringLower(SHA256.HashData(s.Bytes.Span))))];
 
+    private static Attachment Attached(SourceFile file) =>
+        new(file.Name, file.MediaType, file.Description, file.IsInput ? Relationship.Source : Relationship.Data, file.Bytes.ToArray());
+
     private static PdfFacts Facts(Frame frame, IReadOnlyList<SourceFile> sources, DocumentOptions options) => new(
         frame.Title, frame.Author, frame.Subject, frame.Language, frame.Date, options.Program,
-        [.. sources.Select(s => new Attachment(s.Name, s.MediaType, s.Description, s.IsInput ? Relationship.Source : Relationship.Data, s.Bytes.ToArray()))],
+        [.. sources.Select(Attached)],
         options.ClaimsConformance);
 }

@@ -28,14 +28,17 @@ internal static class FindingScreen
         (Finding finding, Place place) = placed;
         string number = place.Line.ToString(null, null).PadLeft(5);
         (string line, string caret) = Cut(place);
-        string shown = line.Length == 0 && place.Line == 1 ? "" : $"""
+        // What concerns a file that could not be had stands at no line of it.
+        bool hasLine = line.Length > 0 || place.Line > 1;
+        string where = hasLine ? $"{place.File}:{place.Line}:{place.Column}" : place.File;
+        string shown = !hasLine ? "" : $"""
             {ink.Faint($"{number} |")} {line}
             {ink.Faint("      |")} {ink.Red(caret)}
 
             """;
         string accepted = Wrap(finding.Accepted);
         string nearest = finding.Nearest is { } word ? $"        did you mean {ink.Green($"`{word}`")}?\n" : "";
-        return $"{ink.Bold($"{place.File}:{place.Line}:{place.Column}")}: {ink.Red(Plain(finding.Found))} {ink.Faint($"[{finding.Rule}]")}\n"
+        return $"{ink.Bold(where)}: {ink.Red(Plain(finding.Found))} {ink.Faint($"[{finding.Rule}]")}\n"
             + shown + $"        accepted: {accepted}\n" + nearest + "\n";
     }
 

@@ -12,6 +12,9 @@ public enum InputFile
     /// <summary>What the production equipment can do.</summary>
     Station,
 
+    /// <summary>The record of released revisions beside the requirement.</summary>
+    Releases,
+
     /// <summary>Readings that statistics are made of.</summary>
     Readings,
 }

@@ -6,8 +6,11 @@ namespace BandSpec.Core.Requirements;
 /// <summary>Rules of the compensation plans that a requirement lets be considered: that there are some, and not too many to prove the best.</summary>
 internal static class CompensationRules
 {
-    /// <summary>The most temperature lists that are searched; every one is looked at, some 10⁶ a second on one core.</summary>
-    internal const double MostLists = 5e7;
+    /// <summary>
+    /// The most temperature lists that are searched. Up to four plans have each, all are looked at, and one core manages some 10⁵ plans a second:
+    /// the largest search is a matter of minutes.
+    /// </summary>
+    internal const double MostLists = 5e6;
 
     /// <summary>Judges all of them.</summary>
     public static void Judge(CompensationScope scope, OperatingTemperature range, FileFindings findings)

@@ -21,6 +21,9 @@ public sealed record Specification
     /// <summary>Its band.</summary>
     public required BandMap Bands { get; init; }
 
+    /// <summary>What can be claimed of the margin; <see langword="null"/> when the platform does not say what its statistics rest on.</summary>
+    public MarginBound? Bound { get; init; }
+
     /// <summary>What a perfect correction would leave.</summary>
     public required BandFloor Floor { get; init; }
 
@@ -37,13 +40,16 @@ public sealed record Specification
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
 
     /// <summary>
-    /// Why no plan fits and what would make one fit; also of a feasible specification when it was asked for, otherwise <see langword="null"/>.
+    /// Why the answer is what it is and, when no plan fits, what would make one fit; <see langword="null"/> unless it was asked for.
     /// </summary>
     public Diagnosis? Diagnosis { get; init; }
 
     /// <summary>What each input's small change does to the plan's margin; <see langword="null"/> unless it was asked for.</summary>
     public IReadOnlyList<MarginGain>? Gains { get; init; }
 
-    /// <summary>Whether the plan keeps the allowed error with the stated capability everywhere.</summary>
-    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere;
+    /// <summary>
+    /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.
+    /// </summary>
+    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere
+        && (Application.Requirement.Capability.Confidence is null || Bound is not { Lower: < 1 });
 }

@@ -9,6 +9,9 @@ namespace BandSpec.Core.Specifying;
 /// <summary>The main story: from an application to its finished specification.</summary>
 public static class SpecificationDraft
 {
+    /// <summary>The confidence of the bound that is shown beside the margin when none is asked for.</summary>
+    private const double UsualConfidence = 0.95;
+
     /// <summary>
     /// Chooses the compensation plan, works out its band, shares out the allowed error and derives the test limits. That no plan fits is an
     /// answer like any other: see <see cref="Specification.Feasible"/>. A plan that the requirement pins is judged as given.
@@ -18,16 +21,17 @@ public static class SpecificationDraft
     /// <param name="cancellation">
     /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
     /// </param>
-    /// <param name="extras">What is worked out beside the specification; a diagnosis always is when no plan is feasible.</param>
+    /// <param name="extras">What is worked out beside the specification.</param>
     public static Specification Draft(
         Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default,
         DraftExtras extras = DraftExtras.None)
     {
         ArgumentNullException.ThrowIfNull(application);
-        PlanChoice optimum = PlanChoosing.Choose(application, progress, cancellation);
+        PlanChoice optimum = ConfidentChoice.Of(application, asked => PlanChoosing.Choose(asked, progress, cancellation));
         PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
         BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
-        bool fits = bands.Margin >= 1 && choice.HoldsEverywhere, asked = extras.HasFlag(DraftExtras.Diagnosis);
+        bool fits = bands.Margin >= 1 && choice.HoldsEverywhere;
+        bool isDiagnosed = optimum.Proven && (extras.HasFlag(DraftExtras.Diagnosis) || (!fits && extras.HasFlag(DraftExtras.DiagnosisOfNo)));
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         return new Specification
         {
@@ -35,12 +39,13 @@ public static class SpecificationDraft
             Choice = choice,
             Optimum = optimum,
             Bands = bands,
+            Bound = MarginBound.Of(application, choice.Plan, bands, application.Requirement.Capability.Confidence ?? UsualConfidence),
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),
             Allocation = allocation,
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
-            Diagnosis = asked || (!fits && optimum.Proven) ? Diagnosis.Of(application, bands, optimum) : null,
+            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum) : null,
             Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
     }
@@ -53,9 +58,12 @@ public enum DraftExtras
     /// <summary>Nothing more.</summary>
     None = 0,
 
-    /// <summary>Why the answer is what it is, and what single change would make a requirement feasible.</summary>
+    /// <summary>Why the answer is what it is.</summary>
     Diagnosis = 1,
 
+    /// <summary>The same when the answer is no, with the single changes that would make the requirement feasible.</summary>
+    DiagnosisOfNo = 2,
+
     /// <summary>What a small change of each input does to the margin.</summary>
-    Gains = 2,
+    Gains = 4,
 }

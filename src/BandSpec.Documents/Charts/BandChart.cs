@@ -6,7 +6,8 @@ using OxyPlot.Series;
 namespace BandSpec.Documents.Charts;
 
 /// <summary>The words on a band chart.</summary>
-internal sealed record BandWords(string Across, string Error, string Dwell, string Allowed, string Design, string Maximum, string Typical, string Plan, string Worst);
+internal sealed record BandWords(
+    string Across, string Error, string Dwell, string Allowed, string Design, string Maximum, string Typical, string Plan, string Worst);
 
 /// <summary>
 /// The promise in one picture: allowed, maximum and typical error over temperature as bands about zero, the compensation temperatures
@@ -20,7 +21,7 @@ internal sealed record BandChart(
     IReadOnlyList<Spot> Maximum,
     IReadOnlyList<Spot> Typical,
     IReadOnlyList<double> PlanTemperatures,
-    Spot? Worst,
+    Spot Worst,
     IReadOnlyList<DwellBin> Dwell) : Chart
 {
     private const string Error = "error", Time = "time";
@@ -33,8 +34,8 @@ internal sealed record BandChart(
         .. Design.Count == 0 ? Array.Empty<KeyEntry>() : [KeyEntry.Line(Words.Design, ChartStyle.Design)],
         KeyEntry.Area(Words.Maximum, ChartStyle.BlueWash, ChartStyle.Maximum),
         KeyEntry.Line(Words.Typical, ChartStyle.Typical),
-        .. PlanTemperatures.Count == 0 ? Array.Empty<KeyEntry>() : [KeyEntry.Mark(Words.Plan, MarkerType.Triangle, ChartStyle.Ink, ChartStyle.PlanLine)],
-        .. Worst is null ? Array.Empty<KeyEntry>() : [KeyEntry.Mark(Words.Worst, MarkerType.Diamond, ChartStyle.Ink)],
+        KeyEntry.Mark(Words.Plan, MarkerType.Triangle, ChartStyle.Ink, ChartStyle.PlanLine),
+        KeyEntry.Mark(Words.Worst, MarkerType.Diamond, ChartStyle.Ink),
     ];
 
     protected override PlotModel Plot()
@@ -48,7 +49,7 @@ internal sealed record BandChart(
         Bands.Add(plot, Error, Allowed, Design, Maximum, Typical);
         foreach (var temperature in PlanTemperatures) plot.Annotations.Add(PlanLine(temperature));
         plot.Series.Add(Points(MarkerType.Triangle, PlanTemperatures.Select(t => new DataPoint(t, -reach * 0.955))));
-        if (Worst is { } worst) plot.Series.Add(Points(MarkerType.Diamond, [worst.Data, worst.Mirrored]));
+        plot.Series.Add(Points(MarkerType.Diamond, [Worst.Data, Worst.Mirrored]));
         return plot;
     }
 
@@ -77,12 +78,19 @@ internal sealed record BandChart(
         Color = ChartStyle.PlanLine.Ink,
         StrokeThickness = ChartStyle.PlanLine.Width,
         LineStyle = LineStyle.Dot,
-        Layer = AnnotationLayer.BelowSeries,
     };
 
     private static ScatterSeries Points(MarkerType marker, IEnumerable<DataPoint> points)
     {
-        var series = new ScatterSeries { YAxisKey = Error, MarkerType = marker, MarkerSize = 3.2, MarkerFill = ChartStyle.Ink, MarkerStroke = ChartStyle.White, MarkerStrokeThickness = 0.6 };
+        var series = new ScatterSeries
+        {
+            YAxisKey = Error,
+            MarkerType = marker,
+            MarkerSize = 3.2,
+            MarkerFill = ChartStyle.Ink,
+            MarkerStroke = ChartStyle.White,
+            MarkerStrokeThickness = 0.6,
+        };
         series.Points.AddRange(points.Select(p => new ScatterPoint(p.X, p.Y)));
         return series;
     }

@@ -7,7 +7,8 @@ namespace BandSpec.Documents.Charts;
 internal static class Bands
 {
     public static void Add(
-        PlotModel plot, string upright, IReadOnlyList<Spot> allowed, IReadOnlyList<Spot> design, IReadOnlyList<Spot> maximum, IReadOnlyList<Spot> typical,
+        PlotModel plot, string upright, IReadOnlyList<Spot> allowed, IReadOnlyList<Spot> design, IReadOnlyList<Spot> maximum,
+        IReadOnlyList<Spot> typical,
         MarkerType marker = MarkerType.None)
     {
         plot.Series.Add(Area(upright, maximum));

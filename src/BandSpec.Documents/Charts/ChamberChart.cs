@@ -7,7 +7,10 @@ namespace BandSpec.Documents.Charts;
 /// <summary>The words on a chamber chart.</summary>
 internal sealed record ChamberWords(string Across, string Up, string Ramp, string Soak, string Measure);
 
-/// <summary>A stay of the chamber at one temperature in °C: soaking from the first to the second time, measuring until the third; minutes from the start.</summary>
+/// <summary>
+/// A stay of the chamber at one temperature in °C: soaking from the first to the second time, measuring until the third; minutes from the
+/// start.
+/// </summary>
 internal sealed record ChamberStay(double Temperature, double Arrival, double Settled, double Left, string Label);
 
 /// <summary>Chamber temperature over time, with soaking and measuring told apart. Times in minutes, temperatures in °C.</summary>
@@ -38,7 +41,7 @@ internal sealed record ChamberChart(ChamberWords Words, double Ambient, IReadOnl
         var upright = ChartStyle.Axis(AxisPosition.Left, coldest - pad, hottest + pad);
         upright.Key = Upright;
         plot.Axes.Add(upright);
-        plot.Series.Add(Line(Ramp, [new(0, Ambient), .. Stays.SelectMany(s => new[] { new DataPoint(s.Arrival, s.Temperature), new DataPoint(s.Left, s.Temperature) }), new(End, Ambient)]));
+        plot.Series.Add(Line(Ramp, [new(0, Ambient), .. Stays.SelectMany(Ends), new(End, Ambient)]));
         foreach (var stay in Stays)
         {
             plot.Series.Add(Line(Soak, [new(stay.Arrival, stay.Temperature), new(stay.Settled, stay.Temperature)]));
@@ -54,15 +57,24 @@ internal sealed record ChamberChart(ChamberWords Words, double Ambient, IReadOnl
         TitleBelow(pen, plot, Words.Across);
         Axis across = plot.DefaultXAxis, up = plot.GetAxis(Upright);
         foreach (var stay in Stays)
-            Note(pen, new(across.Transform((stay.Arrival + stay.Left) / 2), up.Transform(stay.Temperature) - 6), stay.Label, HorizontalAlignment.Center, VerticalAlignment.Bottom, ChartStyle.Ink);
+            Note(
+                pen, new(across.Transform((stay.Arrival + stay.Left) / 2), up.Transform(stay.Temperature) - 6), stay.Label,
+                HorizontalAlignment.Center, VerticalAlignment.Bottom, ChartStyle.Ink);
     }
 
     // Whole or half hours, so that the axis is read off like a clock.
-    private static double Step(double minutes) => new[] { 15.0, 30, 60, 120, 240, 480, 720, 1440 }.FirstOrDefault(step => minutes / step <= 9, 2880);
+    private static double Step(double minutes) =>
+        new[] { 15.0, 30, 60, 120, 240, 480, 720, 1440 }.FirstOrDefault(step => minutes / step <= 9, 2880);
+
+    private static DataPoint[] Ends(ChamberStay stay) => [new(stay.Arrival, stay.Temperature), new(stay.Left, stay.Temperature)];
 
     private ScatterSeries Marks()
     {
-        var marks = new ScatterSeries { MarkerType = MarkerType.Diamond, MarkerSize = 3.4, MarkerFill = ChartStyle.Ink, MarkerStroke = ChartStyle.White, MarkerStrokeThickness = 0.6, YAxisKey = Upright };
+        var marks = new ScatterSeries
+        {
+            MarkerType = MarkerType.Diamond, MarkerSize = 3.4, MarkerFill = ChartStyle.Ink, MarkerStroke = ChartStyle.White,
+            MarkerStrokeThickness = 0.6, YAxisKey = Upright
+        };
         marks.Points.AddRange(Stays.Select(s => new ScatterPoint((s.Settled + s.Left) / 2, s.Temperature)));
         return marks;
     }

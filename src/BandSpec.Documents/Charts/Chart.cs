@@ -44,12 +44,17 @@ internal abstract record Chart
 
     /// <summary>The title of an upright axis, level, over its upper end.</summary>
     protected static void TitleAbove(ChartPen pen, PlotModel plot, Axis axis, string title) =>
-        Note(pen, new(plot.PlotBounds.Left, Math.Min(axis.ScreenMin.Y, axis.ScreenMax.Y) - 6), title, HorizontalAlignment.Left, VerticalAlignment.Bottom, ChartStyle.Soft);
+        Note(
+            pen, new(plot.PlotBounds.Left, Math.Min(axis.ScreenMin.Y, axis.ScreenMax.Y) - 8), title, HorizontalAlignment.Left,
+            VerticalAlignment.Bottom, ChartStyle.Soft);
 
     /// <summary>The title of a level axis, below its figures, at its right end.</summary>
     protected static void TitleBelow(ChartPen pen, PlotModel plot, string title) =>
-        Note(pen, new(plot.PlotArea.Right, plot.PlotBounds.Bottom - 1), title, HorizontalAlignment.Right, VerticalAlignment.Bottom, ChartStyle.Soft);
+        Note(
+            pen, new(plot.PlotArea.Right, plot.PlotBounds.Bottom - 1), title, HorizontalAlignment.Right, VerticalAlignment.Bottom,
+            ChartStyle.Soft);
 
-    protected static void Note(ChartPen pen, ScreenPoint at, string text, HorizontalAlignment across, VerticalAlignment up, OxyColor ink, bool strong = false) =>
+    protected static void Note(
+        ChartPen pen, ScreenPoint at, string text, HorizontalAlignment across, VerticalAlignment up, OxyColor ink, bool strong = false) =>
         pen.DrawText(at, text, ink, null, ChartStyle.LabelSize, strong ? 600 : 400, 0, across, up, null);
 }

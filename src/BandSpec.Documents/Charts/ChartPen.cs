@@ -28,13 +28,16 @@ internal abstract class ChartPen : RenderContextBase
 
     public static Face FaceOf(double weight) => weight >= 600 ? Face.SemiBold : Face.Regular;
 
-    public sealed override void DrawLine(IList<ScreenPoint> points, OxyColor stroke, double thickness, EdgeRenderingMode mode, double[]? dashes, LineJoin join)
+    public sealed override void DrawLine(
+        IList<ScreenPoint> points, OxyColor stroke, double thickness, EdgeRenderingMode mode, double[]? dashes, LineJoin join)
     {
         if (points.Count > 1 && thickness > 0 && stroke.IsVisible())
             Stroke([.. points], new Stroke(stroke, thickness, Scaled(dashes, thickness)));
     }
 
-    public sealed override void DrawPolygon(IList<ScreenPoint> points, OxyColor fill, OxyColor stroke, double thickness, EdgeRenderingMode mode, double[]? dashes, LineJoin join)
+    public sealed override void DrawPolygon(
+        IList<ScreenPoint> points, OxyColor fill, OxyColor stroke, double thickness, EdgeRenderingMode mode, double[]? dashes,
+        LineJoin join)
     {
         Stroke? edge = stroke.IsVisible() && thickness > 0 ? new Stroke(stroke, thickness, Scaled(dashes, thickness)) : null;
         if (fill.IsVisible()) Fill([.. points], fill, edge);
@@ -51,7 +54,10 @@ internal abstract class ChartPen : RenderContextBase
         var width = Typeface.Of(face).Width(text, fontSize);
         var capitals = Typeface.Of(face).CapHeight * fontSize;
         var x = p.X - halign switch { HorizontalAlignment.Center => width / 2, HorizontalAlignment.Right => width, _ => 0 };
-        var y = p.Y + valign switch { VerticalAlignment.Top => capitals + 0.1 * fontSize, VerticalAlignment.Middle => capitals / 2, _ => -0.1 * fontSize };
+        var y = p.Y + valign switch
+        {
+            VerticalAlignment.Top => capitals + 0.1 * fontSize, VerticalAlignment.Middle => capitals / 2, _ => -0.1 * fontSize
+        };
         Write(new ScreenPoint(x, y), text, face, fontSize, fill);
     }
 

@@ -3,10 +3,10 @@ using OxyPlot;
 
 namespace BandSpec.Documents.Charts;
 
-/// <summary>An entry of the key over a chart: a swatch 22 points wide, drawn about the middle of its left edge, and its name.</summary>
+/// <summary>An entry of the key over a chart: a swatch 20 points wide, drawn about the middle of its left edge, and its name.</summary>
 internal sealed record KeyEntry(string Name, Action<ChartPen, ScreenPoint> Swatch)
 {
-    public const double SwatchWidth = 22;
+    public const double SwatchWidth = 20;
 
     public static KeyEntry Line(string name, Stroke stroke, MarkerType marker = MarkerType.None) => new(name, (pen, at) =>
     {
@@ -37,9 +37,10 @@ internal sealed record KeyEntry(string Name, Action<ChartPen, ScreenPoint> Swatc
 /// <summary>The key over a chart, in as many lines as it needs.</summary>
 internal static class Key
 {
-    private const double LineHeight = 12, Gap = 14, TextGap = 5;
+    private const double LineHeight = 12, Gap = 11, TextGap = 4;
 
-    public static double Height(IReadOnlyList<KeyEntry> entries, double width) => entries.Count == 0 ? 0 : LineHeight * Lines(entries, width).Count + 2;
+    public static double Height(IReadOnlyList<KeyEntry> entries, double width) =>
+        entries.Count == 0 ? 0 : LineHeight * Lines(entries, width).Count + 2;
 
     public static void Draw(ChartPen pen, IReadOnlyList<KeyEntry> entries, OxyRect area)
     {
@@ -50,14 +51,17 @@ internal static class Key
             foreach (var entry in line)
             {
                 entry.Swatch(pen, new(x, y));
-                pen.DrawText(new(x + KeyEntry.SwatchWidth + TextGap, y), entry.Name, ChartStyle.Ink, null, ChartStyle.FontSize, 400, 0, HorizontalAlignment.Left, VerticalAlignment.Middle, null);
+                pen.DrawText(
+                    new(x + KeyEntry.SwatchWidth + TextGap, y), entry.Name, ChartStyle.Ink, null, ChartStyle.FontSize, 400, 0,
+                    HorizontalAlignment.Left, VerticalAlignment.Middle, null);
                 x += Width(entry) + Gap;
             }
             y += LineHeight;
         }
     }
 
-    private static double Width(KeyEntry entry) => KeyEntry.SwatchWidth + TextGap + Typeface.Of(Face.Regular).Width(entry.Name, ChartStyle.FontSize);
+    private static double Width(KeyEntry entry) =>
+        KeyEntry.SwatchWidth + TextGap + Typeface.Of(Face.Regular).Width(entry.Name, ChartStyle.FontSize);
 
     private static List<List<KeyEntry>> Lines(IReadOnlyList<KeyEntry> entries, double width)
     {

@@ -7,7 +7,9 @@ namespace BandSpec.Documents.Charts;
 internal sealed record PressureWords(string Across, string Error, string Allowed, string Design, string Maximum, string Typical);
 
 /// <summary>Allowed, maximum and typical error over pressure at one temperature. Pressures in the customer's unit, errors in %FS.</summary>
-internal sealed record PressureChart(PressureWords Words, IReadOnlyList<Spot> Allowed, IReadOnlyList<Spot> Design, IReadOnlyList<Spot> Maximum, IReadOnlyList<Spot> Typical) : Chart
+internal sealed record PressureChart(
+    PressureWords Words, IReadOnlyList<Spot> Allowed, IReadOnlyList<Spot> Design, IReadOnlyList<Spot> Maximum,
+    IReadOnlyList<Spot> Typical) : Chart
 {
     private const string Error = "error";
 

@@ -23,7 +23,9 @@ internal sealed record ShareChart(string Across, IReadOnlyList<string> Parts, IR
     public override double Height => Pitch * Bars.Count + 34 + Key.Height(KeyEntries, Width);
 
     protected override IReadOnlyList<KeyEntry> KeyEntries =>
-        [.. Parts.Select((name, i) => new KeyEntry(name, (pen, at) => TileOf(i).Fill(pen, new OxyRect(at.X, at.Y - 3.6, KeyEntry.SwatchWidth, 7.2))))];
+        [.. Parts.Select((name, i) => new KeyEntry(name, (pen, at) => TileOf(i).Fill(pen, Swatch(at))))];
+
+    private static OxyRect Swatch(ScreenPoint at) => new(at.X, at.Y - 3.6, KeyEntry.SwatchWidth, 7.2);
 
     protected override PlotModel Plot()
     {
@@ -36,7 +38,7 @@ internal sealed record ShareChart(string Across, IReadOnlyList<string> Parts, IR
         (upright.MajorGridlineStyle, upright.TickStyle, upright.LabelFormatter) = (LineStyle.None, TickStyle.None, _ => "");
         plot.Axes.Add(upright);
         for (int row = 0; row < Bars.Count; row++) AddBar(plot, row);
-        plot.Annotations.Add(new LineAnnotation { Type = LineAnnotationType.Vertical, X = 100, YAxisKey = Upright, Color = ChartStyle.Ink, StrokeThickness = 1.2, LineStyle = LineStyle.Solid });
+        plot.Annotations.Add(Whole());
         return plot;
     }
 
@@ -44,9 +46,22 @@ internal sealed record ShareChart(string Across, IReadOnlyList<string> Parts, IR
     {
         var upright = plot.GetAxis(Upright);
         for (int row = 0; row < Bars.Count; row++)
-            Note(pen, new(plot.PlotArea.Left - 5, upright.Transform(row)), Bars[row].Region, HorizontalAlignment.Right, VerticalAlignment.Middle, ChartStyle.Ink);
+            Note(
+                pen, new(plot.PlotArea.Left - 5, upright.Transform(row)), Bars[row].Region, HorizontalAlignment.Right,
+                VerticalAlignment.Middle, ChartStyle.Ink);
         TitleBelow(pen, plot, Across);
     }
+
+    // The line at the whole of the allowed error, which no bar should cross.
+    private static LineAnnotation Whole() => new()
+    {
+        Type = LineAnnotationType.Vertical,
+        X = 100,
+        YAxisKey = Upright,
+        Color = ChartStyle.Ink,
+        StrokeThickness = 1.2,
+        LineStyle = LineStyle.Solid,
+    };
 
     private Tile TileOf(int part) => part == Parts.Count - 1 ? Tile.Unused : part == Parts.Count - 2 ? Tile.Safety : Tile.Of(part);
 

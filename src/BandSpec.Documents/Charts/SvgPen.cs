@@ -20,7 +20,8 @@ internal sealed class SvgPen : ChartPen
         var pen = new SvgPen();
         chart.Draw(pen, new OxyRect(0, 0, chart.Width, chart.Height));
         return string.Create(CultureInfo.InvariantCulture, $"""
-            <svg xmlns="http://www.w3.org/2000/svg" width="{F(chart.Width)}pt" height="{F(chart.Height)}pt" viewBox="0 0 {F(chart.Width)} {F(chart.Height)}" role="img" aria-labelledby="title desc" font-family="{Families}">
+            <svg xmlns="http://www.w3.org/2000/svg" width="{F(chart.Width)}pt" height="{F(chart.Height)}pt" viewBox="0 0 {F(chart.Width)} {F(chart.Height)}"
+             role="img" aria-labelledby="title desc" font-family="{Families}">
             <title id="title">{Safe(title)}</title>
             <desc id="desc">{Safe(description)}</desc>
             <rect width="100%" height="100%" fill="#ffffff"/>
@@ -36,12 +37,13 @@ internal sealed class SvgPen : ChartPen
         Element($"<polygon points=\"{Points(outline)}\" fill=\"{Colour(fill)}\"{(edge is null ? "" : Edge(edge))}/>");
 
     public override void Write(ScreenPoint at, string text, Face face, double size, OxyColor ink) =>
-        Element($"<text x=\"{F(at.X)}\" y=\"{F(at.Y)}\" font-size=\"{F(size)}\"{(face == Face.SemiBold ? " font-weight=\"600\"" : "")} fill=\"{Colour(ink)}\">{Safe(text)}</text>");
+        Element($"<text x=\"{F(at.X)}\" y=\"{F(at.Y)}\" font-size=\"{F(size)}\"{Weight(face)} fill=\"{Colour(ink)}\">{Safe(text)}</text>");
 
     protected override void BeginClip(OxyRect area)
     {
         var id = "c" + (++_clips).ToString(CultureInfo.InvariantCulture);
-        Element($"<clipPath id=\"{id}\"><rect x=\"{F(area.Left)}\" y=\"{F(area.Top)}\" width=\"{F(area.Width)}\" height=\"{F(area.Height)}\"/></clipPath>");
+        var place = $"x=\"{F(area.Left)}\" y=\"{F(area.Top)}\" width=\"{F(area.Width)}\" height=\"{F(area.Height)}\"";
+        Element($"<clipPath id=\"{id}\"><rect {place}/></clipPath>");
         Element($"<g clip-path=\"url(#{id})\">");
     }
 
@@ -53,11 +55,14 @@ internal sealed class SvgPen : ChartPen
         $" stroke=\"{Colour(stroke.Ink)}\" stroke-width=\"{F(stroke.Width)}\" stroke-linejoin=\"round\""
         + (stroke.Dashes is { } dashes ? $" stroke-dasharray=\"{string.Join(' ', dashes.Select(F))}\"" : "");
 
+    private static string Weight(Face face) => face == Face.SemiBold ? " font-weight=\"600\"" : "";
+
     private static string Points(IReadOnlyList<ScreenPoint> points) => string.Join(' ', points.Select(p => $"{F(p.X)},{F(p.Y)}"));
 
     private static string Colour(OxyColor c) => $"#{c.R:x2}{c.G:x2}{c.B:x2}";
 
-    private static string F(double value) => Math.Round(value, 2).ToString("0.##", CultureInfo.InvariantCulture) is var text && text == "-0" ? "0" : text;
+    private static string F(double value) =>
+        Math.Round(value, 2).ToString("0.##", CultureInfo.InvariantCulture) is var text && text == "-0" ? "0" : text;
 
     private static string Safe(string text) => SecurityElement.Escape(text);
 }

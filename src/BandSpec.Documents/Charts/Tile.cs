@@ -11,12 +11,15 @@ internal sealed record Tile(OxyColor Ground, OxyColor Hatch, int Slope)
     private const double Spacing = 3.2;
 
     /// <summary>What the safety factor keeps free, and what nothing needs: lighter than any term.</summary>
-    public static readonly Tile Safety = new(OxyColor.FromRgb(0xee, 0xf0, 0xf2), ChartStyle.Frame, 1), Unused = new(ChartStyle.White, ChartStyle.White, 0);
+    public static readonly Tile Safety = new(
+        OxyColor.FromRgb(0xee, 0xf0, 0xf2), ChartStyle.Frame, 1), Unused = new(ChartStyle.White, ChartStyle.White, 0);
 
     private static readonly OxyColor[] Grounds =
     [
-        OxyColor.FromRgb(0x1b, 0x3d, 0x66), OxyColor.FromRgb(0xbf, 0xd3, 0xe8), OxyColor.FromRgb(0x4f, 0x81, 0xb4), OxyColor.FromRgb(0xf3, 0xdf, 0xc4),
-        OxyColor.FromRgb(0x8a, 0x4a, 0x0c), OxyColor.FromRgb(0xd9, 0xdd, 0xe1), OxyColor.FromRgb(0x6c, 0x77, 0x82), OxyColor.FromRgb(0xe4, 0xb9, 0x72),
+        OxyColor.FromRgb(0x1b, 0x3d, 0x66), OxyColor.FromRgb(0xbf, 0xd3, 0xe8), OxyColor.FromRgb(0x4f, 0x81, 0xb4),
+        OxyColor.FromRgb(0xf3, 0xdf, 0xc4),
+        OxyColor.FromRgb(0x8a, 0x4a, 0x0c), OxyColor.FromRgb(0xd9, 0xdd, 0xe1), OxyColor.FromRgb(0x6c, 0x77, 0x82),
+        OxyColor.FromRgb(0xe4, 0xb9, 0x72),
     ];
 
     // 1 and -1 lean to either side, 0 is plain.
@@ -32,7 +35,9 @@ internal sealed record Tile(OxyColor Ground, OxyColor Hatch, int Slope)
 
     public void Fill(ChartPen pen, OxyRect area)
     {
-        pen.Fill([new(area.Left, area.Top), new(area.Right, area.Top), new(area.Right, area.Bottom), new(area.Left, area.Bottom)], Ground, this == Unused ? new Stroke(ChartStyle.Frame, 0.5) : new Stroke(ChartStyle.White, 0.6));
+        pen.Fill(
+            [new(area.Left, area.Top), new(area.Right, area.Top), new(area.Right, area.Bottom), new(area.Left, area.Bottom)], Ground,
+            this == Unused ? new Stroke(ChartStyle.Frame, 0.5) : new Stroke(ChartStyle.White, 0.6));
         if (Slope == 0 || area.Width < 1) return;
         for (var x = area.Left - area.Height + Spacing / 2; x < area.Right; x += Spacing) Lean(pen, area, x);
     }

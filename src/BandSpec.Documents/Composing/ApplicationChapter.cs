@@ -12,7 +12,8 @@ internal static class ApplicationChapter
         yield return c.Chapter(number, "application.heading");
         yield return c.Table(c.Words["application.revisions"], [c.Column("revision"), c.Column("date"), c.Column("change")],
             c.View.Identity.Changes.Select(change => new Row([change.Revision, change.Date, change.Text])));
-        yield return c.Table(c.Words["application.approval"], [c.Column("role"), c.Column("name"), c.Column("date"), c.Column("signature")], Approvals(c));
+        yield return c.Table(
+            c.Words["application.approval"], [c.Column("role"), c.Column("name"), c.Column("date"), c.Column("signature")], Approvals(c));
         yield return c.Section("application.conditions");
         yield return new Facts(
         [
@@ -21,7 +22,10 @@ internal static class ApplicationChapter
         ]);
         var profile = c.View.Profile;
         yield return c.Table(c.Words["application.profile"],
-            [c.Column("from", Align.Decimal, Celsius), c.Column("to", Align.Decimal, Celsius), c.Column("dwell", Align.Decimal, "h"), c.Column("share", Align.Decimal, "%")],
+            [
+                c.Column("from", Align.Decimal, Celsius), c.Column("to", Align.Decimal, Celsius),
+                c.Column("dwell", Align.Decimal, "h"), c.Column("share", Align.Decimal, "%"),
+            ],
             profile.Bins.Select(b => new Row([b.From, b.To, b.Dwell, b.Share])), c.Words["application.profile-remark"]);
         yield return c.Figure("application.profile-figure", c.Charts.Profile, "dwell-profile.svg", ("bins", profile.Bins.Count));
     }

@@ -16,9 +16,11 @@ internal static class BudgetChapter
         yield return c.Table(c.Words["budget.table"],
             [
                 c.Column("term"), c.Column("region"), c.Column("mean", Align.Decimal, Percent), c.Column("sample", Align.Decimal, Percent),
-                c.Column("long-run", Align.Decimal, Percent), c.Column("limit", Align.Decimal, "±" + Percent), c.Column("capability", Align.Decimal), c.Column("outside", Align.Decimal, "ppm"),
+                c.Column("long-run", Align.Decimal, Percent), c.Column("limit", Align.Decimal, "±" + Percent),
+                c.Column("capability", Align.Decimal), c.Column("outside", Align.Decimal, "ppm"),
             ],
-            TermGroups.All.SelectMany(group => Group(c, group)), c.Words.Say("budget.table-remark", ("held", c.View.Terms.Any(t => t.Held))));
+            TermGroups.All.SelectMany(group => Group(c, group)), c.Words.Say(
+                "budget.table-remark", ("held", c.View.Terms.Any(t => t.Held))));
     }
 
     private static IEnumerable<Row> Group(Composition c, string group)
@@ -35,7 +37,8 @@ internal static class BudgetChapter
     private static Row Row(Composition c, TermView t)
     {
         var name = t.Name.Length > 0 ? (Phrase)t.Name : c.Words["term." + t.Key];
-        return new([t.Held ? name + "\u00a0*" : name, Region(c, t.Region), t.Added, t.SigmaSample, t.SigmaLongRun, t.Limit, t.Capability, t.Outside]);
+        if (t.Held) name += "\u00a0*";
+        return new([name, Region(c, t.Region), t.Added, t.SigmaSample, t.SigmaLongRun, t.Limit, t.Capability, t.Outside]);
     }
 
     private static Phrase Region(Composition c, RegionView? region) => region is null ? c.Words["all-regions"] : c.Region(region);

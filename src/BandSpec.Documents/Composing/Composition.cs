@@ -4,7 +4,9 @@ using BandSpec.Documents.Templates;
 
 namespace BandSpec.Documents.Composing;
 
-/// <summary>What every chapter needs: the rounded figures, the words about them, the charts, and the numbering of tables and figures.</summary>
+/// <summary>
+/// What every chapter needs: the rounded figures, the words about them, the charts, and the numbering of tables and figures.
+/// </summary>
 internal sealed class Composition(PrintView view, Words words, SpecificationCharts charts)
 {
     private int _tables, _figures;

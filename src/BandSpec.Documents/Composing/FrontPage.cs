@@ -14,10 +14,13 @@ internal static class FrontPage
             c.Fact("customer", identity.Customer), c.Fact("prepared-by", identity.PreparedBy), c.Fact("platform"),
         ]);
         yield return new Paragraph(c.Words["front.promise"], Voice.Lead);
-        yield return new Headline([Key(c, "allowed"), Key(c, "range"), new KeyFigure(c.Words["front.margin"], c.View.Verdict.Margin, c.Words["front.margin-remark"]), Key(c, "verdict")]);
+        var margin = new KeyFigure(c.Words["front.margin"], c.View.Verdict.Margin, c.Words["front.margin-remark"]);
+        yield return new Headline([Key(c, "allowed"), Key(c, "range"), margin, Key(c, "verdict")]);
         yield return c.Figure("front.figure", c.Charts.Band, "band-over-temperature.svg");
-        yield return new Callout(c.View.Verdict.Feasible ? Tone.Assurance : Tone.Refusal, c.Words["front.answer-title"], c.Words.Paragraphs("front.answer"));
+        yield return new Callout(
+            c.View.Verdict.Feasible ? Tone.Assurance : Tone.Refusal, c.Words["front.answer-title"], c.Words.Paragraphs("front.answer"));
     }
 
-    private static KeyFigure Key(Composition c, string key) => new(c.Words["front." + key], c.Words[$"front.{key}-value"], c.Words[$"front.{key}-remark"]);
+    private static KeyFigure Key(Composition c, string key) =>
+        new(c.Words["front." + key], c.Words[$"front.{key}-value"], c.Words[$"front.{key}-remark"]);
 }

@@ -12,7 +12,10 @@ internal static class PlanChapter
         yield return new Paragraph(c.Words["plan.text"]);
         yield return new Facts([c.Fact("points"), c.Fact("degrees"), c.Fact("chamber"), c.Fact("station"), c.Fact("search")]);
         yield return c.Table(c.Words["plan.table"],
-            [c.Column("temperature", Align.Decimal, "°C"), c.Column("pressures", unit: c.View.Range.Unit), c.Column("readings", Align.Right)],
+            [
+                c.Column("temperature", Align.Decimal, "°C"), c.Column("pressures", unit: c.View.Range.Unit),
+                c.Column("readings", Align.Right),
+            ],
             c.View.Plan.Stays.Select(s => new Row([s.Temperature, s.Pressures, s.Count.ToString(CultureInfo.InvariantCulture)])));
         yield return c.Figure("plan.figure", c.Charts.Chamber, "chamber-run.svg");
     }

@@ -7,7 +7,9 @@ using BandSpec.Documents.Templates;
 
 namespace BandSpec.Documents.Composing;
 
-/// <summary>The charts of a specification, made once for page, SVG and Markdown. Curves are drawn from the figures before rounding.</summary>
+/// <summary>
+/// The charts of a specification, made once for page, SVG and Markdown. Curves are drawn from the figures before rounding.
+/// </summary>
 internal sealed class SpecificationCharts
 {
     private readonly Specification _specification;
@@ -32,10 +34,14 @@ internal sealed class SpecificationCharts
         {
             var worst = _specification.Bands.Worst;
             return new BandChart(
-                new(_words.Plain("axis.temperature"), _words.Plain("axis.error"), _words.Plain("axis.dwell"), _words.Plain("key.allowed"), _words.Plain("key.design"), _words.Plain("key.maximum"), _words.Plain("key.typical"), _words.Plain("key.plan"), _words.Plain("key.worst")),
-                OverTemperature(nodes => nodes.Min(n => n.Allowed.Percent)), HasDesign ? OverTemperature(nodes => nodes.Min(n => n.Design.Percent)) : [],
+                new(
+                    Word("axis.temperature"), Word("axis.error"), Word("axis.dwell"), Word("key.allowed"), Word("key.design"),
+                    Word("key.maximum"), Word("key.typical"), Word("key.plan"), Word("key.worst")),
+                OverTemperature(nodes => nodes.Min(n => n.Allowed.Percent)),
+                HasDesign ? OverTemperature(nodes => nodes.Min(n => n.Design.Percent)) : [],
                 OverTemperature(nodes => nodes.Max(n => n.Maximum.Percent)), OverTemperature(nodes => nodes.Max(n => n.Typical.Percent)),
-                [.. _specification.Choice.Plan.Temperatures.Select(t => t.Celsius)], new Spot(worst.Temperature.Celsius, worst.Maximum.Percent), Dwell) { DecimalSign = Sign };
+                [.. _specification.Choice.Plan.Temperatures.Select(t => t.Celsius)],
+                new Spot(worst.Temperature.Celsius, worst.Maximum.Percent), Dwell) { DecimalSign = Sign };
         }
     }
 
@@ -44,9 +50,12 @@ internal sealed class SpecificationCharts
         get
         {
             var worst = _specification.Bands.Worst;
-            var nodes = _specification.Bands.Nodes.Where(n => n.Region == worst.Region && n.Temperature == worst.Temperature).OrderBy(n => n.PressureFraction).ToList();
+            var nodes = _specification.Bands.Nodes
+                .Where(n => n.Region == worst.Region && n.Temperature == worst.Temperature).OrderBy(n => n.PressureFraction).ToList();
             return new PressureChart(
-                new(_words.Plain("axis.pressure"), _words.Plain("axis.error"), _words.Plain("key.allowed"), _words.Plain("key.design"), _words.Plain("key.maximum"), _words.Plain("key.typical")),
+                new(
+                    Word("axis.pressure"), Word("axis.error"), Word("key.allowed"), Word("key.design"), Word("key.maximum"),
+                    Word("key.typical")),
                 OverPressure(nodes, n => n.Allowed.Percent), HasDesign ? OverPressure(nodes, n => n.Design.Percent) : [],
                 OverPressure(nodes, n => n.Maximum.Percent), OverPressure(nodes, n => n.Typical.Percent)) { DecimalSign = Sign };
         }
@@ -62,16 +71,23 @@ internal sealed class SpecificationCharts
                 var shares = ErrorShares.Of(region.Worst, capability.Sample, capability.LongRun);
                 return new ShareBar(Composition.RegionName(_words, _view.Regions[i]), [.. shares.Terms, shares.Safety, shares.Unused]);
             });
-            var names = _specification.Bands.Worst.Terms.Select(t => TermGroups.Of(t.Term.Key) == TermGroups.Further ? t.Term.Key : _words.Plain("term." + t.Term.Key));
-            return new ShareChart(_words.Plain("axis.share"), [.. names, _words.Plain("budget.safety"), _words.Plain("budget.unused")], [.. bars]) { DecimalSign = Sign };
+            var names = _specification.Bands.Worst.Terms.Select(t => Name(t.Term.Key));
+            return new ShareChart(
+                Word("axis.share"), [.. names, _words.Plain("budget.safety"), _words.Plain("budget.unused")],
+                [.. bars]) { DecimalSign = Sign };
         }
     }
 
     public ChamberChart Chamber => new(
-        new(_words.Plain("axis.time"), _words.Plain("axis.chamber"), _words.Plain("key.ramp"), _words.Plain("key.soak"), _words.Plain("key.measure")),
-        _specification.Application.Station.Chamber.Ambient.Celsius, [.. Stays()], _specification.Choice.Run.Length.Minutes) { DecimalSign = Sign };
+        new(Word("axis.time"), Word("axis.chamber"), Word("key.ramp"), Word("key.soak"), Word("key.measure")),
+        _specification.Application.Station.Chamber.Ambient.Celsius, [.. Stays()],
+        _specification.Choice.Run.Length.Minutes) { DecimalSign = Sign };
 
-    public DwellChart Profile => new(_words.Plain("axis.temperature"), _words.Plain("axis.dwell"), Dwell) { DecimalSign = Sign };
+    public DwellChart Profile => new(Word("axis.temperature"), Word("axis.dwell"), Dwell) { DecimalSign = Sign };
+
+    private string Word(string key) => _words.Plain(key);
+
+    private string Name(string term) => TermGroups.Of(term) == TermGroups.Further ? term : _words.Plain("term." + term);
 
     // A region's edge appears once for each neighbour, so that a step in the allowance is drawn upright.
     private Spot[] OverTemperature(Func<IEnumerable<BandNode>, double> worst) =>
@@ -84,7 +100,9 @@ internal sealed class SpecificationCharts
     {
         var profile = _specification.Application.Requirement.Profile;
         var whole = profile.Sum(b => b.Dwell.Hours);
-        return [.. profile.Select((b, i) => new DwellBin(b.From.Celsius, b.To.Celsius, whole > 0 ? 100 * b.Dwell.Hours / whole : 0, _view.Profile.Bins[i].Dwell + "\u00a0h"))];
+        double Share(double hours) => whole > 0 ? 100 * hours / whole : 0;
+        return [.. profile.Select((b, i) =>
+            new DwellBin(b.From.Celsius, b.To.Celsius, Share(b.Dwell.Hours), _view.Profile.Bins[i].Dwell + "\u00a0h"))];
     }
 
     // A step that takes no time is not in the run: where soak or measuring is missing, it begins and ends with the other.
@@ -97,7 +115,8 @@ internal sealed class SpecificationCharts
             if (steps.Count == 0) continue;
             var settled = steps.FirstOrDefault(s => s.Action == ChamberAction.Read)?.Begin ?? steps[^1].End;
             var label = _words.Plain("plan.stay-label", ("stay", ViewForTemplates.Of(_view.Plan.Stays[i])));
-            yield return new ChamberStay(plan.Temperatures[i].Celsius, steps[0].Begin.Minutes, settled.Minutes, steps[^1].End.Minutes, label);
+            yield return new ChamberStay(
+                plan.Temperatures[i].Celsius, steps[0].Begin.Minutes, settled.Minutes, steps[^1].End.Minutes, label);
         }
     }
 }

@@ -30,6 +30,7 @@ internal static class SpecificationComposer
         };
         return new Frame(
             c.View.Identity.Title, c.View.Identity.PreparedBy, words.Plain("subject"), language, date,
-            words.Plain("running-left"), words.Plain("running-right"), words.Plain("footer"), words.Plain("page-of"), words.Plain("continued"), stamp);
+            words.Plain("running-left"), words.Plain("running-right"), words.Plain("footer"), words.Plain("page-of"),
+            words.Plain("continued"), stamp);
     }
 }

@@ -22,8 +22,10 @@ internal static class TestChapter
         var unit = c.View.Output.Unit;
         return c.Table(c.Words["test.table"],
             [
-                c.Column("point"), c.Column("temperature", Align.Decimal, "°C"), c.Column("pressure", Align.Decimal, c.View.Range.Unit), c.Column("direction"),
-                c.Column("lower", Align.Decimal, unit, "limits"), c.Column("nominal", Align.Decimal, unit, "limits"), c.Column("upper", Align.Decimal, unit, "limits"),
+                c.Column("point"), c.Column("temperature", Align.Decimal, "°C"), c.Column("pressure", Align.Decimal, c.View.Range.Unit),
+                c.Column("direction"),
+                c.Column("lower", Align.Decimal, unit, "limits"), c.Column("nominal", Align.Decimal, unit, "limits"),
+                c.Column("upper", Align.Decimal, unit, "limits"),
                 c.Column("tolerance", Align.Decimal, "±" + Percent), c.Column("guard-band", Align.Decimal, Percent),
                 c.Column("consumer", Align.Decimal, PerMillion, "risk"), c.Column("producer", Align.Decimal, PerMillion, "risk"),
             ],
@@ -32,7 +34,8 @@ internal static class TestChapter
 
     private static Row Row(Composition c, PointView p) => new(
     [
-        p.Id, c.Shown(p.Temperature), c.Shown(p.Pressure), c.Words["direction." + p.Direction], c.Shown(p.Lower), c.Shown(p.Nominal), c.Shown(p.Upper),
+        p.Id, c.Shown(p.Temperature), c.Shown(p.Pressure), c.Words["direction." + p.Direction], c.Shown(p.Lower), c.Shown(p.Nominal),
+        c.Shown(p.Upper),
         c.Shown(p.Tolerance), c.Shown(p.GuardBand), c.Shown(p.ConsumerRisk), c.Shown(p.ProducerRisk),
     ]);
 }

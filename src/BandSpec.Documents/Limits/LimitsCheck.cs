@@ -27,7 +27,8 @@ internal static class LimitsCheck
         if (file.EndsWith(".xml", StringComparison.Ordinal)) CheckXml(template, written);
     }
 
-    private static void Find(string template, string file, List<string> words, int start, int end, PointView point, string side, string figure)
+    private static void Find(
+        string template, string file, List<string> words, int start, int end, PointView point, string side, string figure)
     {
         if (words.IndexOf(figure, start, end - start) < 0) throw Fault(template, file, point, $"lacks its {side} limit {figure}");
     }

@@ -30,18 +30,23 @@ internal static class LimitsLayouts
     private static Func<string, string>? EscapeFor(string file) => Path.GetExtension(file) switch
     {
         ".xml" => SecurityElement.Escape,
-        ".csv" => value => value.AsSpan().IndexOfAny(",;\"\n") >= 0 ? $"\"{value.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : value,
+        ".csv" => Quoted,
         _ => null,
     };
+
+    private static string Quoted(string value) =>
+        value.AsSpan().IndexOfAny(",;\"\n") < 0 ? value : $"\"{value.Replace("\"", "\"\"", StringComparison.Ordinal)}\"";
 
     // The fields of limits.json, with underscores in their names.
     private static ScriptObject View(PrintView view) => ViewForTemplates.Script(
         ("format", "bandspec/limits/1"),
-        ("specification", ViewForTemplates.Script(("number", view.Identity.Number), ("revision", view.Identity.Revision), ("title", view.Identity.Title), ("customer", view.Identity.Customer), ("date", view.Identity.Date))),
+        ("specification", ViewForTemplates.Of(view.Identity)),
         ("feasible", view.Verdict.Feasible), ("standing", view.Standing),
-        ("guard_band", Plain(view.Test.GuardBand, view)), ("sample_criterion", Plain(view.Test.Sample, view)), ("long_run_criterion", Plain(view.Test.LongRun, view)),
+        ("decision_rule", ViewForTemplates.Script(("guard_band", Plain(view.Test.GuardBand, view)))),
+        ("sample_criterion", Plain(view.Test.Sample, view)),
+        ("long_run_criterion", Plain(view.Test.LongRun, view)),
         ("pressure_unit", view.Range.Unit), ("output_unit", view.Output.Unit),
-        ("points", ViewForTemplates.List(view.Points.Select(ViewForTemplates.Of))));
+        ("points", ViewForTemplates.List(view.Points.Select(p => ViewForTemplates.Of(p, view.Range.Unit, view.Output.Unit)))));
 
     private static string Plain(string shown, PrintView view) => shown.Replace(view.DecimalSign, ".", StringComparison.Ordinal);
 }

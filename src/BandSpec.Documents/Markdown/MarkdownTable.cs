@@ -22,11 +22,14 @@ internal static class MarkdownTable
         ]);
 
     private static string Title(Column column) =>
-        (column.Group.Length == 0 ? "" : MarkdownText.Escape(column.Group) + ": ") + MarkdownText.OneLine(column.Title) + (column.Unit.Length == 0 ? "" : ", " + MarkdownText.Escape(column.Unit));
+        (column.Group.Length == 0 ? "" : MarkdownText.Escape(column.Group) + ": ")
+        + MarkdownText.OneLine(column.Title)
+        + (column.Unit.Length == 0 ? "" : ", " + MarkdownText.Escape(column.Unit));
 
     private static List<string> Cells(Row row, int count)
     {
-        if (row.Kind == RowKind.Section) return [MarkdownText.OneLine(row.Cells[0].In(Lettering.Bold)), .. Enumerable.Repeat("", count - 1)];
+        if (row.Kind == RowKind.Section) return [
+            MarkdownText.OneLine(row.Cells[0].In(Lettering.Bold)), .. Enumerable.Repeat("", count - 1)];
         return [.. row.Cells.Select(c => MarkdownText.OneLine(row.Kind == RowKind.Total ? c.In(Lettering.Bold) : c))];
     }
 
@@ -42,7 +45,8 @@ internal static class MarkdownTable
         return text.ToString().TrimEnd('\n');
     }
 
-    private static string Pad(string cell, int width, Align align) => align is Align.Right or Align.Decimal ? cell.PadLeft(width) : cell.PadRight(width);
+    private static string Pad(string cell, int width, Align align) =>
+        align is Align.Right or Align.Decimal ? cell.PadLeft(width) : cell.PadRight(width);
 
     private static string Rule(Align align, int width) => align switch
     {

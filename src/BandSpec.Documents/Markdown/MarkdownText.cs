@@ -4,8 +4,8 @@ using BandSpec.Documents.Model;
 namespace BandSpec.Documents.Markdown;
 
 /// <summary>
-/// Phrases in Markdown. Raised and lowered letters become <c>sup</c> and <c>sub</c>, and emphasis inside a word becomes a tag too: stars
-/// between letters mean different things to different readers.
+/// Phrases in Markdown. Raised and lowered letters become <c>sup</c> and <c>sub</c>, and emphasis whose stars a reader might not see as
+/// such becomes a tag too.
 /// </summary>
 internal static class MarkdownText
 {
@@ -20,33 +20,41 @@ internal static class MarkdownText
         var safe = new StringBuilder(text.Length);
         for (int i = 0; i < text.Length; i++)
         {
-            if (text[i] is '\\' or '`' or '*' or '_' or '[' or ']' or '<' or '>' or '|' or '~' or '#' && (text[i] != '#' || i == 0)) safe.Append('\\');
+            if (@"\`*_[]<>|~".Contains(text[i], StringComparison.Ordinal) || (text[i] == '#' && i == 0)) safe.Append('\\');
             safe.Append(text[i] == '&' ? "&amp;" : text[i].ToString());
         }
         return safe.ToString();
     }
 
-    private static string Runs(Phrase phrase) => string.Concat(phrase.Runs.Select(Run));
+    private static string Runs(Phrase phrase)
+    {
+        var runs = phrase.Runs.Where(r => r.Text.Length > 0).ToList();
+        char Before(int i) => i > 0 ? runs[i - 1].Text[^1] : ' ';
+        char After(int i) => i + 1 < runs.Count ? runs[i + 1].Text[0] : ' ';
+        return string.Concat(runs.Select((run, i) => Run(run, Before(i), After(i))));
+    }
 
-    private static string Run(Run run)
+    private static string Run(Run run, char before, char after)
     {
         var text = run.Lettering switch
         {
             Lettering.Code => Code(run.Text),
-            Lettering.Bold => Around(run.Text, "**", "b"),
-            Lettering.Italic => Around(run.Text, "*", "i"),
+            Lettering.Bold => Around(run.Text, "**", "b", before, after),
+            Lettering.Italic => Around(run.Text, "*", "i", before, after),
             _ => Escape(run.Text),
         };
         return run.Shift switch { Shift.Raised => $"<sup>{text}</sup>", Shift.Lowered => $"<sub>{text}</sub>", _ => text };
     }
 
     // Spaces at the ends stand outside the marks, where they are no part of the emphasis.
-    private static string Around(string text, string mark, string tag)
+    private static string Around(string text, string mark, string tag, char before, char after)
     {
         var core = text.Trim(' ', '\u00a0');
         if (core.Length == 0) return text;
-        var plain = char.IsLetterOrDigit(core[0]) && char.IsLetterOrDigit(core[^1]);
-        var (open, close) = plain ? (mark, mark) : ($"<{tag}>", $"</{tag}>");
+        // A star opens before a letter or after a space, and closes after a letter or before a space (CommonMark 0.31, 6.2).
+        var opens = char.IsLetterOrDigit(core[0]) || char.IsWhiteSpace(before);
+        var closes = char.IsLetterOrDigit(core[^1]) || char.IsWhiteSpace(after);
+        var (open, close) = opens && closes ? (mark, mark) : ($"<{tag}>", $"</{tag}>");
         var start = text.IndexOf(core, StringComparison.Ordinal);
         return text[..start] + open + Escape(core) + close + text[(start + core.Length)..];
     }

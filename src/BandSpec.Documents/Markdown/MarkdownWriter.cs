@@ -29,7 +29,7 @@ internal sealed class MarkdownWriter
             case TitleBlock title: Write(title); break;
             case Heading heading: Block(new string('#', heading.Level + 1) + " " + Numbered(heading)); break;
             case Paragraph paragraph: Block(MarkdownText.Of(paragraph.Text)); break;
-            case Bullets bullets: Block(Lines(bullets.Items.Select((item, i) => (bullets.Numbered ? $"{i + 1}. " : "- ") + MarkdownText.OneLine(item)))); break;
+            case Bullets bullets: Block(Lines(bullets.Items.Select((item, i) => Mark(bullets, i) + MarkdownText.OneLine(item)))); break;
             case Facts facts: Write(facts.Items); break;
             case Headline headline: Block(MarkdownTable.Of(headline)); break;
             case Callout callout: Block(Quote(callout)); break;
@@ -62,12 +62,17 @@ internal sealed class MarkdownWriter
         if (!table.Remark.IsEmpty) Block(MarkdownText.Of(table.Remark));
     }
 
-    private static string Label(string label, Phrase caption) => $"**{MarkdownText.Escape(label)}** {MarkdownText.OneLine(caption)}".TrimStart();
+    private static string Label(string label, Phrase caption) =>
+        $"**{MarkdownText.Escape(label)}** {MarkdownText.OneLine(caption)}".TrimStart();
 
-    private static string Numbered(Heading heading) => (MarkdownText.Escape(heading.Number) + " " + MarkdownText.OneLine(heading.Text)).TrimStart();
+    private static string Numbered(Heading heading) =>
+        (MarkdownText.Escape(heading.Number) + " " + MarkdownText.OneLine(heading.Text)).TrimStart();
 
     private static string Quote(Callout callout) =>
-        "> " + string.Join("\n>\n> ", callout.Paragraphs.Prepend(callout.Title.In(Lettering.Bold)).Where(p => !p.IsEmpty).Select(MarkdownText.OneLine));
+        "> " + string.Join(
+            "\n>\n> ", callout.Paragraphs.Prepend(callout.Title.In(Lettering.Bold)).Where(p => !p.IsEmpty).Select(MarkdownText.OneLine));
+
+    private static string Mark(Bullets bullets, int index) => bullets.Numbered ? $"{index + 1}. " : "- ";
 
     private static string Lines(IEnumerable<string> lines) => string.Join('\n', lines);
 

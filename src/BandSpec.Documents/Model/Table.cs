@@ -32,7 +32,8 @@ internal sealed record Table : Block
     public Table(string label, Phrase caption, IReadOnlyList<Column> columns, IReadOnlyList<Row> rows, Phrase? remark = null)
     {
         if (rows.FirstOrDefault(r => r.Kind != RowKind.Section && r.Cells.Count != columns.Count) is { } odd)
-            throw new ArgumentException($"A row of {odd.Cells.Count} cells in a table of {columns.Count} columns: {odd.Cells[0]}", nameof(rows));
+            throw new ArgumentException(
+                $"A row of {odd.Cells.Count} cells in a table of {columns.Count} columns: {odd.Cells[0]}", nameof(rows));
         (Label, Caption, Columns, Rows, Remark) = (label, caption, columns, rows, remark ?? Phrase.Empty);
     }
 

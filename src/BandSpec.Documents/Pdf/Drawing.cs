@@ -54,7 +54,8 @@ internal sealed class Drawing(IPaper paper)
             case RuleMark rule: paper.Polyline([(rule.X1, rule.Y1), (rule.X2, rule.Y2)], rule.Width, rule.Ink, null); break;
             case FillMark fill: paper.Polygon(Corners(fill.Area), fill.Ink); break;
             case BookmarkMark bookmark: paper.Bookmark(bookmark.Level, bookmark.Title, bookmark.Y); break;
-            case ChartMark chart: chart.Chart.Draw(new SheetPen(paper), new OxyRect(chart.Area.X, chart.Area.Y, chart.Area.Width, chart.Area.Height)); break;
+            case ChartMark chart: chart.Chart.Draw(
+                new SheetPen(paper), new OxyRect(chart.Area.X, chart.Area.Y, chart.Area.Width, chart.Area.Height)); break;
         }
     }
 

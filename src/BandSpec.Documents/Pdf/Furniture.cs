@@ -4,7 +4,9 @@ using BandSpec.Documents.Pdf.Layout;
 
 namespace BandSpec.Documents.Pdf;
 
-/// <summary>What stands on every page: the band with the document's standing, the running header, and the footer with the page number.</summary>
+/// <summary>
+/// What stands on every page: the band with the document's standing, the running header, and the footer with the page number.
+/// </summary>
 internal static class Furniture
 {
     private const double BandHeight = 17;
@@ -13,7 +15,8 @@ internal static class Furniture
     {
         var header = page.Top - 24;
         var footer = page.Bottom + 17;
-        var pageOf = frame.PageOf.Replace("{page}", number.ToString(System.Globalization.CultureInfo.InvariantCulture), StringComparison.Ordinal)
+        var pageOf = frame.PageOf.Replace(
+            "{page}", number.ToString(System.Globalization.CultureInfo.InvariantCulture), StringComparison.Ordinal)
             .Replace("{pages}", count.ToString(System.Globalization.CultureInfo.InvariantCulture), StringComparison.Ordinal);
         return
         [

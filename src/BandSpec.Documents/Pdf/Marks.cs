@@ -10,7 +10,9 @@ internal readonly record struct Box(double X, double Y, double Width, double Hei
     public double Bottom => Y + Height;
 }
 
-/// <summary>One thing to draw. Points count from the top left corner, downwards. A mark without a tag is decoration (an artifact).</summary>
+/// <summary>
+/// One thing to draw. Points count from the top left corner, downwards. A mark without a tag is decoration (an artifact).
+/// </summary>
 internal abstract record Mark(Tag? Tag)
 {
     public abstract Mark Moved(double right, double down);

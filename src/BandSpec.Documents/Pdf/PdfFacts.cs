@@ -16,7 +16,9 @@ internal enum Relationship
 /// <summary>A file carried inside the document.</summary>
 internal sealed record Attachment(string Name, string MediaType, string Description, Relationship Relationship, byte[] Bytes);
 
-/// <summary>What a PDF says about itself. The claim to follow the archive and accessibility standards is made only when asked for.</summary>
+/// <summary>
+/// What a PDF says about itself. The claim to follow the archive and accessibility standards is made only when asked for.
+/// </summary>
 internal sealed record PdfFacts(
     string Title,
     string Author,

@@ -11,9 +11,9 @@ internal static class PdfWriter
     public static byte[] Write(Document document, PageGeometry page, PdfFacts facts)
     {
         var pages = DocumentLayout.Lay(document, page);
-        var furnished = pages.Select((marks, i) => (IReadOnlyList<Mark>)[.. Furniture.Around(document.Frame, page, i + 1, pages.Count), .. marks]).ToList();
+        IReadOnlyList<Mark> Furnished(IReadOnlyList<Mark> marks, int i) => [.. Furniture.Around(document.Frame, page, i + 1, pages.Count), .. marks];
         using var paper = new SharpPaper(facts);
-        new Drawing(paper).Draw(furnished, page);
+        new Drawing(paper).Draw([.. pages.Select(Furnished)], page);
         return Finisher.Finish(paper.Finish(), facts);
     }
 }

@@ -15,7 +15,8 @@ internal sealed record ErrorShares(IReadOnlyList<double> Terms, double Safety, d
         var sample = sampleCriterion * node.SigmaSample.Percent >= longRunCriterion * node.SigmaLongRun.Percent;
         var variances = node.Terms.Select(t => sample ? t.SigmaSample.Percent : t.SigmaLongRun.Percent).Select(s => s * s).ToList();
         double added = node.Terms.Sum(t => t.Added.Percent), variance = variances.Sum();
-        var terms = node.Terms.Select((t, i) => 100 / allowed * (Part(t.Added.Percent, added) * node.Added.Percent + Part(variances[i], variance) * spread)).ToList();
+        double Taken(TermShare t, int i) => Part(t.Added.Percent, added) * node.Added.Percent + Part(variances[i], variance) * spread;
+        var terms = node.Terms.Select((t, i) => 100 / allowed * Taken(t, i)).ToList();
         var design = 100 * node.Design.Percent / allowed;
         return new ErrorShares(terms, 100 - design, Math.Max(0, design - 100 * node.Maximum.Percent / allowed));
     }

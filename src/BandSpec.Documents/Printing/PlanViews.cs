@@ -15,10 +15,15 @@ internal sealed class PlanViews(Specification specification, string sign)
         get
         {
             var (choice, chamber) = (specification.Choice, specification.Application.Station.Chamber);
-            var objective = _requirement.Compensation.Objective switch { PlanObjective.LeastCost => "least-cost", PlanObjective.MostMargin => "most-margin", _ => "least-error" };
+            var objective = _requirement.Compensation.Objective switch
+            {
+                PlanObjective.LeastCost => "least-cost", PlanObjective.MostMargin => "most-margin", _ => "least-error"
+            };
             return new PlanView(
-                [.. choice.Plan.Temperatures.Select(Stay)], choice.Plan.Points.Count, Whole(choice.Plan.ZeroDegree), Whole(choice.Plan.SpanDegree),
-                Rounded.Nearest(choice.Run.Length.Minutes, 0).Shown(sign), Rounded.Nearest(choice.Run.CostPerUnit, 2).Shown(sign), chamber.HourlyRate.Currency,
+                [.. choice.Plan.Temperatures.Select(Stay)], choice.Plan.Points.Count,
+                Whole(choice.Plan.ZeroDegree), Whole(choice.Plan.SpanDegree),
+                Rounded.Nearest(choice.Run.Length.Minutes, 0).Shown(sign), Rounded.Nearest(choice.Run.CostPerUnit, 2).Shown(sign),
+                chamber.HourlyRate.Currency,
                 Whole(chamber.Batch), Whole(choice.PlansConsidered), choice.Proven, objective);
         }
     }

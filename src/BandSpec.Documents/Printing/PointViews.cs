@@ -22,10 +22,12 @@ internal sealed class PointViews(Requirement requirement)
         var pressure = points.Select(p => Rounded.Decimals(Math.Round(p.Pressure.Value, MostPressureDecimals))).DefaultIfEmpty(0).Max();
         var temperature = points.Select(p => Rounded.Decimals(Math.Round(p.Temperature.Celsius, 1))).DefaultIfEmpty(0).Max();
         return points.Select(p => new PointView(
-            p.Id, Rounded.Nearest(p.Temperature.Celsius, temperature), Rounded.Nearest(p.Pressure.Value, pressure), Rounded.Given(Math.Round(p.PressureFraction, 6)),
+            p.Id, Rounded.Nearest(p.Temperature.Celsius, temperature), Rounded.Nearest(p.Pressure.Value, pressure),
+            Rounded.Given(Math.Round(p.PressureFraction, 6)),
             p.Direction == PressureDirection.Rising ? "rising" : "falling",
             Rounded.Nearest(p.Nominal, decimals), Rounded.Above(p.Lower, step), Rounded.Below(p.Upper, step),
-            Rounded.Nearest(p.Tolerance.Percent, PercentDecimals), Rounded.Nearest(p.GuardBand.Percent, PercentDecimals), Rounded.Nearest(p.Uncertainty.Percent, PercentDecimals),
+            Rounded.Nearest(p.Tolerance.Percent, PercentDecimals), Rounded.Nearest(p.GuardBand.Percent, PercentDecimals),
+            Rounded.Nearest(p.Uncertainty.Percent, PercentDecimals),
             Rounded.PerMillion(p.ConsumerRisk), Rounded.PerMillion(p.ProducerRisk)));
     }
 }

@@ -46,7 +46,10 @@ internal sealed class PrintViewMaker
     // What is nothing by its nature is told apart from what rounds to nothing.
     private string Sigma(PercentOfSpan value) => value.Percent == 0 ? "0" : Shown(Rounded.Nearest(value.Percent, SigmaDecimals));
 
-    private string Margin(double value) => double.IsInfinity(value) ? "\u221e" : Shown(Rounded.Down(value, MarginStep));
+    private string Margin(double value) => Index(value, MarginStep);
+
+    // An index of what does not scatter at all is infinite.
+    private string Index(double value, double step) => double.IsInfinity(value) ? "\u221e" : Shown(Rounded.Down(value, step));
 
     private RegionView Region(RegionBand band, int index)
     {
@@ -58,7 +61,15 @@ internal sealed class PrintViewMaker
             allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
             allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
             Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
-            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, 6))), Shown(Rounded.Given(band.Worst.Temperature.Celsius)));
+            Shown(Rounded.Given(Coarse(_requirement.Pressure, band.Worst.PressureFraction))),
+            Shown(Rounded.Given(Math.Round(band.Worst.Temperature.Celsius, 1))));
+    }
+
+    // Where the margin is least matters to a thousandth of the range; more digits are those of a search, not of the figure.
+    private static double Coarse(PressureRange range, double fraction)
+    {
+        var span = range.At(1).Value - range.At(0).Value;
+        return Math.Round(range.At(fraction).Value, Math.Clamp(2 - (int)Math.Floor(Math.Log10(span)), 0, 9));
     }
 
     private ProfileView Profile(InputViews inputs)
@@ -66,17 +77,24 @@ internal sealed class PrintViewMaker
         var figures = _specification.Profile;
         return new ProfileView(
             inputs.Bins, inputs.Hours, inputs.Years, Shown(Rounded.Nearest(figures.RmsError.Percent, _bandDecimals + 1)),
-            Shown(Rounded.PerMillion(figures.OutsideProbability)), Shown(Rounded.Nearest(figures.EquivalentTime.Hours, 0)), Shown(Rounded.Nearest(figures.AgeFactor, 2)));
+            Shown(Rounded.PerMillion(figures.OutsideProbability)), Shown(Rounded.Nearest(figures.EquivalentTime.Hours, 0)),
+            Shown(Rounded.Nearest(figures.AgeFactor, 2)));
     }
 
     private VerdictView Verdict()
     {
         var bands = _specification.Bands;
-        var tightest = Enumerable.Range(0, Regions.Count).MinBy(i => bands.Regions[i].AllowedTightest.Percent);
+        // Of regions equally tight the one that is so throughout, rather than only at its end, is named.
+        var tightest = Enumerable.Range(0, Regions.Count)
+            .OrderBy(i => bands.Regions[i].AllowedTightest.Percent)
+            .ThenBy(i => Widest(_requirement.AllowedError[i]))
+            .First();
         return new VerdictView(
             _specification.Feasible, Margin(bands.Margin), Margin(_specification.Floor.Margin), _specification.Floor.Margin >= 1,
             Regions[bands.Worst.Region], Regions[tightest]);
     }
+
+    private static double Widest(AllowedErrorRegion region) => Math.Max(region.Limit.Percent, (region.LimitAtEnd ?? region.Limit).Percent);
 
     private TestView Test()
     {
@@ -99,7 +117,9 @@ internal sealed class PrintViewMaker
             if (!perRegion) yield return Term(share, null, allotted.FirstOrDefault());
             else
                 for (int r = 0; r < Regions.Count; r++)
-                    yield return Term(_specification.Bands.Regions[r].Worst.Terms.First(t => t.Term == share.Term), r, allotted.FirstOrDefault(t => t.Region == r));
+                    yield return Term(
+                        _specification.Bands.Regions[r].Worst.Terms.First(t => t.Term == share.Term), r,
+                        allotted.FirstOrDefault(t => t.Region == r));
         }
     }
 
@@ -109,8 +129,7 @@ internal sealed class PrintViewMaker
         return new TermView(
             group, share.Term.Key, group == TermGroups.Further ? share.Term.Key : "", region is { } r ? Regions[r] : null,
             Sigma(share.Added), Sigma(share.SigmaSample), Sigma(share.SigmaLongRun),
-            allotted is null ? "" : Limit(allotted.Limit),
-            allotted is null ? "" : double.IsInfinity(allotted.Capability) ? "\u221e" : Shown(Rounded.Down(allotted.Capability, CapabilityStep)),
+            allotted is null ? "" : Limit(allotted.Limit), allotted is null ? "" : Index(allotted.Capability, CapabilityStep),
             allotted is null ? "" : Shown(Rounded.PerMillion(allotted.OutsideFraction)),
             allotted?.Held ?? false);
     }

@@ -32,7 +32,9 @@ internal readonly record struct Rounded(string Plain, bool IsBound = false)
     public static Rounded Given(double value, int decimals) =>
         Nearest(value, Math.Max(decimals, Decimals(Math.Abs(Math.Round(value, 9)))));
 
-    /// <summary>A probability in parts per million, rounded up to two figures, and to a thousandth at least: a page says that it is less.</summary>
+    /// <summary>
+    /// A probability in parts per million, rounded up to two figures, and to a thousandth at least: a page says that it is less.
+    /// </summary>
     public static Rounded PerMillion(double probability)
     {
         var parts = probability * 1e6;
@@ -50,7 +52,9 @@ internal readonly record struct Rounded(string Plain, bool IsBound = false)
     }
 
     /// <summary>As shown on a page of a language that writes this decimal sign; long figures are grouped by threes.</summary>
-    public string Shown(string decimalSign) => (IsBound ? "<\u00a0" : "") + Grouped(Plain.Replace("-", "\u2212", StringComparison.Ordinal)).Replace(".", decimalSign, StringComparison.Ordinal);
+    public string Shown(string decimalSign) =>
+        (IsBound ? "<\u00a0" : "")
+        + Grouped(Plain.Replace("-", "\u2212", StringComparison.Ordinal)).Replace(".", decimalSign, StringComparison.Ordinal);
 
     // Four figures stay together (ISO 80000-1 leaves it open), five and more are grouped with a space that does not break.
     private static string Grouped(string text)

@@ -3,7 +3,8 @@ namespace BandSpec.Documents.Printing;
 /// <summary>The groups in which an error budget is read, in the order of the page.</summary>
 internal static class TermGroups
 {
-    public const string Reference = "reference", Accuracy = "accuracy", Thermal = "thermal", Ageing = "ageing", Production = "production", Further = "further";
+    public const string Reference = "reference", Accuracy = "accuracy", Thermal = "thermal";
+    public const string Ageing = "ageing", Production = "production", Further = "further";
 
     public static readonly IReadOnlyList<string> All = [Reference, Accuracy, Thermal, Ageing, Production, Further];
 

@@ -8,24 +8,27 @@ internal static class ViewForTemplates
     public static ScriptObject Of(PrintView view) => Script(
         ("specification", Of(view.Identity)), ("standing", view.Standing), ("feasible", view.Verdict.Feasible), ("program", view.Program),
         ("platform", Script(("name", view.Platform), ("revision", view.PlatformRevision))), ("station", Script(("name", view.Station))),
-        ("pressure", Script(("lower", view.Range.Lower), ("upper", view.Range.Upper), ("unit", view.Range.Unit), ("reference", view.Range.Reference), ("proof", view.Range.Proof), ("burst", view.Range.Burst))),
-        ("output", Script(("kind", view.Output.Kind), ("at_lower", view.Output.AtLower), ("at_upper", view.Output.AtUpper), ("unit", view.Output.Unit), ("supply", view.Output.Supply), ("resolution", view.Output.Resolution))),
-        ("temperature", Script(("lower", view.Temperature.Lower), ("upper", view.Temperature.Upper), ("reference", view.Temperature.Reference))),
-        ("profile", Script(("hours", view.Profile.Hours), ("years", view.Profile.Years), ("rms_error", view.Profile.RmsError), ("outside", view.Profile.Outside), ("equivalent_hours", view.Profile.EquivalentHours), ("age_factor", view.Profile.AgeFactor))),
+        ("pressure", Of(view.Range)), ("output", Of(view.Output)), ("temperature", Of(view.Temperature)), ("profile", Of(view.Profile)),
         ("regions", List(view.Regions.Select(Of))),
         ("margin", view.Verdict.Margin), ("floor_margin", view.Verdict.FloorMargin), ("floor_holds", view.Verdict.FloorHolds),
         ("worst", Of(view.Verdict.Worst)), ("tightest", Of(view.Verdict.Tightest)), ("plan", Of(view.Plan)), ("test", Of(view.Test)));
 
     public static ScriptObject Of(RegionView r) => Script(
-        ("from", r.From), ("to", r.To), ("allowed", r.Allowed), ("allowed_at_start", r.AllowedAtStart), ("allowed_at_end", r.AllowedAtEnd), ("of_reading", r.OfReading),
-        ("maximum", r.Maximum), ("typical", r.Typical), ("margin", r.Margin), ("holds", r.Holds), ("worst_pressure", r.WorstPressure), ("worst_temperature", r.WorstTemperature));
+        ("from", r.From), ("to", r.To), ("allowed", r.Allowed), ("allowed_at_start", r.AllowedAtStart), ("allowed_at_end", r.AllowedAtEnd),
+        ("of_reading", r.OfReading),
+        ("maximum", r.Maximum), ("typical", r.Typical), ("margin", r.Margin), ("holds", r.Holds), ("worst_pressure", r.WorstPressure),
+        ("worst_temperature", r.WorstTemperature));
 
     public static ScriptObject Of(StayView s) => Script(("temperature", s.Temperature), ("pressures", s.Pressures), ("count", s.Count));
 
-    /// <summary>A verification point for the page (figures as shown) or for a test system (figures plain).</summary>
-    public static ScriptObject Of(PointView p) => Script(
-        ("id", p.Id), ("temperature", p.Temperature.Plain), ("pressure", p.Pressure.Plain), ("pressure_fraction", p.PressureFraction.Plain), ("direction", p.Direction),
-        ("nominal", p.Nominal.Plain), ("lower", p.Lower.Plain), ("upper", p.Upper.Plain), ("tolerance", p.Tolerance.Plain), ("guard_band", p.GuardBand.Plain),
+    /// <summary>A verification point for a test system: its figures are plain, with a point and a hyphen whatever the language.</summary>
+    public static ScriptObject Of(PointView p, string pressureUnit, string outputUnit) => Script(
+        ("id", p.Id), ("temperature", p.Temperature.Plain), ("pressure", p.Pressure.Plain), ("pressure_unit", pressureUnit),
+        ("pressure_fraction", p.PressureFraction.Plain),
+        ("direction", p.Direction),
+        ("nominal", p.Nominal.Plain), ("lower", p.Lower.Plain), ("upper", p.Upper.Plain), ("output_unit", outputUnit),
+        ("tolerance", p.Tolerance.Plain),
+        ("guard_band", p.GuardBand.Plain),
         ("uncertainty", p.Uncertainty.Plain), ("consumer_risk", p.ConsumerRisk.Plain), ("producer_risk", p.ProducerRisk.Plain));
 
     public static ScriptObject Script(params (string Name, object Value)[] members)
@@ -38,15 +41,32 @@ internal static class ViewForTemplates
 
     public static ScriptArray List(IEnumerable<ScriptObject> items) => new(items) { IsReadOnly = true };
 
-    private static ScriptObject Of(IdentityView i) => Script(
-        ("number", i.Number), ("revision", i.Revision), ("title", i.Title), ("customer", i.Customer), ("prepared_by", i.PreparedBy), ("date", i.Date),
+    public static ScriptObject Of(IdentityView i) => Script(
+        ("number", i.Number), ("revision", i.Revision), ("title", i.Title), ("customer", i.Customer), ("prepared_by", i.PreparedBy),
+        ("date", i.Date),
         ("changes", List(i.Changes.Select(c => Script(("revision", c.Revision), ("date", c.Date), ("text", c.Text))))));
 
+    private static ScriptObject Of(RangeView r) => Script(
+        ("lower", r.Lower), ("upper", r.Upper), ("unit", r.Unit), ("reference", r.Reference), ("proof", r.Proof), ("burst", r.Burst));
+
+    private static ScriptObject Of(SignalView s) => Script(
+        ("kind", s.Kind), ("at_lower", s.AtLower), ("at_upper", s.AtUpper), ("unit", s.Unit), ("supply", s.Supply),
+        ("resolution", s.Resolution));
+
+    private static ScriptObject Of(TemperatureView t) => Script(("lower", t.Lower), ("upper", t.Upper), ("reference", t.Reference));
+
+    private static ScriptObject Of(ProfileView p) => Script(
+        ("hours", p.Hours), ("years", p.Years), ("rms_error", p.RmsError), ("outside", p.Outside), ("equivalent_hours", p.EquivalentHours),
+        ("age_factor", p.AgeFactor));
+
     private static ScriptObject Of(PlanView p) => Script(
-        ("stays", List(p.Stays.Select(Of))), ("points", p.Points), ("zero_degree", p.ZeroDegree), ("span_degree", p.SpanDegree), ("minutes", p.Minutes),
-        ("cost", p.Cost), ("currency", p.Currency), ("batch", p.Batch), ("considered", p.Considered), ("proven", p.Proven), ("objective", p.Objective));
+        ("stays", List(p.Stays.Select(Of))), ("points", p.Points), ("zero_degree", p.ZeroDegree), ("span_degree", p.SpanDegree),
+        ("minutes", p.Minutes),
+        ("cost", p.Cost), ("currency", p.Currency), ("batch", p.Batch), ("considered", p.Considered), ("proven", p.Proven),
+        ("objective", p.Objective));
 
     private static ScriptObject Of(TestView t) => Script(
-        ("guard_band", t.GuardBand), ("guarded", t.Guarded), ("sample", t.Sample), ("long_run", t.LongRun), ("sample_sigma", t.SampleSigma), ("long_run_sigma", t.LongRunSigma),
+        ("guard_band", t.GuardBand), ("guarded", t.Guarded), ("sample", t.Sample), ("long_run", t.LongRun), ("sample_sigma", t.SampleSigma),
+        ("long_run_sigma", t.LongRunSigma),
         ("safety_factor", t.SafetyFactor), ("band_step", t.BandStep), ("limit_step", t.LimitStep), ("readings", t.Readings));
 }

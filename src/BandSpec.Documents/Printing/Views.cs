@@ -1,14 +1,17 @@
 namespace BandSpec.Documents.Printing;
 
 /// <summary>Number, title and people of the specification.</summary>
-internal sealed record IdentityView(string Number, string Revision, string Title, string Customer, string PreparedBy, string Date, IReadOnlyList<ChangeView> Changes);
+internal sealed record IdentityView(
+    string Number, string Revision, string Title, string Customer, string PreparedBy, string Date, IReadOnlyList<ChangeView> Changes);
 
 internal sealed record ChangeView(string Revision, string Date, string Text);
 
 /// <summary>The calibrated range; the reference is <c>gauge</c>, <c>absolute</c>, <c>sealed-gauge</c> or <c>differential</c>.</summary>
 internal sealed record RangeView(string Lower, string Upper, string Unit, string Reference, string Proof, string Burst);
 
-/// <summary>The output; the kind is <c>ratiometric-voltage</c>, <c>voltage</c>, <c>current</c> or <c>code</c>. Supply and resolution may be empty.</summary>
+/// <summary>
+/// The output; the kind is <c>ratiometric-voltage</c>, <c>voltage</c>, <c>current</c> or <c>code</c>. Supply and resolution may be empty.
+/// </summary>
 internal sealed record SignalView(string Kind, string AtLower, string AtUpper, string Unit, string Supply, string Resolution);
 
 /// <summary>Operating temperatures in °C.</summary>
@@ -17,8 +20,11 @@ internal sealed record TemperatureView(string Lower, string Upper, string Refere
 /// <summary>A bin of the profile: temperatures in °C, dwell in h, share of the service life in percent.</summary>
 internal sealed record BinView(string From, string To, string Dwell, string Share);
 
-/// <summary>The profile and what a unit does over it: life in h and years, rms error in %FS, probability in ppm, equivalent time in h.</summary>
-internal sealed record ProfileView(IReadOnlyList<BinView> Bins, string Hours, string Years, string RmsError, string Outside, string EquivalentHours, string AgeFactor);
+/// <summary>
+/// The profile and what a unit does over it: life in h and years, rms error in %FS, probability in ppm, equivalent time in h.
+/// </summary>
+internal sealed record ProfileView(
+    IReadOnlyList<BinView> Bins, string Hours, string Years, string RmsError, string Outside, string EquivalentHours, string AgeFactor);
 
 /// <summary>
 /// The promise in one region: temperatures in °C, errors in %FS. <c>Allowed</c> is the tightest, <c>AllowedAtEnd</c> and
@@ -29,7 +35,8 @@ internal sealed record RegionView(
     string Maximum, string Typical, string Margin, bool Holds, string WorstPressure, string WorstTemperature);
 
 /// <summary>The answer: the margin, the floor that no plan can beat, and the point of least margin.</summary>
-internal sealed record VerdictView(bool Feasible, string Margin, string FloorMargin, bool FloorHolds, RegionView Worst, RegionView Tightest);
+internal sealed record VerdictView(
+    bool Feasible, string Margin, string FloorMargin, bool FloorHolds, RegionView Worst, RegionView Tightest);
 
 /// <summary>A stay of the chamber: temperature in °C, the pressures read there, and how many.</summary>
 internal sealed record StayView(string Temperature, string Pressures, int Count);
@@ -41,23 +48,32 @@ internal sealed record PlanView(
 
 /// <summary>
 /// A term's line in the budget, errors in %FS. The group is <c>reference</c>, <c>accuracy</c>, <c>thermal</c>, <c>ageing</c>,
-/// <c>production</c> or <c>further</c>. Outside is the fraction of units beyond the limit in ppm. Region, limit, capability and outside are empty where there is none; the name only for further terms.
+/// <c>production</c> or <c>further</c>. Outside is the fraction of units beyond the limit in ppm. Region, limit, capability and outside are
+/// empty where there is none; the name only for further terms.
 /// </summary>
-internal sealed record TermView(string Group, string Key, string Name, RegionView? Region, string Added, string SigmaSample, string SigmaLongRun, string Limit, string Capability, string Outside, bool Held);
+internal sealed record TermView(
+    string Group, string Key, string Name, RegionView? Region, string Added, string SigmaSample, string SigmaLongRun, string Limit,
+    string Capability, string Outside, bool Held);
 
 /// <summary>The limit in %FS of a figure derived from several readings.</summary>
 internal sealed record DerivedView(string Group, string Key, RegionView? Region, string Limit);
 
 /// <summary>
-/// A verification point. Pressure in the range's unit, readings in the output's unit, tolerance, guard band and uncertainty in %FS, risks in
+/// A verification point. Pressure in the range's unit, readings in the output's unit, tolerance, guard band and uncertainty in %FS, risks
+/// in
 /// ppm. Figures are plain here: the test system's files show them as they are, pages by <see cref="Rounded.Shown"/>.
 /// </summary>
 internal sealed record PointView(
-    string Id, Rounded Temperature, Rounded Pressure, Rounded PressureFraction, string Direction, Rounded Nominal, Rounded Lower, Rounded Upper,
+    string Id, Rounded Temperature, Rounded Pressure, Rounded PressureFraction, string Direction, Rounded Nominal, Rounded Lower,
+    Rounded Upper,
     Rounded Tolerance, Rounded GuardBand, Rounded Uncertainty, Rounded ConsumerRisk, Rounded ProducerRisk);
 
-/// <summary>How the test decides: guard band factor, capability criteria with their sigma levels, safety factor, rounding steps in %FS.</summary>
-internal sealed record TestView(string GuardBand, bool Guarded, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor, string BandStep, string LimitStep, string Readings);
+/// <summary>
+/// How the test decides: guard band factor, capability criteria with their sigma levels, safety factor, rounding steps in %FS.
+/// </summary>
+internal sealed record TestView(
+    string GuardBand, bool Guarded, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor,
+    string BandStep, string LimitStep, string Readings);
 
 internal sealed record DigestView(string Name, string Digest);
 
@@ -66,6 +82,8 @@ internal sealed record DigestView(string Name, string Digest);
 /// of them calculates.
 /// </summary>
 internal sealed record PrintView(
-    IdentityView Identity, RangeView Range, SignalView Output, TemperatureView Temperature, ProfileView Profile, IReadOnlyList<RegionView> Regions,
+    IdentityView Identity, RangeView Range, SignalView Output, TemperatureView Temperature, ProfileView Profile,
+    IReadOnlyList<RegionView> Regions,
     VerdictView Verdict, PlanView Plan, IReadOnlyList<TermView> Terms, IReadOnlyList<DerivedView> Derived, IReadOnlyList<PointView> Points,
-    TestView Test, string Platform, string PlatformRevision, string Station, IReadOnlyList<DigestView> Inputs, string Program, string Standing, string DecimalSign);
+    TestView Test, string Platform, string PlatformRevision, string Station, IReadOnlyList<DigestView> Inputs, string Program,
+    string Standing, string DecimalSign);

@@ -10,7 +10,9 @@ public interface ITemplateFolder
     /// <param name="path">A relative path as described above.</param>
     string? Read(string path);
 
-    /// <summary>The paths of all files directly in a folder such as <c>limits</c>, in any order; empty when there is no such folder.</summary>
+    /// <summary>
+    /// The paths of all files directly in a folder such as <c>limits</c>, in any order; empty when there is no such folder.
+    /// </summary>
     /// <param name="folder">A relative path without a slash at its end.</param>
     IReadOnlyList<string> Files(string folder);
 

@@ -14,6 +14,8 @@ internal sealed class SafeTemplate
 {
     private const int MostSteps = 100_000, MostDepth = 40, MostLetters = 2_000_000;
 
+    private static readonly ScriptObject Builtins = MakeBuiltins();
+
     private readonly Template _template;
     private readonly string _file;
 
@@ -28,7 +30,7 @@ internal sealed class SafeTemplate
     /// <param name="escape">What is done to every value before it is written; the template's own text is left as it is.</param>
     public string Render(IScriptObject view, Func<string, string>? escape = null)
     {
-        var context = new EscapingContext(Builtins(), escape)
+        var context = new EscapingContext(Builtins, escape)
         {
             StrictVariables = true,
             EnableRelaxedMemberAccess = false,
@@ -49,6 +51,8 @@ internal sealed class SafeTemplate
         };
         context.PushCulture(CultureInfo.InvariantCulture);
         context.PushGlobal(view);
+        // Variables of the template's own live here and end with it.
+        context.PushGlobal(new ScriptObject());
         try
         {
             return _template.Render(context);
@@ -62,13 +66,15 @@ internal sealed class SafeTemplate
     private TemplateException At(SourceSpan span, string reason) =>
         new(_file, span.Start.Line + 1, span.Start.Column + 1, reason.Trim().TrimEnd('.') + ".");
 
-    // Without the clock, chance, and evaluation of text made up at run time.
-    private static ScriptObject Builtins()
+    // Without the clock, chance, and evaluation of text made up at run time. Shared by all templates, so read-only throughout.
+    private static ScriptObject MakeBuiltins()
     {
         var builtins = TemplateContext.GetDefaultBuiltinObject();
         builtins.Remove("date");
         Without(builtins, "math", "random", "uuid");
         Without(builtins, "object", "eval", "eval_template");
+        foreach (var group in builtins.Values.OfType<ScriptObject>()) group.IsReadOnly = true;
+        builtins.IsReadOnly = true;
         return builtins;
     }
 

@@ -17,11 +17,14 @@ internal sealed partial class Words
     private readonly ScriptObject _view;
     private readonly string _folder;
 
-    private Words(Dictionary<string, Entry> entries, ScriptObject view, string folder) => (_entries, _view, _folder) = (entries, view, folder);
+    private Words(Dictionary<string, Entry> entries, ScriptObject view, string folder) =>
+        (_entries, _view, _folder) = (entries, view, folder);
 
     private sealed record Entry(string File, int Line, SafeTemplate Template);
 
-    /// <summary>Reads the word files of a language; every entry is parsed at once, so that a mistake shows however rarely the entry is used.</summary>
+    /// <summary>
+    /// Reads the word files of a language; every entry is parsed at once, so that a mistake shows however rarely the entry is used.
+    /// </summary>
     public static Words Load(TemplateSources sources, string language)
     {
         var folder = $"words/{language}";
@@ -29,7 +32,9 @@ internal sealed partial class Words
         foreach (var file in Files)
         {
             if (sources.Read($"{folder}/{file}") is not var (name, text))
-                throw new TemplateException($"{folder}/{file}", 1, 1, $"There is no such file, neither among the user's templates nor built in: the language '{language}' is not known.");
+                throw new TemplateException(
+                    $"{folder}/{file}", 1, 1,
+                    $"There is no such file, neither among the user's templates nor built in: the language '{language}' is not known.");
             foreach (var section in WordSection.Cut(name, text))
                 if (!entries.TryAdd(section.Key, new Entry(name, section.Line, new SafeTemplate(name, section.PaddedText))))
                     throw new TemplateException(name, section.Line, 1, $"The entry '{section.Key}' stands here a second time.");
@@ -59,7 +64,8 @@ internal sealed partial class Words
             scope.IsReadOnly = false;
             foreach (var (name, value) in more) scope.SetValue(name, value, readOnly: true);
         }
-        var text = entry.Template.Render(scope, Markup.Escape).Trim().Split("\n\n", StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries);
+        var text = entry.Template.Render(scope, Markup.Escape).Trim().Split(
+            "\n\n", StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries);
         return [.. text.Select(paragraph => Parse(entry, paragraph))];
     }
 
@@ -76,7 +82,8 @@ internal sealed partial class Words
         }
     }
 
-    // A figure stays on one line with its unit and with the sign before it; a word of up to four letters after a figure is taken for a unit, which does no harm.
+    // A figure stays on one line with its unit and with the sign before it; a word of up to four letters after a figure is taken for a
+    // unit, which does no harm.
     [GeneratedRegex(@"(?<=\d) (?=[°%]|\p{L}{1,4}\b)| (?=[≥≤=] ?\d)|(?<=[≥≤=]) (?=\d)")]
     private static partial Regex SpaceBeforeUnit();
 }

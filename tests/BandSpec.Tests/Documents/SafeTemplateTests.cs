@@ -12,6 +12,7 @@ public sealed class SafeTemplateTests
     [Theory]
     [InlineData("a value", "{{ title }}", "Brine")]
     [InlineData("a loop", "{{ for p in points }}{{ p.id }};{{ end }}", "V01;V02;")]
+    [InlineData("a variable of its own", "{{ n = 0 }}{{ for p in points }}{{ n = n + 1 }}{{ end }}{{ n }}", "2")]
     [InlineData("a condition", "{{ if feasible }}yes{{ else }}no{{ end }}", "yes")]
     public void Writes(string what, string text, string expected) =>
         Assert.True(Render(text) == expected, what);
@@ -33,6 +34,7 @@ public sealed class SafeTemplateTests
     [InlineData("{{ object.eval '1 + 1' }}")]
     [InlineData("{{ object.eval_template '{{ 1 }}' }}")]
     [InlineData("{{ points[0].id = 'V99' }}")]
+    [InlineData("{{ math.pi = 3 }}")]
     [InlineData("{{ if feasible }}never closed")]
     [InlineData("{{ end }}")]
     [InlineData("{{ ('a' | string.repeat 30) + '!' | regex.match '^(a+)+$' }}")]
@@ -45,7 +47,8 @@ public sealed class SafeTemplateTests
 
     [Fact]
     public void Leaves_its_own_text_alone_and_escapes_values() =>
-        Assert.Equal("<b>&lt;Brine&gt;</b>", new SafeTemplate("t", "<b>{{ '<Brine>' }}</b>").Render(View, System.Security.SecurityElement.Escape));
+        Assert.Equal(
+            "<b>&lt;Brine&gt;</b>", new SafeTemplate("t", "<b>{{ '<Brine>' }}</b>").Render(View, System.Security.SecurityElement.Escape));
 
     [Fact]
     public void Stops_at_more_letters_than_a_document_can_need() =>

@@ -7,13 +7,17 @@ namespace BandSpec.Tests.Documents;
 internal static class SampleCharts
 {
     private static readonly Spot[] Allowed = [new(-20, 1.6), new(40, 1.6), new(40, 1.0), new(130, 1.0), new(150, 1.4)];
-    private static readonly DwellBin[] Dwell = [new(-20, 10, 4.5, "1 500 h"), new(10, 60, 18.2, "6 000 h"), new(60, 115, 66.7, "22 000 h"), new(115, 150, 10.6, "3 500 h")];
+    private static readonly DwellBin[] Dwell = [
+        new(-20, 10, 4.5, "1 500 h"), new(10, 60, 18.2, "6 000 h"), new(60, 115, 66.7, "22 000 h"), new(115, 150, 10.6, "3 500 h")];
 
     public static readonly BandChart Band = new(
         new("Temperature, °C", "Error, %FS", "Dwell, % of service life", "Allowed", "Divided by the safety factor", "Maximum", "Typical", "Compensation temperature", "Least margin"),
         Allowed, [.. Allowed.Select(s => s with { Y = s.Y / 1.15 })], Curve(0.62), Curve(0.4), [-10, 25, 80, 140], new(130, 0.93), Dwell);
 
-    public static Figure BandFigure() => new("Figure 1", "Error band over temperature, with the dwell profile", "Band chart: the maximum error lies inside the allowed error everywhere.", Band, "band.svg");
+    public static Figure BandFigure() =>
+        new(
+            "Figure 1", "Error band over temperature, with the dwell profile",
+            "Band chart: the maximum error lies inside the allowed error everywhere.", Band, "band.svg");
 
     public static IEnumerable<Figure> Figures() =>
     [

@@ -1,28 +1,45 @@
 using BandSpec.Documents.Model;
 using BandSpec.Documents.Pdf;
+using static System.FormattableString;
 
 namespace BandSpec.Tests.Documents;
 
 /// <summary>A made-up document that uses every block, mark and chart there is.</summary>
 internal static class SampleDocument
 {
-    public static readonly Attachment Note = new("note.txt", "text/plain", "A note", Relationship.Supplement, "attached, byte for byte\n"u8.ToArray());
+    public static readonly Attachment Note = new(
+        "note.txt", "text/plain", "A note", Relationship.Supplement, "attached, byte for byte\n"u8.ToArray());
 
     public static PdfFacts Facts(params Attachment[] attachments) =>
-        new("Brine <reinjection> & line", "Application engineering", "Error-band specification HV-3107", "en", new DateOnly(2026, 11, 24), "BandSpec test", attachments, false);
+        new(
+            "Brine <reinjection> & line", "Application engineering", "Error-band specification HV-3107", "en", new DateOnly(2026, 11, 24),
+            "BandSpec test", attachments, false);
 
     public static Frame Frame(Standing standing = Standing.Draft) => new(
         "Brine <reinjection> & line", "Application engineering", "Error-band specification HV-3107", "en", new DateOnly(2026, 11, 24),
-        "HV-3107 · revision A", "Brine reinjection line, wellhead skid", "Holmvik Geothermal · 2026-11-24", "Page {page} of {pages}", "(continued)",
-        new Stamp(standing, standing == Standing.Refused ? "NOT FEASIBLE" : "DRAFT", standing == Standing.Refused ? "No compensation plan keeps the allowed error." : "Not released for delivery."));
+        "HV-3107 · revision A", "Brine reinjection line, wellhead skid", "Holmvik Geothermal · 2026-11-24", "Page {page} of {pages}",
+        "(continued)",
+        new Stamp(
+            standing, standing == Standing.Refused ? "NOT FEASIBLE" : "DRAFT",
+            standing == Standing.Refused ? "No compensation plan keeps the allowed error." : "Not released for delivery."));
 
-    public static Document Full(Standing standing = Standing.Draft) => new(Frame(standing), [.. Front(), .. Tables(), .. Charts(), .. Texts()]);
+    public static Document Full(Standing standing = Standing.Draft) =>
+        new(Frame(standing), [.. Front(), .. Tables(), .. Charts(), .. Texts()]);
+
+    /// <summary>One of every block, short enough to read whole.</summary>
+    public static Document Brief() => new(Frame(),
+    [
+        .. Front(),
+        .. Tables().Take(4),
+        .. Texts().Where(b => b is not Paragraph).Take(9),
+    ]);
 
     private static IEnumerable<Block> Front() =>
     [
         new TitleBlock("Custom error-band specification", "Brine reinjection line, wellhead skid", "Pressure transmitter, 0 bar to 25 bar gauge, ratiometric 0.5 V to 4.5 V",
         [
-            new("Number", "HV-3107"), new("Revision", "A"), new("Date", "2026-11-24"), new("Customer", "Holmvik Geothermal"), new("Prepared by", "Application engineering"), new("Platform", "SK-40 welded steel cell, revision 4"),
+            new("Number", "HV-3107"), new("Revision", "A"), new("Date", "2026-11-24"), new("Customer", "Holmvik Geothermal"),
+            new("Prepared by", "Application engineering"), new("Platform", "SK-40 welded steel cell, revision 4"),
         ]),
         new Paragraph(Markup.Parse("Between −20 °C and 150 °C, over 15 years of the stated profile, the error stays within **±1.0 %FS** from 40 °C to 130 °C and within **±1.6 %FS** below."), Voice.Lead),
         new Headline([new("Margin", "1.08", "at least 1 is needed"), new("Tightest allowed", "±1.0 %FS", "40 °C to 130 °C"), new("Compensation", "4 points", "proven over 1 482 plans"), new("Verdict", "Feasible", "both criteria met")]),
@@ -43,8 +60,10 @@ internal static class SampleDocument
         ], "Maximum and typical are rounded up to 0.05 %FS."),
         new Heading(2, "1.1", "A long table"),
         new Table("Table 2", "Verification limits", [new("Point"), new("Temperature", Align.Decimal, "°C"), new("Pressure", Align.Decimal, "bar"), new("Direction", Align.Centre), new("Lower", Align.Decimal, "V"), new("Nominal", Align.Decimal, "V"), new("Upper", Align.Decimal, "V")],
-            [new(["At the reference temperature"], RowKind.Section), .. Enumerable.Range(1, 60).Select(i => new Row([$"V{i:00}", i % 7 == 0 ? "—" : $"{i * 2.5:0.0}", $"{i % 6 * 5}", i % 2 == 0 ? "rising" : "falling", $"{i * 0.07:0.000}", $"{i * 0.07 + 0.01:0.000}", $"{i * 0.07 + 0.02:0.000}"])), new(["Second part"], RowKind.Section), new(["", "1", "2", "rising", "0.1", "10.25", "100.375"])]),
-        new Table("Table 3", "A row taller than a page", [new("Name"), new("Story")], [new(["Short", "one line"]), new(["Tall", string.Join(' ', Enumerable.Range(1, 1500).Select(i => $"word{i}"))]), new(["After", "the tall row"])]),
+            [new(["At the reference temperature"], RowKind.Section), .. Enumerable.Range(1, 60).Select(i => new Row([$"V{i:00}", i % 7 == 0 ? "—" : Invariant($"{i * 2.5:0.0}"), $"{i % 6 * 5}", i % 2 == 0 ? "rising" : "falling", Invariant($"{i * 0.07:0.000}"), Invariant($"{i * 0.07 + 0.01:0.000}"), Invariant($"{i * 0.07 + 0.02:0.000}")])), new(["Second part"], RowKind.Section), new(["", "1", "2", "rising", "0.1", "10.25", "100.375"])]),
+        new Table(
+            "Table 3", "A row taller than a page", [new("Name"), new("Story")],
+            [new(["Short", "one line"]), new(["Tall", string.Join(' ', Enumerable.Range(1, 1500).Select(i => $"word{i}"))]), new(["After", "the tall row"])]),
     ];
 
     private static IEnumerable<Block> Charts() =>

@@ -12,6 +12,7 @@ public sealed partial class RoomTests
     private static readonly string[] Order =
     [
         "Quantities", "Numerics", "Findings", "Requirements", "Residuals", "Bands", "Planning", "Allocating", "TestLimits", "Specifying",
+        "VirtualLots", "Revisions",
     ];
 
     [Fact]

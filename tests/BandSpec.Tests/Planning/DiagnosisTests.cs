@@ -15,7 +15,7 @@ public sealed class DiagnosisTests
         Compensation = Given.Requirement.Compensation with { CandidateStep = Given.K(10), MostTemperatures = 4 },
     };
 
-    private static readonly Lazy<Specification> Drafted = new(() => SpecificationDraft.Draft(Given.Application(Tight)));
+    private static readonly Lazy<Specification> Drafted = new(() => SpecificationDraft.Draft(Given.Application(Tight), extras: DraftExtras.DiagnosisOfNo));
 
     [Fact]
     public void It_is_there_when_no_plan_fits_and_names_what_binds()

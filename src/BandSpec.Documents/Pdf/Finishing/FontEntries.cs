@@ -21,11 +21,13 @@ internal static partial class FontEntries
 
     private static PdfObject Mend(PdfObject font, Dictionary<string, string> tags)
     {
-        var text = SubsetName().Replace(font.Text, m => tags.TryGetValue(m.Groups[2].Value, out var tag) ? $"{m.Groups[1].Value}{tag}+" : m.Value);
+        var text = SubsetName().Replace(
+            font.Text, m => tags.TryGetValue(m.Groups[2].Value, out var tag) ? $"{m.Groups[1].Value}{tag}+" : m.Value);
         if (!font.Is("FontDescriptor")) return font with { Text = text };
         text = Descent().Replace(text, "/Descent -$1");
         // Vertical stems of the two weights, in thousandths of the size, as measured on the letter l.
-        return font with { Text = text.Replace("/StemV 0", text.Contains("Semi", StringComparison.Ordinal) ? "/StemV 124" : "/StemV 84", StringComparison.Ordinal) };
+        var stem = text.Contains("Semi", StringComparison.Ordinal) ? "/StemV 124" : "/StemV 84";
+        return font with { Text = text.Replace("/StemV 0", stem, StringComparison.Ordinal) };
     }
 
     private static string Letters(byte[] font) => string.Concat(SHA256.HashData(font).Take(6).Select(b => (char)('A' + b % 26)));

@@ -6,7 +6,10 @@ using System.Text;
 
 namespace BandSpec.Documents.Pdf.Finishing;
 
-/// <summary>Writes objects as a compact file: the small ones together in compressed object streams, the offsets in a stream of their own (ISO 32000-1, 7.5.7 and 7.5.8).</summary>
+/// <summary>
+/// Writes objects as a compact file: the small ones together in compressed object streams, the offsets in a stream of their own (ISO
+/// 32000-1, 7.5.7 and 7.5.8).
+/// </summary>
 internal sealed class PackedFile
 {
     private const int ObjectsPerStream = 200;
@@ -56,7 +59,8 @@ internal sealed class PackedFile
             body.Append(objects[i].Text).Append('\n');
             _entries[objects[i].Number] = (2, number, i);
         }
-        WriteCompressed(number, $"<</Type/ObjStm/N {objects.Length}/First {index.Length}>>", Encoding.Latin1.GetBytes(index.ToString() + body));
+        WriteCompressed(
+            number, $"<</Type/ObjStm/N {objects.Length}/First {index.Length}>>", Encoding.Latin1.GetBytes(index.ToString() + body));
     }
 
     private void WriteOffsets(int root, int info, byte[] digest)

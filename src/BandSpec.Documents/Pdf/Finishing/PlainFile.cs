@@ -40,7 +40,8 @@ internal sealed class PlainFile
         var header = Word(table + 5).Split(' ');
         var count = int.Parse(header[1], CultureInfo.InvariantCulture);
         var entries = _text.IndexOf('\n', table + 5) + 1;
-        var offsets = Enumerable.Range(1, count - 1).Select(i => (Number: i, Offset: int.Parse(_text.AsSpan(entries + 20 * i, 10), CultureInfo.InvariantCulture))).OrderBy(o => o.Offset).ToList();
+        int Offset(int number) => int.Parse(_text.AsSpan(entries + 20 * number, 10), CultureInfo.InvariantCulture);
+        var offsets = Enumerable.Range(1, count - 1).Select(i => (Number: i, Offset: Offset(i))).OrderBy(o => o.Offset).ToList();
         for (int i = 0; i < offsets.Count; i++)
             yield return ReadObject(offsets[i].Number, offsets[i].Offset, i + 1 < offsets.Count ? offsets[i + 1].Offset : table);
     }
@@ -60,5 +61,6 @@ internal sealed class PlainFile
         return new PdfObject(number, dictionary, _file[(from + start)..(from + start + length)]);
     }
 
-    private static InvalidOperationException Surprise(string what) => new($"The PDF library wrote a file that the finisher does not know: {what}.");
+    private static InvalidOperationException Surprise(string what) =>
+        new($"The PDF library wrote a file that the finisher does not know: {what}.");
 }

@@ -14,7 +14,8 @@ internal static class BoxLayout
         var scale = Math.Min(1, width / figure.Chart.Width);
         var height = figure.Chart.Height * scale;
         var left = (width - figure.Chart.Width * scale) / 2;
-        yield return new Slab(height, [new ChartMark(tag, new Box(left, 0, figure.Chart.Width * scale, height), figure.Chart)]) { Before = Look.BlockGap, KeepWithNext = true };
+        var place = new Box(left, 0, figure.Chart.Width * scale, height);
+        yield return new Slab(height, [new ChartMark(tag, place, figure.Chart)]) { Before = Look.BlockGap, KeepWithNext = true };
         yield return Slab.Gap(3) with { KeepWithNext = true };
         var caption = group.Child(TagKind.Caption).Child(TagKind.P);
         var lines = LineBreaker.Break(TableLayout.Labelled(figure.Label, figure.Caption), Look.Caption, width);
@@ -32,13 +33,17 @@ internal static class BoxLayout
         foreach (var paragraph in callout.Paragraphs) pieces.AddRange([Slab.Gap(2), .. Text(paragraph, Look.Body, width, group)]);
         var text = Stack(pieces);
         var height = text.Height + 7;
-        return new Slab(height, [new FillMark(new Box(0, 0, width, height), Look.Wash), new FillMark(new Box(0, 0, bar, height), ink), .. text.Marks]) { Before = Look.BlockGap };
+        var ground = new FillMark(new Box(0, 0, width, height), Look.Wash);
+        return new Slab(height, [ground, new FillMark(new Box(0, 0, bar, height), ink), .. text.Marks]) { Before = Look.BlockGap };
     }
 
     public static Slab Lay(Headline headline, double width)
     {
         var share = width / headline.Figures.Count;
-        var cells = headline.Figures.Select((f, i) => Cell(f, i == 0 ? 0 : Inset, i == 0 ? share - Inset : share - 2 * Inset)).ToList();
+        double Room(int i) => i == 0 ? share - Inset : share - 2 * Inset;
+        // Where one figure is too long for its place, all are set smaller rather than one broken: they are read at a glance.
+        var fit = headline.Figures.Select((f, i) => Math.Min(1, Room(i) / LineBreaker.NaturalWidth(f.Value, Look.KeyValue))).Min();
+        var cells = headline.Figures.Select((f, i) => Cell(f, i == 0 ? 0 : Inset, Room(i), fit)).ToList();
         var height = cells.Max(c => c.Height) + 12;
         var marks = new List<Mark> { new RuleMark(0, 0, width, 0, 0.9, Look.Ink), new RuleMark(0, height, width, height, 0.5, Look.Rule) };
         for (int i = 0; i < cells.Count; i++)
@@ -63,13 +68,13 @@ internal static class BoxLayout
         return new Slab(y, marks);
     }
 
-    private static Slab Cell(KeyFigure figure, double left, double width)
+    private static Slab Cell(KeyFigure figure, double left, double width, double fit)
     {
         var group = new Tag(TagKind.Div);
-        IEnumerable<Slab> Set(Phrase text, TextStyle style) => TextLayout.Lines(LineBreaker.Break(text, style, width), style, left, group.Child(TagKind.P));
-        // A long figure is set smaller rather than broken: it is to be read at a glance.
-        var fit = Math.Min(1, width / LineBreaker.NaturalWidth(figure.Value, Look.KeyValue));
-        return Stack([.. Set(figure.Name, Look.KeyName), .. Set(figure.Value, Look.KeyValue with { Size = Look.KeyValue.Size * fit }), .. figure.Remark.IsEmpty ? [] : Set(figure.Remark, Look.Fine)]);
+        var value = Look.KeyValue with { Size = Look.KeyValue.Size * fit };
+        IEnumerable<Slab> Set(Phrase text, TextStyle style) =>
+            TextLayout.Lines(LineBreaker.Break(text, style, width), style, left, group.Child(TagKind.P));
+        return Stack([.. Set(figure.Name, Look.KeyName), .. Set(figure.Value, value), .. Set(figure.Remark, Look.Fine)]);
     }
 
     private static IEnumerable<Slab> Text(Phrase text, TextStyle style, double width, Tag group) =>

@@ -2,7 +2,9 @@ using BandSpec.Documents.Model;
 
 namespace BandSpec.Documents.Pdf.Layout;
 
-/// <summary>The column widths of a table, and where in a column the decimal points stand. Widths are without the gaps between columns.</summary>
+/// <summary>
+/// The column widths of a table, and where in a column the decimal points stand. Widths are without the gaps between columns.
+/// </summary>
 internal sealed class ColumnWidths
 {
     private const double MostSpare = 40;
@@ -14,7 +16,8 @@ internal sealed class ColumnWidths
         _table = table;
         var room = width - Look.ColumnGap * (table.Columns.Count - 1);
         Fractions = [.. table.Columns.Select((c, i) => c.Align == Align.Decimal ? Cells(i).Max(FractionWidth) : 0)];
-        Widths = WithRest(Share([.. table.Columns.Select((_, i) => Narrowest(i))], [.. table.Columns.Select((_, i) => Natural(i))], room), room);
+        Widths = WithRest(
+            Share([.. table.Columns.Select((_, i) => Narrowest(i))], [.. table.Columns.Select((_, i) => Natural(i))], room), room);
         Lefts = [.. Enumerable.Range(0, Widths.Count).Select(i => Widths.Take(i).Sum() + i * Look.ColumnGap)];
     }
 
@@ -35,6 +38,9 @@ internal sealed class ColumnWidths
         return point < 0 ? 0 : Fonts.Typeface.Of(Look.Cell.Face).Width(text[point..], Look.Cell.Size);
     }
 
+    // Totals are set in stronger letters, which are wider.
+    private bool HasTotals => _table.Rows.Any(r => r.Kind == RowKind.Total);
+
     private IEnumerable<Phrase> Cells(int column) =>
         _table.Rows.Where(r => r.Kind != RowKind.Section).Select(r => r.Cells[column]).DefaultIfEmpty(Phrase.Empty);
 
@@ -48,7 +54,7 @@ internal sealed class ColumnWidths
         var head = Math.Max(measure(column.Title, Look.HeadCell), measure(column.Unit, Look.UnitCell));
         var body = column.Align == Align.Decimal
             ? Cells(i).Max(c => LineBreaker.NaturalWidth(c, Look.Cell) - FractionWidth(c)) + Fractions[i]
-            : Cells(i).Max(c => measure(c, _table.Rows.Any(r => r.Kind == RowKind.Total) ? Look.HeadCell with { Size = Look.Cell.Size } : Look.Cell));
+            : Cells(i).Max(c => measure(c, HasTotals ? Look.HeadCell with { Size = Look.Cell.Size } : Look.Cell));
         return Math.Max(head, body);
     }
 

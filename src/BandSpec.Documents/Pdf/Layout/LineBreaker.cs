@@ -55,7 +55,10 @@ internal sealed class LineBreaker
 
     private static (Face Face, double Size, double Rise) Setting(Run run, TextStyle style)
     {
-        var face = run.Lettering switch { Lettering.Bold => Face.SemiBold, Lettering.Italic => Face.Italic, Lettering.Code => Face.Mono, _ => style.Face };
+        var face = run.Lettering switch
+        {
+            Lettering.Bold => Face.SemiBold, Lettering.Italic => Face.Italic, Lettering.Code => Face.Mono, _ => style.Face
+        };
         // The mono face looks larger than the text face at the same size.
         var size = face == Face.Mono ? 0.92 * style.Size : style.Size;
         return run.Shift switch

@@ -40,7 +40,8 @@ internal sealed class TableHeading(Table table, ColumnWidths columns, double wid
     private double LayTitles(Tag? row, List<Mark> marks, double y)
     {
         var titles = table.Columns.Select((c, i) => LineBreaker.Break(c.Title, Look.HeadCell, columns.Widths[i])).ToList();
-        var units = table.Columns.Select((c, i) => c.Unit.Length == 0 ? [] : LineBreaker.Break(c.Unit, Look.UnitCell, columns.Widths[i])).ToList();
+        IReadOnlyList<Line> Unit(Column c, int i) => c.Unit.Length == 0 ? [] : LineBreaker.Break(c.Unit, Look.UnitCell, columns.Widths[i]);
+        var units = table.Columns.Select(Unit).ToList();
         // Titles end on a common line and units on the one below, so that the eye finds them at one height.
         int titleLines = titles.Max(t => t.Count), unitLines = units.Max(u => u.Count);
         var unitTop = y + titleLines * Look.HeadCell.Leading;

@@ -26,7 +26,8 @@ internal sealed class TableLayout
     private List<Slab> Slabs(string continued)
     {
         var captionTag = _tag.Child(TagKind.Caption).Child(TagKind.P);
-        List<Slab> slabs = [.. Caption(Labelled(_table.Label, _table.Caption), captionTag, _textWidth), Slab.Gap(CaptionGap) with { KeepWithNext = true }];
+        List<Slab> slabs = [
+            .. Caption(Labelled(_table.Label, _table.Caption), captionTag, _textWidth), Slab.Gap(CaptionGap) with { KeepWithNext = true }];
         slabs[0] = slabs[0] with { Before = Look.BlockGap };
         var heading = new TableHeading(_table, _columns, _width);
         slabs.Add(heading.Lay(_tag.Child(TagKind.THead)) with { KeepWithNext = true });
@@ -36,7 +37,7 @@ internal sealed class TableLayout
         {
             var row = TableRow.Lay(_table, i, _columns, _width, _body) with { Repeat = again };
             // The first two and the last two rows stay together, and a heading within the table stays with what it heads.
-            slabs.Add(row with { KeepWithNext = (i == 0 && count > 1) || i == count - 2 || _table.Rows[i].Kind == RowKind.Section || i == count - 1 });
+            slabs.Add(row with { KeepWithNext = i == 0 || i >= count - 2 || _table.Rows[i].Kind == RowKind.Section });
         }
         slabs.Add(new Slab(0.5, [new RuleMark(0, 0, _width, 0, 0.9, Look.Ink)]) { KeepWithNext = !_table.Remark.IsEmpty });
         slabs.AddRange(Remark());
@@ -62,6 +63,8 @@ internal sealed class TableLayout
     private IEnumerable<Slab> Remark()
     {
         if (_table.Remark.IsEmpty) return [];
-        return [Slab.Gap(3) with { KeepWithNext = true }, .. TextLayout.Lines(LineBreaker.Break(_table.Remark, Look.Fine, _textWidth), Look.Fine, 0, new Tag(TagKind.P))];
+        return [
+            Slab.Gap(3) with { KeepWithNext = true },
+            .. TextLayout.Lines(LineBreaker.Break(_table.Remark, Look.Fine, _textWidth), Look.Fine, 0, new Tag(TagKind.P))];
     }
 }

@@ -15,12 +15,15 @@ internal sealed class TableRow
     private TableRow(Table table, int index, ColumnWidths columns, double width, Tag body)
     {
         (_table, _index, _columns, _width, _body) = (table, index, columns, width, body);
-        _cells = [.. Row.Cells.Select((cell, i) => LineBreaker.Break(cell, Style, table.Columns[i].Align == Align.Decimal ? double.MaxValue : columns.Widths[i]))];
+        // A figure is not broken: its column is as wide as it needs.
+        double Room(int i) => table.Columns[i].Align == Align.Decimal ? double.MaxValue : columns.Widths[i];
+        _cells = [.. Row.Cells.Select((cell, i) => LineBreaker.Break(cell, Style, Room(i)))];
     }
 
     private Row Row => _table.Rows[_index];
 
-    private TextStyle Style => Row.Kind == RowKind.Total ? Look.HeadCell with { Size = Look.Cell.Size, Leading = Look.Cell.Leading } : Look.Cell;
+    private TextStyle Style =>
+        Row.Kind == RowKind.Total ? Look.HeadCell with { Size = Look.Cell.Size, Leading = Look.Cell.Leading } : Look.Cell;
 
     public static Slab Lay(Table table, int index, ColumnWidths columns, double width, Tag body)
     {
@@ -48,7 +51,10 @@ internal sealed class TableRow
             var cell = i == 0 ? new Tag(TagKind.TH, tag) { Scope = HeaderScope.Row } : tag.Child(TagKind.TD);
             if (_cells[i].Skip(first).Take(last - first).All(l => l.Spans.Count == 0)) marks.Add(new EmptyMark(cell));
             foreach (var (line, k) in _cells[i].Select((l, k) => (l, k)).Skip(first).Take(last - first))
-                marks.AddRange(line.At(_columns.Lefts[i] + Offset(i, line), Look.CellPad + (k - first) * Style.Leading + TextLayout.Baseline(Style), Style.Ink, cell));
+            {
+                var baseline = Look.CellPad + (k - first) * Style.Leading + TextLayout.Baseline(Style);
+                marks.AddRange(line.At(_columns.Lefts[i] + Offset(i, line), baseline, Style.Ink, cell));
+            }
         }
         var height = 2 * Look.CellPad + (last - first) * Style.Leading;
         if (_index > 0 && _table.Rows[_index - 1].Kind != RowKind.Section && first == 0) marks.Add(Above());

@@ -2,7 +2,9 @@ using BandSpec.Documents.Model;
 
 namespace BandSpec.Documents.Pdf.Layout;
 
-/// <summary>Headings, paragraphs and lists as slabs: a line is a slab, and the first two and the last two lines of a text stay together.</summary>
+/// <summary>
+/// Headings, paragraphs and lists as slabs: a line is a slab, and the first two and the last two lines of a text stay together.
+/// </summary>
 internal static class TextLayout
 {
     private const double ListIndent = 15;
@@ -13,7 +15,8 @@ internal static class TextLayout
         var tag = new Tag((TagKind)((int)TagKind.H1 + heading.Level));
         var number = heading.Number.Length == 0 ? Phrase.Empty : (Phrase)(heading.Number + "\u00a0\u00a0");
         var title = (heading.Number + " " + heading.Text.Plain).Trim();
-        var slabs = Lines(LineBreaker.Break(number + heading.Text, style, width), style, 0, tag).Select(s => s with { KeepWithNext = true }).ToList();
+        var slabs = Lines(
+            LineBreaker.Break(number + heading.Text, style, width), style, 0, tag).Select(s => s with { KeepWithNext = true }).ToList();
         slabs[0] = slabs[0] with
         {
             Before = Look.SpaceBeforeHeadings[heading.Level - 1],
@@ -26,7 +29,8 @@ internal static class TextLayout
     {
         var style = paragraph.Voice switch { Voice.Lead => Look.Lead, Voice.Fine => Look.Fine, _ => Look.Body };
         var lines = LineBreaker.Break(paragraph.Text, style, width);
-        return Spaced(Kept(Lines(lines, style, 0, new Tag(TagKind.P))), paragraph.Voice == Voice.Lead ? Look.BlockGap + 3 : Look.ParagraphGap);
+        return Spaced(
+            Kept(Lines(lines, style, 0, new Tag(TagKind.P))), paragraph.Voice == Voice.Lead ? Look.BlockGap + 3 : Look.ParagraphGap);
     }
 
     public static IEnumerable<Slab> Lay(Bullets bullets, double width)
@@ -36,7 +40,8 @@ internal static class TextLayout
         {
             var entry = list.Child(TagKind.LI);
             var label = bullets.Numbered ? $"{i + 1}." : "\u2013";
-            var lines = Lines(LineBreaker.Break(item, Look.Body, width - ListIndent), Look.Body, ListIndent, entry.Child(TagKind.LBody)).ToList();
+            var lines = Lines(
+                LineBreaker.Break(item, Look.Body, width - ListIndent), Look.Body, ListIndent, entry.Child(TagKind.LBody)).ToList();
             var mark = LineBreaker.Break(label, Look.Body, width)[0].At(0, Baseline(Look.Body), Look.Soft, entry.Child(TagKind.Lbl));
             lines[0] = lines[0] with { Marks = [.. mark, .. lines[0].Marks] };
             return Spaced(Kept(lines), i == 0 ? Look.ParagraphGap : 3);

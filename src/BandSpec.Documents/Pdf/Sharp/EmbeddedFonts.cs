@@ -3,7 +3,9 @@ using PdfSharp.Fonts;
 
 namespace BandSpec.Documents.Pdf.Sharp;
 
-/// <summary>Gives PDFsharp the embedded faces and nothing else: an unknown family is an error, so no font of the machine is taken.</summary>
+/// <summary>
+/// Gives PDFsharp the embedded faces and nothing else: an unknown family is an error, so no font of the machine is taken.
+/// </summary>
 internal sealed class EmbeddedFonts : IFontResolver
 {
     private static readonly Lock Gate = new();

@@ -11,7 +11,8 @@ internal static class SharpAttachments
         using var stream = new MemoryStream(pdf.ToArray());
         using var document = Open(stream);
         if (document.Internals.Catalog.Elements.GetArray("/AF") is not { } files) return [];
-        return [.. Enumerable.Range(0, files.Elements.Count).Select(i => ReadFile(files.Elements.GetDictionary(i))).OrderBy(f => f.Name, StringComparer.Ordinal)];
+        var read = Enumerable.Range(0, files.Elements.Count).Select(i => ReadFile(files.Elements.GetDictionary(i)));
+        return [.. read.OrderBy(f => f.Name, StringComparer.Ordinal)];
     }
 
     private static PdfDocument Open(MemoryStream stream)

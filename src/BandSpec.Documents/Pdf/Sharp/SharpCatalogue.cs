@@ -58,7 +58,8 @@ internal static class SharpCatalogue
         document.Internals.Catalog.Elements["/Names"] = root;
     }
 
-    // Associated files of PDF/A-3, done by hand: PDFsharp's own call leaves out the relationship and the media type and writes today's date.
+    // Associated files of PDF/A-3, done by hand: PDFsharp's own call leaves out the relationship and the media type and writes today's
+    // date.
     private static PdfDictionary Specification(PdfDocument document, Attachment attachment, DateOnly date)
     {
         var content = new PdfDictionary(document);

@@ -17,7 +17,7 @@ internal sealed class SharpTags(UAManager structure)
             case TagKind.Div or TagKind.Caption: Builder.BeginGroupingElement("/" + tag.Kind); break;
             default: Builder.BeginBlockLevelElement("/" + tag.Kind); break;
         }
-        if (tag.Columns > 1) Builder.SetColSpan(tag.Columns);
+        if (tag.Columns > 1) Attributes().SetInteger("/ColSpan", tag.Columns);
         if (tag.Scope != HeaderScope.None) Attributes().SetName("/Scope", "/" + tag.Scope);
         if (tag.Kind == TagKind.L) Attributes("/List").SetName("/ListNumbering", "/None");
     }

@@ -1,0 +1,17 @@
+namespace BandSpec.Cli;
+
+/// <summary>What a run of the program ends with; scripts rely on the numbers.</summary>
+internal enum ExitCode
+{
+    /// <summary>Done.</summary>
+    Done = 0,
+
+    /// <summary>Done, and the answer is no: no compensation plan fits.</summary>
+    AnswerIsNo = 1,
+
+    /// <summary>Findings in the input, or a command line that makes no sense.</summary>
+    Findings = 2,
+
+    /// <summary>A fault of the program, or of the disk it writes to.</summary>
+    Fault = 3,
+}

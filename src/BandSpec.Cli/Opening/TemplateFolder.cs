@@ -1,0 +1,60 @@
+using System.Text;
+using BandSpec.Documents.Templates;
+using BandSpec.Files.Json;
+
+namespace BandSpec.Cli.Opening;
+
+/// <summary>A user's folder of templates on the disk. It remembers what was read from it: those files are inputs of the package too.</summary>
+internal sealed class TemplateFolder : ITemplateFolder
+{
+    private const int LargestTemplate = 1 << 20;
+    private readonly string folder;
+    private readonly SortedDictionary<string, byte[]> read = new(StringComparer.Ordinal);
+
+    private TemplateFolder(string folder, string name) => (this.folder, Name) = (folder, name);
+
+    /// <inheritdoc/>
+    public string Name { get; }
+
+    /// <summary>The files that were read, by name.</summary>
+    public IReadOnlyList<ManifestInput> Inputs => [.. read.Select(file => new ManifestInput("template", file.Key, file.Value))];
+
+    /// <summary>
+    /// The folder that the user named, or else <c>templates</c> in the project of a requirement; null when there is none.
+    /// </summary>
+    /// <param name="named">The folder that the user named; null for the project's.</param>
+    /// <param name="requirement">The requirement's file.</param>
+    /// <param name="workingFolder">The folder that relative paths are counted from.</param>
+    /// <exception cref="RefusalException">The named folder does not exist.</exception>
+    public static TemplateFolder? Find(string? named, string requirement, string workingFolder)
+    {
+        if (named is not null)
+        {
+            string path = Path.GetFullPath(named, workingFolder);
+            return Directory.Exists(path) ? new TemplateFolder(path, named) : throw new RefusalException($"there is no folder of templates {named}");
+        }
+        string project = InputFolder.ProjectOf(Path.GetDirectoryName(Path.GetFullPath(requirement, workingFolder))!);
+        string usual = Path.Combine(project, "templates");
+        return Directory.Exists(usual) ? new TemplateFolder(usual, Path.GetRelativePath(workingFolder, usual)) : null;
+    }
+
+    /// <inheritdoc/>
+    public string? Read(string path)
+    {
+        string full = Path.Combine(folder, path);
+        if (!File.Exists(full) || !RealPath.IsInside(RealPath.Of(full), RealPath.Of(folder)))
+            return null;
+        if (new FileInfo(full).Length > LargestTemplate)
+            throw new TemplateException($"{Name}/{path}", 1, 1, $"the template is larger than {LargestTemplate} bytes");
+        byte[] bytes = File.ReadAllBytes(full);
+        read[path] = bytes;
+        return Encoding.UTF8.GetString(bytes);
+    }
+
+    /// <inheritdoc/>
+    public IReadOnlyList<string> Files(string folder)
+    {
+        string full = Path.Combine(this.folder, folder);
+        return Directory.Exists(full) ? [.. Directory.EnumerateFiles(full).Select(file => $"{folder}/{Path.GetFileName(file)}").Order(StringComparer.Ordinal)] : [];
+    }
+}

@@ -1,0 +1,126 @@
+using System.Globalization;
+using System.Text;
+using BandSpec.Cli.Drafting;
+using BandSpec.Core.Bands;
+using BandSpec.Core.Planning;
+using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.Specifying;
+using Spectre.Console;
+
+namespace BandSpec.Cli.Printing;
+
+/// <summary>A draft on one screen: verdict, plan, band by region, and where the package is.</summary>
+internal static class DraftScreen
+{
+    private static readonly CultureInfo Plain = CultureInfo.InvariantCulture;
+
+    /// <summary>The screen of one draft.</summary>
+    public static string Of(Specification specification, WrittenPackage package, Ink ink)
+    {
+        (Requirement requirement, Platform platform) = (specification.Application.Requirement, specification.Application.Platform);
+        SpecificationIdentity identity = requirement.Identity;
+        StringBuilder screen = new();
+        screen.Append(Plain, $"\n{ink.Bold(identity.FolderName)}  {identity.Title}\n");
+        screen.Append(Plain, $"{ink.Faint($"{identity.Customer}; {platform.Name}, revision {platform.Revision}; {specification.Application.Station.Name}")}\n\n");
+        AppendVerdict(screen, specification, ink);
+        AppendPlan(screen, specification, ink);
+        AppendRegions(screen, specification, ink);
+        AppendProfile(screen, specification.Profile, ink);
+        screen.Append(Plain, $"{ink.Bold("Package")}   {ink.Blue(package.Folder)}\n");
+        foreach (string line in Wrapped(package.Files))
+            screen.Append(Plain, $"          {line}\n");
+        return screen.Append('\n').ToString();
+    }
+
+    /// <summary>One line for each of several drafts.</summary>
+    public static string SummaryOf(IReadOnlyList<Draft> drafts, Ink ink)
+    {
+        Table table = new Table().NoBorder().HideHeaders().AddColumns("file", "verdict", "margin", "folder");
+        foreach (TableColumn column in table.Columns)
+            column.NoWrap().PadRight(2);
+        foreach (Draft draft in drafts)
+        {
+            int count = draft.Inputs.Findings.Count;
+            if (draft is { Specification: { } specification, Package: { } package })
+                table.AddRow(new Text(draft.File), Verdict(specification), new Text($"margin {Margin(specification.Bands.Margin)}"), new Text(package.Folder));
+            else
+                table.AddRow(new Text(draft.File), new Text($"{count} finding{(count == 1 ? "" : "s")}", Color.Red));
+        }
+        return "\n" + Tables.Of(table, ink);
+    }
+
+    private static Text Verdict(Specification specification) =>
+        specification.Feasible ? new Text("FEASIBLE", Color.Green) : new Text("NOT FEASIBLE", Color.Red);
+
+    private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
+    {
+        BandNode worst = specification.Bands.Worst;
+        Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
+        string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
+        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red("NOT FEASIBLE"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
+        screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
+        if (!specification.Feasible && specification.Floor.Bound < 1)
+            screen.Append(Plain, $"{ink.Yellow("no plan can help: what compensation cannot remove fills the band by itself")}\n");
+        screen.Append('\n');
+    }
+
+    private static void AppendPlan(StringBuilder screen, Specification specification, Ink ink)
+    {
+        (CompensationPlan plan, ChamberRun run) = (specification.Choice.Plan, specification.Choice.Run);
+        string temperatures = string.Join(", ", plan.Temperatures.Select(temperature => temperature.Celsius.ToString(Plain)));
+        string currency = specification.Application.Station.Chamber.HourlyRate.Currency;
+        screen.Append(Plain, $"{ink.Bold("Plan")}      {temperatures} °C; degrees {plan.ZeroDegree} for zero, {plan.SpanDegree} for span; {plan.Points.Count} readings\n");
+        screen.Append(Plain, $"          {Math.Floor(run.Length.Hours):0} h {run.Length.Minutes % 60:00} min in the chamber, {run.CostPerUnit:0.00} {currency} a unit\n\n");
+    }
+
+    private static void AppendRegions(StringBuilder screen, Specification specification, Ink ink)
+    {
+        string format = $"F{Decimals(specification.Application.Requirement.Rounding.Band.Percent)}";
+        Table table = new Table().SimpleBorder().AddColumns("Band, %FS", "allowed", "maximum", "typical", "margin");
+        for (int i = 1; i < table.Columns.Count; i++)
+            table.Columns[i].RightAligned();
+        foreach (RegionBand region in specification.Bands.Regions)
+            table.AddRow(
+                new Text(string.Create(Plain, $"{region.From.Celsius} to {region.To.Celsius} °C")),
+                Tables.Figure(region.AllowedTightest.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Stated.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Typical.Percent.ToString(format, Plain)),
+                Tables.Figure(Margin(region.Margin), region.Margin < 1 ? Color.Red : null));
+        screen.Append(Tables.Of(table, ink)).Append('\n');
+    }
+
+    private static void AppendProfile(StringBuilder screen, ProfileFigures profile, Ink ink)
+    {
+        double parts = profile.OutsideProbability * 1e6;
+        string outside = parts < 0.001 ? "less than 0.001" : parts.ToString(parts < 1 ? "0.000" : "0.#", Plain);
+        screen.Append(Plain, $"{ink.Bold("Over life")} rms error {profile.RmsError.Percent:0.000} %FS; beyond the allowed error {outside} millionths of the time;\n");
+        screen.Append(Plain, $"          drift {profile.AgeFactor:0.00} times that of the ageing test\n\n");
+    }
+
+    /// <summary>Cut, not rounded: a margin of 0.9996 is not 1.</summary>
+    private static string Margin(double margin) =>
+        double.IsFinite(margin) ? (Math.Floor((margin * 1000) + 1e-7) / 1000).ToString("0.000", Plain) : "\u221e";
+
+    private static int Decimals(double step)
+    {
+        string text = step.ToString("0.#########", Plain);
+        return text.Contains('.', StringComparison.Ordinal) ? text.Length - text.IndexOf('.', StringComparison.Ordinal) - 1 : 0;
+    }
+
+    private static IEnumerable<string> Wrapped(IReadOnlyList<string> names)
+    {
+        string line = "";
+        foreach (string name in names)
+        {
+            if (line.Length + name.Length > 90)
+            {
+                yield return line + ",";
+                line = "";
+            }
+            line += line.Length == 0 ? name : $", {name}";
+        }
+        yield return line;
+    }
+}

@@ -1,0 +1,113 @@
+using System.Text;
+using System.Text.Json;
+using System.Text.Json.Nodes;
+using BandSpec.Core.Findings;
+using BandSpec.Core.Specifying;
+using BandSpec.Files.Inputs;
+using BandSpec.Files.Json;
+using BandSpec.Files.Schemas;
+using BandSpec.Files.Yaml;
+using BandSpec.Tests.House;
+using Json.Schema;
+using Xunit;
+
+namespace BandSpec.Tests.Files;
+
+public sealed class SchemaTests
+{
+    private static readonly string DemoFolder = Path.Combine(Tree.Root, "requirements-demo");
+
+    public static TheoryData<string> DemoFiles { get; } =
+        [.. Directory.EnumerateFiles(DemoFolder, "*.yaml", SearchOption.AllDirectories).Select(path => Path.GetRelativePath(DemoFolder, path))];
+
+    [Theory]
+    [MemberData(nameof(DemoFiles))]
+    public void A_demo_follows_its_schema(string file) => Assert.Empty(Faults(SchemaOf(KindOf(file)), DemoFolder, file));
+
+    [Theory]
+    [InlineData(InputFile.Requirement, "brine-reinjection.yaml", "upper: 25 bar", "upper: 25 Bar")]
+    [InlineData(InputFile.Requirement, "brine-reinjection.yaml", "title:", "titel:")]
+    [InlineData(InputFile.Requirement, "brine-reinjection.yaml", "safety-factor: 1.15", "safety-factor: 0.5")]
+    [InlineData(InputFile.Requirement, "brine-reinjection.yaml", "least-cost", "cheapest")]
+    [InlineData(InputFile.Platform, "platforms/steel-cell-40.yaml", "zero.1", "tilt.1")]
+    [InlineData(InputFile.Platform, "platforms/steel-cell-40.yaml", "span-degree: 3", "span-degree: 3.5")]
+    [InlineData(InputFile.Station, "stations/chamber-line-2.yaml", "95 EUR/h", "95 EUR")]
+    public void A_schema_refuses_what_the_reader_refuses(InputFile kind, string file, string old, string replacement)
+    {
+        string text = File.ReadAllText(Path.Combine(Demo.Folder, file));
+        Assert.Contains(old, text, StringComparison.Ordinal);
+        Assert.NotEmpty(Faults(SchemaOf(kind), YamlAsJson(text.Replace(old, replacement, StringComparison.Ordinal))));
+    }
+
+    [Theory]
+    [MemberData(nameof(DemoFiles))]
+    public void A_demo_names_its_schema_for_editors(string file)
+    {
+        string first = File.ReadLines(Path.Combine(DemoFolder, file)).First();
+        const string Mark = "# yaml-language-server: $schema=";
+        Assert.StartsWith(Mark, first, StringComparison.Ordinal);
+        string path = Path.GetFullPath(Path.Combine(Path.GetDirectoryName(Path.Combine(DemoFolder, file))!, first[Mark.Length..]));
+        Assert.Equal(Path.Combine(DemoFolder, "schemas", $"{KindOf(file).ToString().ToLowerInvariant()}.schema.json"), path);
+    }
+
+    [Theory]
+    [InlineData(InputFile.Requirement)]
+    [InlineData(InputFile.Platform)]
+    [InlineData(InputFile.Station)]
+    public void The_schemas_beside_the_demos_are_those_of_the_program(InputFile kind)
+    {
+        string path = Path.Combine(DemoFolder, "schemas", $"{kind.ToString().ToLowerInvariant()}.schema.json");
+        Assert.Equal(Encoding.UTF8.GetString(InputSchemas.Write(kind).Span), File.ReadAllText(path));
+    }
+
+    [Fact]
+    public void Result_and_limits_follow_their_schemas_to_the_last_member()
+    {
+        Specification specification = SpecificationDraft.Draft(Given.Application());
+
+        Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Result.Span)), ResultJson.Write(specification)));
+        Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Limits.Span)), LimitsJson.Write(specification)));
+    }
+
+    private static InputFile KindOf(string file) =>
+        file.StartsWith("platforms", StringComparison.Ordinal) ? InputFile.Platform
+        : file.StartsWith("stations", StringComparison.Ordinal) ? InputFile.Station : InputFile.Requirement;
+
+    private static JsonSchema SchemaOf(InputFile kind) => Schemas[kind];
+
+    // A schema registers itself by its identifier, which may be done once only.
+    private static readonly Dictionary<InputFile, JsonSchema> Schemas = Enum.GetValues<InputFile>()
+        .ToDictionary(kind => kind, kind => JsonSchema.FromText(Encoding.UTF8.GetString(InputSchemas.Write(kind).Span)));
+
+    private static List<string> Faults(JsonSchema schema, string folder, string file) =>
+        Faults(schema, YamlAsJson(File.ReadAllText(Path.Combine(folder, file))));
+
+    private static List<string> Faults(JsonSchema schema, ReadOnlyMemory<byte> json)
+    {
+        using JsonDocument document = JsonDocument.Parse(json);
+        EvaluationResults results = schema.Evaluate(document.RootElement, new EvaluationOptions { OutputFormat = OutputFormat.List });
+        // A list names the branch of an alternative that did not hold beside the one that did.
+        if (results.IsValid)
+            return [];
+        return [.. (results.Details ?? []).Append(results).Where(detail => !detail.IsValid && detail.Errors is not null)
+            .SelectMany(detail => detail.Errors!.Select(error => $"{detail.InstanceLocation}: {error.Value}"))];
+    }
+
+    /// <summary>A YAML file as an editor's YAML server sees it: plain numbers and truth values of the core schema are such, all else is text.</summary>
+    private static ReadOnlyMemory<byte> YamlAsJson(string yaml)
+    {
+        FoundFaults faults = new(InputFile.Requirement);
+        YamlNode? root = TreeReading.Read(SourceText.Decode(Encoding.UTF8.GetBytes(yaml), faults), faults);
+        Assert.Empty(faults.All);
+        return Encoding.UTF8.GetBytes(ToJson(root!).ToJsonString());
+    }
+
+    private static JsonNode ToJson(YamlNode node) => node switch
+    {
+        MapNode map => new JsonObject(map.Entries.Select(entry => KeyValuePair.Create(entry.Key.Text, (JsonNode?)ToJson(entry.Value)))),
+        ListNode list => new JsonArray([.. list.Items.Select(ToJson)]),
+        ScalarNode { IsQuoted: false } number when double.TryParse(number.Text, out double value) => JsonValue.Create(value),
+        ScalarNode scalar => JsonValue.Create(scalar.Text)!,
+        _ => throw new InvalidOperationException("the tree has no other nodes"),
+    };
+}
