@@ -31,30 +31,49 @@ internal static class DraftScreen
         return screen.Append('\n').ToString();
     }
 
-    /// <summary>One line for each of several drafts.</summary>
+    /// <summary>One line for each of several drafts, and how many of each kind there are.</summary>
     public static string SummaryOf(IReadOnlyList<Draft> drafts, Ink ink)
     {
         int width = drafts.Max(draft => CellWidth.Of(draft.File));
         StringBuilder screen = new("\n");
         foreach (Draft draft in drafts)
-        {
-            string file = draft.File + new string(' ', width - CellWidth.Of(draft.File));
-            string verdict = draft is not { Specification: { } specification, Package: { } package }
-                ? ink.Red($"{draft.Inputs.Findings.Count} finding{(draft.Inputs.Findings.Count == 1 ? "" : "s")}")
-                : $"{Verdict(specification, ink)}  margin {Margin(specification.Bands.Margin)}  {ink.Blue(package.Folder)}";
-            screen.Append(Plain, $"{file}  {verdict}\n");
-        }
-        return screen.ToString();
+            screen.Append(Plain, $"{draft.File}{new string(' ', width - CellWidth.Of(draft.File))}  {Outcome(draft, ink)}\n");
+        string[] counts =
+        [
+            .. from state in Enum.GetValues<DraftState>()
+               let count = drafts.Count(draft => draft.State == state)
+               where count > 0
+               select $"{count} {Word(state)}",
+        ];
+        return screen.Append(Plain, $"\n{ink.Bold(string.Join(", ", counts))}\n").ToString();
     }
 
-    private static string Verdict(Specification specification, Ink ink) =>
-        specification.Feasible ? ink.Green("FEASIBLE    ") : ink.Red("NOT FEASIBLE");
+    private static string Outcome(Draft draft, Ink ink) => draft switch
+    {
+        { Verdict: { } verdict, Package: { } package } =>
+            $"{Verdict(verdict.Feasible, ink)}  margin {Margin(verdict.Margin)}  {ink.Blue(package.Folder)}"
+            + (draft.State == DraftState.UpToDate ? "  up to date" : "") + (draft.Release is null ? "" : $"  {ink.Green("RELEASED")}"),
+        { State: DraftState.Refused } => ink.Red($"{draft.Findings.Count} finding{(draft.Findings.Count == 1 ? "" : "s")}"),
+        { State: DraftState.Failed } => ink.Red("failed"),
+        _ => ink.Faint(draft.Note ?? ""),
+    };
+
+    private static string Word(DraftState state) => state switch
+    {
+        DraftState.Refused => "with findings",
+        DraftState.UpToDate => "up to date",
+        DraftState.LeftOut => "left out",
+        _ => state.ToString().ToLowerInvariant(),
+    };
+
+    private static string Verdict(bool feasible, Ink ink) =>
+        feasible ? ink.Green("FEASIBLE    ") : ink.Red("NOT FEASIBLE");
 
     private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
     {
         BandNode worst = specification.Bands.Worst;
         string place = $"{worst.Temperature} and {specification.Application.Requirement.Pressure.At(worst.PressureFraction)}";
-        screen.Append(Plain, $"{Verdict(specification, ink).TrimEnd()}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        screen.Append(Plain, $"{Verdict(specification.Feasible, ink).TrimEnd()}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
         screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
         if (!specification.Feasible && specification.Floor.Bound < 1)

@@ -1,0 +1,43 @@
+namespace BandSpec.Cli.Storing;
+
+/// <summary>Writes a file so that it is either the old one or the new one, complete, whenever the process is killed.</summary>
+internal static class WholeFile
+{
+    /// <summary>Writes beside the file under a hidden name, then renames into place.</summary>
+    /// <param name="path">The file's full path; its folder has to be there.</param>
+    /// <param name="bytes">Its new content.</param>
+    /// <exception cref="RefusalException">The disk or the rights keep it from being written; the older file is untouched.</exception>
+    public static void Write(string path, ReadOnlySpan<byte> bytes)
+    {
+        string fresh = Path.Combine(Path.GetDirectoryName(path)!, $".{Path.GetFileName(path)}.new");
+        try
+        {
+            using (FileStream stream = new(fresh, FileMode.Create))
+            {
+                stream.Write(bytes);
+                // On the disk before it gets its name, so that not even a loss of power leaves an empty file under it.
+                stream.Flush(flushToDisk: true);
+            }
+
+            File.Move(fresh, path, overwrite: true);
+        }
+        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        {
+            TryDelete(fresh);
+            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
+        }
+    }
+
+    /// <summary>Deletes a file that may be gone, or not to be deleted: then it does no harm where it is.</summary>
+    public static void TryDelete(string path)
+    {
+        try
+        {
+            File.Delete(path);
+        }
+        catch (Exception kept) when (kept is IOException or UnauthorizedAccessException)
+        {
+            // A hidden leftover; the next run writes over it.
+        }
+    }
+}
