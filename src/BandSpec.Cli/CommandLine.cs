@@ -60,7 +60,11 @@ internal static class CommandLine
         root.Add(ReleaseCommand.Create(terminal));
         root.Add(VerifyCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
+        root.Add(TryCommand.Create(terminal));
+        root.Add(GatherCommand.Create(terminal));
         root.Add(SchemaCommand.Create(terminal));
+        root.Add(CharacterizeCommand.Create(terminal));
+        root.Add(AgeCommand.Create(terminal));
         HelpOption help = root.Options.OfType<HelpOption>().Single();
         help.Action = new TeachingHelp((HelpAction)help.Action!, terminal.Ink);
         return root;

@@ -54,6 +54,8 @@ internal static class CompareCommand
     private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
     {
         using SearchBar bar = new(terminal, application.Requirement.Identity.FolderName);
-        return SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SpecificationDraft.Draft(application, bar, cancellation);
+        cancellation.ThrowIfCancellationRequested();
+        return specification;
     }
 }

@@ -35,14 +35,16 @@ internal sealed class StoredPackage
         && Manifest.Outputs.All(IsThere)
         && Directory.EnumerateFileSystemEntries(folder).Count() == Names.Count;
 
-    /// <summary>The verdict that its records tell; null when they do not.</summary>
+    /// <summary>
+    /// The verdict that its records tell; null when they do not, or when the search was ended early: drafting again may find a better plan.
+    /// </summary>
     public Verdict? Verdict()
     {
         try
         {
             using JsonDocument result = JsonDocument.Parse(File.ReadAllBytes(Path.Combine(folder, "result.json")));
             JsonElement margin = result.RootElement.GetProperty("margin");
-            return new Verdict(
+            return !result.RootElement.GetProperty("plan").GetProperty("proven").GetBoolean() ? null : new Verdict(
                 result.RootElement.GetProperty("feasible").GetBoolean(), margin.ValueKind == JsonValueKind.Null ? double.PositiveInfinity : margin.GetDouble());
         }
         catch (Exception unreadable) when (unreadable is IOException or JsonException or InvalidOperationException or KeyNotFoundException)

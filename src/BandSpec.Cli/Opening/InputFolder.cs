@@ -27,11 +27,12 @@ internal sealed class InputFolder
     /// <param name="file">The requirement as the user named it.</param>
     /// <param name="root">The folder that the others have to be in; null to find it.</param>
     /// <param name="workingFolder">The folder that relative paths are counted from.</param>
-    public static InputSet Read(string file, string? root, string workingFolder)
+    /// <param name="changes">Values to be read as if they were written otherwise; null for none.</param>
+    public static InputSet Read(string file, string? root, string workingFolder, IReadOnlyList<InputChange>? changes = null)
     {
         string path = Path.GetFullPath(file, workingFolder);
         InputFolder inputs = new(file, path, root is null ? null : Path.GetFullPath(root, workingFolder));
-        return InputReading.Read(Open(path, file), inputs.Follow, Letters.Missing);
+        return InputReading.Read(OpenedContent.Open(path, file, MostBytes), inputs.Follow, Letters.Missing, changes);
     }
 
     /// <summary>The folder of the project that a folder belongs to: the nearest above with <c>.git</c> in it, or the folder itself.</summary>
@@ -52,28 +53,7 @@ internal sealed class InputFolder
             return InputContent.Refused(shown, "it is not a path");
         string path = Path.GetFullPath(written, folder);
         return RealPath.IsInside(RealPath.Of(path), root)
-            ? Open(path, shown)
+            ? OpenedContent.Open(path, shown, MostBytes)
             : InputContent.Refused(shown, $"it is outside the project, {root}; `--root` gives another");
-    }
-
-    private static InputContent Open(string path, string shown)
-    {
-        if (Directory.Exists(path))
-            return InputContent.Refused(shown, "it is a folder");
-        try
-        {
-            using FileStream stream = new(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite);
-            byte[] bytes = new byte[MostBytes];
-            int length = stream.ReadAtLeast(bytes, MostBytes, throwOnEndOfStream: false);
-            return InputContent.Of(shown, bytes.AsMemory(0, length));
-        }
-        catch (Exception refused) when (refused is FileNotFoundException or DirectoryNotFoundException)
-        {
-            return InputContent.Refused(shown, "there is no such file");
-        }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException or NotSupportedException)
-        {
-            return InputContent.Refused(shown, "it cannot be read");
-        }
     }
 }

@@ -3,6 +3,7 @@ using System.Text;
 using BandSpec.Cli.Drafting;
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
+using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 
@@ -72,7 +73,8 @@ internal static class DraftScreen
     private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
     {
         BandNode worst = specification.Bands.Worst;
-        string place = $"{worst.Temperature} and {specification.Application.Requirement.Pressure.At(worst.PressureFraction)}";
+        Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
+        string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:G4} {pressure.Unit}");
         screen.Append(Plain, $"{Verdict(specification.Feasible, ink).TrimEnd()}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
         screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");

@@ -27,8 +27,8 @@ internal sealed record FindingReports(string? Sarif, string? Junit)
     public void Write(IReadOnlyList<(string File, IReadOnlyList<PlacedFinding> Findings, string? Error)> cases, string workingFolder)
     {
         if (Sarif is not null)
-            WholeFile.Write(Path.GetFullPath(Sarif, workingFolder), FindingSarif.Of(cases.SelectMany(one => one.Findings)).Span);
+            WholeFile.Write(Path.GetFullPath(Sarif, workingFolder), FindingSarif.Of(cases.SelectMany(one => one.Findings)));
         if (Junit is not null)
-            WholeFile.Write(Path.GetFullPath(Junit, workingFolder), FindingJunit.Of(cases).Span);
+            WholeFile.Write(Path.GetFullPath(Junit, workingFolder), FindingJunit.Of(cases));
     }
 }

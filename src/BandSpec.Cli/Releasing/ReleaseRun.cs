@@ -52,7 +52,10 @@ internal sealed class ReleaseRun(Terminal terminal, DraftRun run, string by)
     private Specification Solve(Application application, CancellationToken cancellation)
     {
         using SearchBar bar = new(terminal, application.Requirement.Identity.FolderName);
-        return SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SpecificationDraft.Draft(application, bar, cancellation);
+        // A search that was ended early has an answer too, but not one to be frozen.
+        cancellation.ThrowIfCancellationRequested();
+        return specification;
     }
 
     private Release ReleaseOf(Specification specification, InputSet inputs)

@@ -7,14 +7,14 @@ internal static class WholeFile
     /// <param name="path">The file's full path; its folder has to be there.</param>
     /// <param name="bytes">Its new content.</param>
     /// <exception cref="RefusalException">The disk or the rights keep it from being written; the older file is untouched.</exception>
-    public static void Write(string path, ReadOnlySpan<byte> bytes)
+    public static void Write(string path, ReadOnlyMemory<byte> bytes)
     {
         string fresh = Path.Combine(Path.GetDirectoryName(path)!, $".{Path.GetFileName(path)}.new");
         try
         {
             using (FileStream stream = new(fresh, FileMode.Create))
             {
-                stream.Write(bytes);
+                stream.Write(bytes.Span);
                 // On the disk before it gets its name, so that not even a loss of power leaves an empty file under it.
                 stream.Flush(flushToDisk: true);
             }

@@ -1,5 +1,6 @@
 using BandSpec.Cli.Drafting;
 using BandSpec.Cli.Opening;
+using BandSpec.Core.Requirements;
 using BandSpec.Core.Revisions;
 using BandSpec.Core.Specifying;
 using BandSpec.Documents;
@@ -55,8 +56,15 @@ internal sealed class CarriedPackage
         else if (!Enum.TryParse(Provenance.Making.Paper, out Paper paper))
             reason = $"there is no paper {Provenance.Making.Paper}";
         else
-            return MakeAgain(set, paper, released, SpecificationDraft.Draft(application, null, cancellation), out reason);
+            return MakeAgain(set, paper, released, Solve(application, cancellation), out reason);
         return null;
+    }
+
+    private static Specification Solve(Application application, CancellationToken cancellation)
+    {
+        Specification specification = SpecificationDraft.Draft(application, null, cancellation);
+        cancellation.ThrowIfCancellationRequested();
+        return specification;
     }
 
     private IReadOnlyList<PackageFile>? MakeAgain(

@@ -23,7 +23,8 @@ internal static class CorrelationSelection
             if (open.Count == 0)
                 return fit;
             (int First, int Second) clearest = open.MaxBy(pair => Score(fit.Fit, pair));
-            if (Score(fit.Fit, clearest) < ChiSquared.Quantile(1 - (FamilyLevel / open.Count), 1))
+            double limit = NormalDistribution.Quantile(FamilyLevel / 2 / open.Count);
+            if (Score(fit.Fit, clearest) < limit * limit)
                 return fit;
             fit = fit.WithPair(clearest);
         }

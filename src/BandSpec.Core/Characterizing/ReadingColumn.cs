@@ -36,7 +36,7 @@ internal readonly record struct ReadingColumn(ColumnKind Kind, CoefficientName N
     {
         ColumnKind.PressureHysteresis => ErrorTerm.PressureHysteresis.Key,
         ColumnKind.ThermalHysteresis => ErrorTerm.ThermalHysteresis.Key,
-        _ => KeyOf(Name),
+        _ => Name.ToString(),
     };
 
     /// <summary>The regressor of a reading at pressure fraction <c>x</c> and reduced temperature <c>τ</c>.</summary>
@@ -50,10 +50,4 @@ internal readonly record struct ReadingColumn(ColumnKind Kind, CoefficientName N
         ColumnKind.ThermalHysteresis => thermalSide,
         _ => PressureShapes.At(Name.Shape, x) * Powers.Of(tau, Name.Degree),
     };
-
-    /// <summary>A coefficient's name as in files.</summary>
-    public static string KeyOf(CoefficientName name) => $"{ShapeKey(name.Shape)}.{name.Degree}";
-
-    /// <summary>A shape's name as in files.</summary>
-    public static string ShapeKey(PressureShape shape) => shape == PressureShape.SShape ? "s-shape" : shape.ToString().ToLowerInvariant();
 }

@@ -1,5 +1,5 @@
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Numerics.Dense;
-using MathNet.Numerics.Distributions;
 using MathNet.Numerics.Statistics;
 
 namespace BandSpec.Core.Characterizing;
@@ -34,7 +34,7 @@ internal sealed class ReadingScreen(IReadOnlyList<ReadingColumn> columns)
         if (spreads.Length == 0)
             return [];
         double sigma = spreads.Median();
-        double limit = -Normal.InvCDF(0, 1, FamilyLevel / 2 / Math.Max(1, family.Readings.Count()));
+        double limit = -NormalDistribution.Quantile(FamilyLevel / 2 / Math.Max(1, family.Readings.Count()));
         return [.. units.SelectMany(unit => Slips(unit, sigma, limit))];
     }
 

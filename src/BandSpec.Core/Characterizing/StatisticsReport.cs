@@ -70,7 +70,7 @@ internal sealed class StatisticsReport(
     private CorrelationEstimate Correlation((int First, int Second) pair, double value)
     {
         double freedom = Math.Min(variances.Within[pair.First].Freedom, variances.Within[pair.Second].Freedom);
-        double reach = Normal.InvCDF(0, 1, (1 + scope.Confidence) / 2) / Math.Sqrt(Math.Max(0.01, freedom - 2));
+        double reach = NormalDistribution.Quantile((1 + scope.Confidence) / 2) / Math.Sqrt(Math.Max(0.01, freedom - 2));
         return new CorrelationEstimate(
             new CoefficientPair(columns[pair.First].Name, columns[pair.Second].Name),
             new Estimate(value, Math.Tanh(Math.Atanh(value) - reach), Math.Tanh(Math.Atanh(value) + reach)));

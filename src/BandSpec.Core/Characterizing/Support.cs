@@ -51,13 +51,13 @@ internal sealed class Support
         };
         if (units >= FewestUnits)
             return true;
-        if (column.Kind != ColumnKind.Coefficient || !AlreadyLeftOut(column.Name.Shape))
+        if (column.Kind != ColumnKind.Coefficient || !AlreadyLeftOut(column.Name))
             leftOut.Add(new LeftOutTerm(column.Key, $"{Counted(units)} {reason}, and a spread needs at least {FewestUnits}"));
         return false;
     }
 
-    private bool AlreadyLeftOut(PressureShape shape) =>
-        leftOut.Any(term => term.Term.StartsWith(ReadingColumn.ShapeKey(shape) + ".", StringComparison.Ordinal));
+    private bool AlreadyLeftOut(CoefficientName name) =>
+        leftOut.Any(term => term.Term.StartsWith(name.Word + ".", StringComparison.Ordinal));
 
     private static string Counted(int units) => units switch
     {

@@ -1,3 +1,4 @@
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Numerics.Dense;
 using BandSpec.Core.Numerics.NestedModels;
 using MathNet.Numerics.Distributions;
@@ -71,7 +72,7 @@ internal sealed class UnitScreen(IReadOnlyList<ReadingColumn> columns)
         {
             double[] values = [.. deviations.Select(d => d.Standardised[j])];
             double middle = values.Median();
-            double spread = values.Select(v => Math.Abs(v - middle)).Median() / Normal.InvCDF(0, 1, 0.75);
+            double spread = values.Select(v => Math.Abs(v - middle)).Median() / NormalDistribution.Quantile(0.75);
             for (int i = 0; i < values.Length && spread > 0; i++)
                 outlying[i] = Math.Max(outlying[i], Math.Abs(values[i] - middle) / spread);
         }

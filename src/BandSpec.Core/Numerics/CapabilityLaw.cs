@@ -30,10 +30,10 @@ internal static class CapabilityLaw
     /// </summary>
     public static double AtLeast(double y, double index, double offCentre, double n, double degreesOfFreedom)
     {
-        double root = Math.Sqrt(n), xi = Math.Abs(offCentre), slack = 3 * (index - y) + xi;
-        double largest = y > 0 ? slack / (3 * y) : double.PositiveInfinity;
-        return MeanAndSpread.Probability(degreesOfFreedom, new(-1, largest),
-            new(-root * (slack + xi), 3 * y * root), new(root * (slack - xi), -3 * y * root));
+        double root = Math.Sqrt(n), xi = Math.Abs(offCentre), b = 3 * index + xi;
+        double largest = y > 0 ? b / (3 * y) : double.PositiveInfinity;
+        return MeanAndSpread.Probability(degreesOfFreedom, new(0, largest),
+            new(-root * (b + xi), 3 * y * root), new(root * (b - xi), -3 * y * root));
     }
 
     /// <summary>

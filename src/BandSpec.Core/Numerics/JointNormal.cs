@@ -26,7 +26,8 @@ internal static class JointNormal
         if (u == 0)
             return NormalDistribution.FractionBetween(truth.Intersect(reading).Standardize(mean, sigma));
 
-        Interval measured(double t) => reading.Standardize(mean + sigma * t, u);
+        Interval offset = new(reading.Lower - mean, reading.Upper - mean);
+        Interval measured(double t) => offset.Standardize(sigma * t, u);
         double logIntegrand(double t) => NormalDistribution.LogDensity(t) + NormalDistribution.LogFractionBetween(measured(t));
         double integrand(double t) => NormalDistribution.Density(t) * NormalDistribution.FractionBetween(measured(t));
 

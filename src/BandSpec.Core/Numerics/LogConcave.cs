@@ -13,6 +13,9 @@ internal static class LogConcave
     /// <summary>How far below its peak, in natural logarithm, the integrand is followed: e^−42 is 6e-19.</summary>
     private const double Depth = 42;
 
+    /// <summary>Halvings that lead from the widest range to the narrowest peak a double can hold apart.</summary>
+    private const int StepLimit = 200;
+
     /// <summary>
     /// <c>∫ f dx</c> over a finite range, given f and its logarithm (which may be less exact, and negative infinity where f is 0).
     /// Eight equal pieces, and around each step of f further cuts two step widths apart, with 16 nodes on every piece.
@@ -32,11 +35,13 @@ internal static class LogConcave
         return new(Edge(concave, level, peak, range.Lower), Edge(concave, level, peak, range.Upper));
     }
 
-    private static double Edge(Func<double, double> concave, double level, double inside, double outside)
+    /// <summary>Where the function falls through the level, rounded outward by at most a tenth of the distance from the peak.</summary>
+    private static double Edge(Func<double, double> concave, double level, double peak, double outside)
     {
         if (concave(outside) >= level)
             return outside;
-        for (int step = 0; step < 40; step++)
+        double inside = peak;
+        for (int step = 0; step < StepLimit && Math.Abs(outside - inside) > 0.1 * Math.Abs(outside - peak); step++)
         {
             double middle = (inside + outside) / 2;
             if (concave(middle) >= level)
@@ -44,30 +49,35 @@ internal static class LogConcave
             else
                 outside = middle;
         }
+
         return outside;
     }
 
-    /// <summary>Golden-section search; 60 steps narrow the range by a factor 3e12.</summary>
+    /// <summary>
+    /// Golden-section search. It ends when all four places differ by less than 2 in logarithm: the peak, being concave, then is at most a few
+    /// above them, which is all that the depth asks for.
+    /// </summary>
     private static double Peak(Func<double, double> concave, Interval range)
     {
         const double Golden = 0.6180339887498949;
         (double low, double high) = range;
         double left = high - Golden * (high - low), right = low + Golden * (high - low);
-        double atLeft = concave(left), atRight = concave(right);
-        for (int step = 0; step < 60; step++)
+        (double atLow, double atLeft, double atRight, double atHigh) = (concave(low), concave(left), concave(right), concave(high));
+        for (int step = 0; step < StepLimit && !(Math.Max(atLeft, atRight) - Math.Min(atLow, atHigh) < 2); step++)
         {
             if (atLeft < atRight)
             {
-                (low, left, atLeft) = (left, right, atRight);
+                (low, atLow, left, atLeft) = (left, atLeft, right, atRight);
                 atRight = concave(right = low + Golden * (high - low));
             }
             else
             {
-                (high, right, atRight) = (right, left, atLeft);
+                (high, atHigh, right, atRight) = (right, atRight, left, atLeft);
                 atLeft = concave(left = high - Golden * (high - low));
             }
         }
-        return concave(range.Lower) >= atLeft ? range.Lower : concave(range.Upper) >= atLeft ? range.Upper : left;
+
+        return new[] { (atLow, low), (atLeft, left), (atRight, right), (atHigh, high) }.Max().Item2;
     }
 
     private static List<double> Cuts(Interval support, ReadOnlySpan<SmoothStep> steps)
@@ -84,6 +94,7 @@ internal static class LogConcave
                     cuts.Add(cut);
             }
         }
+
         cuts.Sort();
         return cuts;
     }

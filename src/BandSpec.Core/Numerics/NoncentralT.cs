@@ -14,11 +14,11 @@ internal static class NoncentralT
 
     /// <summary><c>P(T ≤ t)</c>.</summary>
     public static double Cumulative(double t, double degreesOfFreedom, double noncentrality) =>
-        MeanAndSpread.Probability(degreesOfFreedom, AnySpread, Line.Lowest, new(t - noncentrality, t));
+        MeanAndSpread.Probability(degreesOfFreedom, AnySpread, Line.Lowest, new(-noncentrality, t));
 
     /// <summary><c>P(T &gt; t)</c>, not as a difference from 1.</summary>
     public static double UpperTail(double t, double degreesOfFreedom, double noncentrality) =>
-        MeanAndSpread.Probability(degreesOfFreedom, AnySpread, new(t - noncentrality, t), Line.Highest);
+        MeanAndSpread.Probability(degreesOfFreedom, AnySpread, new(-noncentrality, t), Line.Highest);
 
     /// <summary>The t with <c>P(T ≤ t) = p</c>, for 0 &lt; p &lt; 1; relative error about 1e-12, less near t = 0.</summary>
     public static double Quantile(double p, double degreesOfFreedom, double noncentrality) =>

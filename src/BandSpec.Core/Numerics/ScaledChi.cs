@@ -1,32 +1,43 @@
 namespace BandSpec.Core.Numerics;
 
 /// <summary>
-/// The law of <c>d = s/σ − 1</c>, how far a sample standard deviation s with ν degrees of freedom lies from the true σ, relatively:
-/// <c>ν·(1 + d)²</c> is chi-square. Counting from 1 keeps the digits of large samples, whose s hardly differs from σ. ν ≥ 1.
+/// The law of <c>x = s/σ</c>, a sample standard deviation over the true one, with ν ≥ 1 degrees of freedom: <c>ν·x²</c> is chi-square. Its
+/// argument is <c>d = x − origin</c>, so that large samples, whose x hardly differs from 1, keep the digits of the difference.
 /// </summary>
-internal static class ScaledChi
+/// <remarks>
+/// Density <c>2·(ν/2)^(ν/2)·e^(−ν/2)/Γ(ν/2) · x^(ν−1)·e^(−ν(x²−1)/2)</c>. With Stirling's remainder μ the factor in front is <c>√(ν/π)·e^(−μ(ν/2))</c>, and
+/// near x = 1 the exponent is <c>ν·((ln(1+d) − d) − d²/2)</c>: neither has large terms that cancel.
+/// </remarks>
+internal readonly struct ScaledChi
 {
-    /// <summary>
-    /// Density <c>2·(ν/2)^(ν/2)·e^(−ν/2)/Γ(ν/2) · x^(ν−1)·e^(−ν(x²−1)/2)</c> at x = 1 + d; 0 for d ≤ −1.
-    /// </summary>
-    public static double Density(double d, double degreesOfFreedom) => Math.Exp(LogDensity(d, degreesOfFreedom));
+    private readonly double nu;
+    private readonly double logFactor;
 
-    /// <summary>Logarithm of <see cref="Density"/>.</summary>
-    /// <remarks>
-    /// <c>a^a·e^(−a)/Γ(a) = √(a/2π)·e^(−μ(a))</c> with Stirling's remainder μ, and <c>ln x − (x²−1)/2 = (ln(1+d) − d) − d²/2</c>: neither
-    /// has large terms that cancel.
-    /// </remarks>
-    public static double LogDensity(double d, double degreesOfFreedom)
+    /// <summary>The law for <paramref name="degreesOfFreedom"/> ≥ 1.</summary>
+    public ScaledChi(double degreesOfFreedom)
     {
-        if (d <= -1)
-            return double.NegativeInfinity;
-        double nu = degreesOfFreedom, exponent = Elementary.LogOnePlusMinus(d) - d * d / 2;
-        return Math.Log(nu / Math.PI) / 2 - StirlingRemainder(nu / 2) + nu * exponent - Elementary.LogOnePlus(d);
+        nu = degreesOfFreedom;
+        logFactor = Math.Log(nu / Math.PI) / 2 - StirlingRemainder(nu / 2);
+        Origin = nu < 100 ? 0 : 1;
     }
 
+    /// <summary>Where d is counted from: 0 below 100 degrees of freedom, where small x matter, else 1.</summary>
+    public double Origin { get; }
+
     /// <summary>The range of d outside which the density underflows.</summary>
-    public static Interval Range(double degreesOfFreedom) =>
-        new(Math.Max(-1, -Math.Sqrt(760 / degreesOfFreedom)), Math.Sqrt(2 * 760 / degreesOfFreedom));
+    public Interval Range => new(Math.Max(0, 1 - Math.Sqrt(760 / nu)) - Origin, 1 + Math.Sqrt(2 * 760 / nu) - Origin);
+
+    /// <summary>Density at <c>x = origin + d</c>; 0 at x = 0 unless ν = 1.</summary>
+    public double Density(double d) => Math.Exp(LogDensity(d));
+
+    /// <summary>Logarithm of <see cref="Density"/>.</summary>
+    public double LogDensity(double d)
+    {
+        if (Origin == 1)
+            return logFactor + nu * (Elementary.LogOnePlusMinus(d) - d * d / 2) - Elementary.LogOnePlus(d);
+        double power = nu == 1 ? 0 : (nu - 1) * Math.Log(d);
+        return logFactor + power - nu * (d - 1) * (d + 1) / 2;
+    }
 
     /// <summary>
     /// Stirling's remainder <c>μ(a) = ln Γ(a) − (a − ½)·ln a + a − ½·ln 2π</c> for a ≥ ½; absolute error below 3e-16.

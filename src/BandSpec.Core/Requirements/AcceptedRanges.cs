@@ -75,6 +75,18 @@ public static class AcceptedRanges
     /// <summary>Length of an ageing test.</summary>
     public static AcceptedRange AgeingTest { get; } = new(1, 100_000, "h");
 
+    /// <summary>Units, lots or readings that statistics rest on.</summary>
+    public static AcceptedRange SampleSize { get; } = new(1, 1e9, "");
+
+    /// <summary>Standard error of a variance.</summary>
+    public static AcceptedRange VarianceError { get; } = new(0, 1e5, "(%FS)²");
+
+    /// <summary>Covariance of estimated means.</summary>
+    public static AcceptedRange MeanCovariance { get; } = new(-1e4, 1e4, "(%FS)²");
+
+    /// <summary>Confidence of a claim.</summary>
+    public static AcceptedRange Confidence { get; } = new(0.5, 0.999, "");
+
     /// <summary>Readings averaged at a point.</summary>
     public static AcceptedRange ReadingsAveraged { get; } = new(1, 10_000, "");
 

@@ -31,6 +31,12 @@ public sealed class Application
         return Checked<Application>.Of(findings, () => new Application(requirement, platform, station));
     }
 
+    /// <summary>The same application with another platform, known to fit as the first one did.</summary>
+    internal Application With(Platform platform) => new(Requirement, platform, Station);
+
+    /// <summary>The same application with another requirement, known to fit as the first one did.</summary>
+    internal Application With(Requirement requirement) => new(requirement, Platform, Station);
+
     /// <summary>The findings of every rule that can be judged of what was read.</summary>
     /// <param name="requirement">The requirement as far as it was read.</param>
     /// <param name="platform">The platform as far as it was read.</param>

@@ -23,6 +23,9 @@ internal static class CrossRules
             JudgeHeld(held, requirement, platform, findings);
         if (requirement.Compensation is { } scope && station.PressurePoints is { } points)
             JudgePoints(scope, platform, points, findings);
+        findings.Require(
+            requirement.Capability?.Confidence is null || platform.RawError is null || platform.Sample is not null, "capability.confidence", "no-sample",
+            "the platform does not say what its statistics rest on", "a platform with `sample`, or no confidence");
         if (requirement.Compensation?.Pinned is { } pinned)
             PinnedPlanRules.JudgeWith(pinned, platform, findings);
         TestUncertainty.Judge(requirement, platform, station, findings);

@@ -41,6 +41,9 @@ public sealed record Platform
 
     /// <summary>Drift with time and temperature.</summary>
     public required Ageing Ageing { get; init; }
+
+    /// <summary>What the statistics rest on; <see langword="null"/> when nobody wrote it down, and then they are taken as exact.</summary>
+    public PlatformSample? Sample { get; init; }
 }
 
 /// <summary>A mean and a standard deviation over production.</summary>

@@ -44,12 +44,15 @@ public sealed record PlatformParts
     /// <summary>See <see cref="Platform.Ageing"/>.</summary>
     public Ageing? Ageing { get; init; }
 
+    /// <summary>See <see cref="Platform.Sample"/>.</summary>
+    public PlatformSample? Sample { get; init; }
+
     /// <summary>All parts of a whole platform.</summary>
     internal static PlatformParts Of(Platform whole) => new()
     {
         Name = whole.Name, Revision = whole.Revision, Temperature = whole.Temperature, Pressure = whole.Pressure, RawError = whole.RawError,
         Correlations = whole.Correlations, ZeroDegree = whole.ZeroDegree, SpanDegree = whole.SpanDegree,
         PressureHysteresis = whole.PressureHysteresis, ThermalHysteresis = whole.ThermalHysteresis, Repeatability = whole.Repeatability,
-        Ageing = whole.Ageing,
+        Ageing = whole.Ageing, Sample = whole.Sample,
     };
 }

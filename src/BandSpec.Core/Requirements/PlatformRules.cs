@@ -26,6 +26,8 @@ internal static class PlatformRules
         findings.InRange("repeatability", platform.Repeatability, AcceptedRanges.Spread);
         if (platform.Ageing is { } ageing)
             JudgeAgeing(ageing, findings);
+        if (platform.Sample is { } sample)
+            PlatformSampleRules.Judge(sample, platform.RawError, findings);
     }
 
     private static void JudgePressure(PressureRating rating, FileFindings findings)

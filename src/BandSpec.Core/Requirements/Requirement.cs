@@ -73,7 +73,17 @@ public sealed record DwellBin(Temperature From, Temperature To, Duration Dwell);
 /// <summary>The capability indices that the design band has to reach.</summary>
 /// <param name="Sample"><c>C_s</c>, judged on the spread within a lot; usually 1.67, five sigma (common practice).</param>
 /// <param name="LongRun"><c>C_l</c>, judged on the spread over lots; usually 1.33, four sigma (common practice).</param>
-public sealed record CapabilityTarget(double Sample, double LongRun);
+public sealed record CapabilityTarget(double Sample, double LongRun)
+{
+    /// <summary>
+    /// One-sided confidence with which both have to be reached, given the sample that the platform's statistics rest on;
+    /// <see langword="null"/> to take the statistics as exact.
+    /// </summary>
+    public double? Confidence { get; init; }
+
+    /// <summary>Both indices raised by a factor.</summary>
+    internal CapabilityTarget Raised(double factor) => this with { Sample = factor * Sample, LongRun = factor * LongRun };
+}
 
 /// <summary>A term whose limit is fixed by the customer.</summary>
 /// <param name="Term">The key of the term, such as <c>pressure-hysteresis</c>, or the name of a further term.</param>

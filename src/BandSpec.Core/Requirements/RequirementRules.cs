@@ -28,6 +28,7 @@ internal static class RequirementRules
         findings.InRange("safety-factor", requirement.SafetyFactor, AcceptedRanges.SafetyFactor);
         findings.InRange("capability.sample", requirement.Capability?.Sample, AcceptedRanges.Capability);
         findings.InRange("capability.long-run", requirement.Capability?.LongRun, AcceptedRanges.Capability);
+        findings.InRange("capability.confidence", requirement.Capability?.Confidence, AcceptedRanges.Confidence);
         if (requirement.FurtherTerms is { } further)
             TermRules.Judge(further, requirement.HeldTerms ?? [], findings);
         findings.InRange("test.guard-band", requirement.Test?.GuardBand, AcceptedRanges.GuardBand);

@@ -21,6 +21,9 @@ public sealed record Specification
     /// <summary>Its band.</summary>
     public required BandMap Bands { get; init; }
 
+    /// <summary>What can be claimed of the margin; <see langword="null"/> when the platform does not say what its statistics rest on.</summary>
+    public MarginBound? Bound { get; init; }
+
     /// <summary>What a perfect correction would leave.</summary>
     public required BandFloor Floor { get; init; }
 
@@ -36,6 +39,9 @@ public sealed record Specification
     /// <summary>The points of the verification test.</summary>
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
 
-    /// <summary>Whether the plan keeps the allowed error with the stated capability everywhere.</summary>
-    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere;
+    /// <summary>
+    /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.
+    /// </summary>
+    public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere
+        && (Application.Requirement.Capability.Confidence is null || Bound is not { Lower: < 1 });
 }

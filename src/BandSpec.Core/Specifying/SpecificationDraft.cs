@@ -9,6 +9,9 @@ namespace BandSpec.Core.Specifying;
 /// <summary>The main story: from an application to its finished specification.</summary>
 public static class SpecificationDraft
 {
+    /// <summary>The confidence of the bound that is shown beside the margin when none is asked for.</summary>
+    private const double UsualConfidence = 0.95;
+
     /// <summary>
     /// Chooses the compensation plan, works out its band, shares out the allowed error and derives the test limits. That no plan fits is an
     /// answer like any other: see <see cref="Specification.Feasible"/>. A plan that the requirement pins is judged as given.
@@ -22,7 +25,7 @@ public static class SpecificationDraft
         Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
-        PlanChoice optimum = PlanChoosing.Choose(application, progress, cancellation);
+        PlanChoice optimum = ConfidentChoice.Of(application, asked => PlanChoosing.Choose(asked, progress, cancellation));
         PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
         BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
@@ -32,6 +35,7 @@ public static class SpecificationDraft
             Choice = choice,
             Optimum = optimum,
             Bands = bands,
+            Bound = MarginBound.Of(application, choice.Plan, bands, application.Requirement.Capability.Confidence ?? UsualConfidence),
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),
             Allocation = allocation,

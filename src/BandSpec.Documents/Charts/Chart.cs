@@ -45,7 +45,7 @@ internal abstract record Chart
     /// <summary>The title of an upright axis, level, over its upper end.</summary>
     protected static void TitleAbove(ChartPen pen, PlotModel plot, Axis axis, string title) =>
         Note(
-            pen, new(plot.PlotBounds.Left, Math.Min(axis.ScreenMin.Y, axis.ScreenMax.Y) - 6), title, HorizontalAlignment.Left,
+            pen, new(plot.PlotBounds.Left, Math.Min(axis.ScreenMin.Y, axis.ScreenMax.Y) - 8), title, HorizontalAlignment.Left,
             VerticalAlignment.Bottom, ChartStyle.Soft);
 
     /// <summary>The title of a level axis, below its figures, at its right end.</summary>

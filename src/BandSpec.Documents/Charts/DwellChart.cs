@@ -31,11 +31,10 @@ internal sealed record DwellChart(string Across, string Up, IReadOnlyList<DwellB
     {
         upright.Key = key;
         plot.Axes.Add(upright);
-        var bars = new RectangleBarSeries
-        {
-            YAxisKey = key, FillColor = ChartStyle.Frame, StrokeColor = ChartStyle.White, StrokeThickness = 0.8
-        };
-        foreach (var bin in bins) bars.Items.Add(new RectangleBarItem(bin.From, 0, bin.To, bin.Share));
+        // A gap parts the bars: an edge would hide one that is only a line high.
+        double Gap(DwellBin bin) => Math.Min(0.002 * (bins[^1].To - bins[0].From), 0.1 * (bin.To - bin.From));
+        var bars = new RectangleBarSeries { YAxisKey = key, FillColor = ChartStyle.Frame, StrokeThickness = 0 };
+        foreach (var bin in bins) bars.Items.Add(new RectangleBarItem(bin.From + Gap(bin), 0, bin.To - Gap(bin), bin.Share));
         plot.Series.Add(bars);
     }
 
@@ -46,10 +45,12 @@ internal sealed record DwellChart(string Across, string Up, IReadOnlyList<DwellB
         foreach (var bin in bins)
         {
             double left = across.Transform(bin.From), right = across.Transform(bin.To);
-            if (Typeface.Of(Face.Regular).Width(bin.Label, ChartStyle.LabelSize) < right - left - 2)
-                Note(
-                    pen, new((left + right) / 2, up.Transform(bin.Share) - 2), bin.Label, HorizontalAlignment.Center,
-                    VerticalAlignment.Bottom, ChartStyle.Ink);
+            var width = Typeface.Of(Face.Regular).Width(bin.Label, ChartStyle.LabelSize);
+            if (width > right - left - 2) continue;
+            var top = up.Transform(bin.Share);
+            // White behind the figure, so that no grid line strikes it through.
+            pen.Fill(KeyEntry.Box(new((left + right - width) / 2 - 1, top - 5.5), 4, width + 2), ChartStyle.White, null);
+            Note(pen, new((left + right) / 2, top - 2), bin.Label, HorizontalAlignment.Center, VerticalAlignment.Bottom, ChartStyle.Ink);
         }
     }
 

@@ -42,10 +42,11 @@ internal static class LimitsLayouts
         ("format", "bandspec/limits/1"),
         ("specification", ViewForTemplates.Of(view.Identity)),
         ("feasible", view.Verdict.Feasible), ("standing", view.Standing),
-        ("guard_band", Plain(view.Test.GuardBand, view)), ("sample_criterion", Plain(view.Test.Sample, view)),
+        ("decision_rule", ViewForTemplates.Script(("guard_band", Plain(view.Test.GuardBand, view)))),
+        ("sample_criterion", Plain(view.Test.Sample, view)),
         ("long_run_criterion", Plain(view.Test.LongRun, view)),
         ("pressure_unit", view.Range.Unit), ("output_unit", view.Output.Unit),
-        ("points", ViewForTemplates.List(view.Points.Select(ViewForTemplates.Of))));
+        ("points", ViewForTemplates.List(view.Points.Select(p => ViewForTemplates.Of(p, view.Range.Unit, view.Output.Unit)))));
 
     private static string Plain(string shown, PrintView view) => shown.Replace(view.DecimalSign, ".", StringComparison.Ordinal);
 }

@@ -49,7 +49,7 @@ internal sealed class InputViews(Requirement requirement, string sign)
 
     public string Hours => Given(Math.Round(TotalHours, 3));
 
-    public string Years => Rounded.Nearest(TotalHours / HoursPerYear, 1).Shown(sign);
+    public string Years => Given(Math.Round(TotalHours / HoursPerYear, 1));
 
     public RangeView Range(Platform platform)
     {

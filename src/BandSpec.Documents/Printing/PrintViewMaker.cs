@@ -26,6 +26,16 @@ internal sealed class PrintViewMaker
 
     private IReadOnlyList<RegionView> Regions { get; }
 
+    // The point of least margin may lie anywhere: its pressure is told to three figures of the span.
+    private int PressureDecimals
+    {
+        get
+        {
+            var (lower, upper) = (_requirement.Pressure.At(0).Value, _requirement.Pressure.At(1).Value);
+            return Math.Clamp(2 - (int)Math.Floor(Math.Log10(upper - lower)), 0, 6);
+        }
+    }
+
     public PrintView Make(IReadOnlyList<DigestView> inputs, string program, string standing)
     {
         var inputViews = new InputViews(_requirement, _sign);
@@ -61,8 +71,8 @@ internal sealed class PrintViewMaker
             allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
             allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
             Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
-            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, 6))),
-            Shown(Rounded.Given(band.Worst.Temperature.Celsius)));
+            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, PressureDecimals))),
+            Shown(Rounded.Given(Math.Round(band.Worst.Temperature.Celsius, 1))));
     }
 
     private ProfileView Profile(InputViews inputs)

@@ -21,11 +21,13 @@ internal static class ViewForTemplates
 
     public static ScriptObject Of(StayView s) => Script(("temperature", s.Temperature), ("pressures", s.Pressures), ("count", s.Count));
 
-    /// <summary>A verification point for the page (figures as shown) or for a test system (figures plain).</summary>
-    public static ScriptObject Of(PointView p) => Script(
-        ("id", p.Id), ("temperature", p.Temperature.Plain), ("pressure", p.Pressure.Plain), ("pressure_fraction", p.PressureFraction.Plain),
+    /// <summary>A verification point for a test system: its figures are plain, with a point and a hyphen whatever the language.</summary>
+    public static ScriptObject Of(PointView p, string pressureUnit, string outputUnit) => Script(
+        ("id", p.Id), ("temperature", p.Temperature.Plain), ("pressure", p.Pressure.Plain), ("pressure_unit", pressureUnit),
+        ("pressure_fraction", p.PressureFraction.Plain),
         ("direction", p.Direction),
-        ("nominal", p.Nominal.Plain), ("lower", p.Lower.Plain), ("upper", p.Upper.Plain), ("tolerance", p.Tolerance.Plain),
+        ("nominal", p.Nominal.Plain), ("lower", p.Lower.Plain), ("upper", p.Upper.Plain), ("output_unit", outputUnit),
+        ("tolerance", p.Tolerance.Plain),
         ("guard_band", p.GuardBand.Plain),
         ("uncertainty", p.Uncertainty.Plain), ("consumer_risk", p.ConsumerRisk.Plain), ("producer_risk", p.ProducerRisk.Plain));
 
@@ -48,7 +50,8 @@ internal static class ViewForTemplates
         ("lower", r.Lower), ("upper", r.Upper), ("unit", r.Unit), ("reference", r.Reference), ("proof", r.Proof), ("burst", r.Burst));
 
     private static ScriptObject Of(SignalView s) => Script(
-        ("kind", s.Kind), ("at_lower", s.AtLower), ("at_upper", s.AtUpper), ("unit", s.Unit), ("supply", s.Supply), ("resolution", s.Resolution));
+        ("kind", s.Kind), ("at_lower", s.AtLower), ("at_upper", s.AtUpper), ("unit", s.Unit), ("supply", s.Supply),
+        ("resolution", s.Resolution));
 
     private static ScriptObject Of(TemperatureView t) => Script(("lower", t.Lower), ("upper", t.Upper), ("reference", t.Reference));
 

@@ -14,6 +14,10 @@ internal static class DesignForms
     private static readonly Key<double> LongRun = new(
         "long-run", new NumberForm(AcceptedRanges.Capability), "Cpk judged on the spread over lots; usually 1.33, four sigma.");
 
+    private static readonly Key<double> Confidence = Key.Optional<double>(
+        "confidence", new NumberForm(AcceptedRanges.Confidence),
+        "Confidence with which the plan has to reach the capability, given the sample that the platform rests on; left out, its figures count as exact.");
+
     private static readonly Key<TemperatureDifference> CandidateStep = new(
         "candidate-step", QuantityForms.Difference, "Step of the candidate temperatures.");
 
@@ -60,7 +64,8 @@ internal static class DesignForms
 
     /// <summary>The form of <c>capability</c>.</summary>
     internal static MapForm<CapabilityTarget> Capability { get; } = new(
-        "the capability to reach", [Sample, LongRun], v => new CapabilityTarget(v.Of(Sample), v.Of(LongRun)));
+        "the capability to reach", [Sample, LongRun, Confidence],
+        v => new CapabilityTarget(v.Of(Sample), v.Of(LongRun)) { Confidence = v.FindValue(Confidence) });
 
     /// <summary>The form of <c>compensation</c>.</summary>
     internal static MapForm<CompensationScope> Compensation { get; } = new(

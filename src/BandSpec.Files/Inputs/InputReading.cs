@@ -13,11 +13,17 @@ public static class InputReading
     /// <param name="missing">
     /// The letters of a text that no document can show; <see langword="null"/> when none is going to be written.
     /// </param>
+    /// <param name="changes">Values to be read as if they were written otherwise; <see langword="null"/> for none.</param>
+    /// <exception cref="FormatException">A change has no value to replace.</exception>
     public static InputSet Read(
-        InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null)
+        InputContent requirement, Func<string, InputContent> open, Func<string, IReadOnlyList<string>>? missing = null,
+        IReadOnlyList<InputChange>? changes = null)
     {
         ArgumentNullException.ThrowIfNull(open);
-        return Read(requirement, (_, path) => open(path), missing);
+        InputContent Changed(InputFile kind, InputContent content) =>
+            (changes ?? []).Where(change => change.File == kind).Aggregate(content, (before, change) => change.In(before));
+        return Read(
+            Changed(InputFile.Requirement, requirement), (kind, path) => Changed(kind, open(path)), missing);
     }
 
     /// <summary>Reads the three files and checks all their rules; which file is asked for is told by its kind too.</summary>

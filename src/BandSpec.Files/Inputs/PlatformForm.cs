@@ -53,17 +53,19 @@ internal static class PlatformForm
     private static readonly Key<PercentOfSpan> Repeatability = new(
         "repeatability", QuantityForms.Error, "Standard deviation of a reading repeated under the same conditions.");
     private static readonly Key<Ageing> Ageing = new("ageing", AgeingForm.Form, "Drift with time and temperature.");
+    private static readonly Key<PlatformSample> Sample = Key.Optional<PlatformSample>(
+        "sample", SampleForm.Form, "What the statistics rest on; without it they are taken as exact.");
 
     /// <summary>The form.</summary>
     internal static MapForm<PlatformParts> Form { get; } = new(
-        "a platform", [Family, Range, Rating, Raw, Correction, PressureHysteresis, ThermalHysteresis, Repeatability, Ageing],
+        "a platform", [Family, Range, Rating, Raw, Correction, PressureHysteresis, ThermalHysteresis, Repeatability, Ageing, Sample],
         v => new PlatformParts
         {
             Name = v.Find(Family)?.Name, Revision = v.Find(Family)?.Revision, Temperature = v.Find(Range), Pressure = v.Find(Rating),
             RawError = v.Find(Raw)?.Coefficients, Correlations = v.Find(Raw)?.Correlations,
             ZeroDegree = v.Find(Correction)?.Zero, SpanDegree = v.Find(Correction)?.Span,
             PressureHysteresis = v.Find(PressureHysteresis), ThermalHysteresis = v.Find(ThermalHysteresis),
-            Repeatability = v.FindValue(Repeatability), Ageing = v.Find(Ageing),
+            Repeatability = v.FindValue(Repeatability), Ageing = v.Find(Ageing), Sample = v.Find(Sample),
         },
         isLenient: true);
 
@@ -73,7 +75,7 @@ internal static class PlatformForm
         Name = parts.Name!, Revision = parts.Revision!, Temperature = parts.Temperature!, Pressure = parts.Pressure!,
         RawError = parts.RawError!, Correlations = parts.Correlations!, ZeroDegree = parts.ZeroDegree!.Value, SpanDegree = parts.SpanDegree!.Value,
         PressureHysteresis = parts.PressureHysteresis!, ThermalHysteresis = parts.ThermalHysteresis!,
-        Repeatability = parts.Repeatability!.Value, Ageing = parts.Ageing!,
+        Repeatability = parts.Repeatability!.Value, Ageing = parts.Ageing!, Sample = parts.Sample,
     };
 }
 

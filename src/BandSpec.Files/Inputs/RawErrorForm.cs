@@ -27,7 +27,8 @@ internal static class RawErrorForm
             shape.Word, new ListForm<WrittenCoefficient>("coefficients", Coefficient, 0, 9), [],
             $"Coefficients of the shape {shape.Word} by degree in temperature."))];
 
-    private static readonly PatternForm<CoefficientName> Name = new(
+    /// <summary>A coefficient's name.</summary>
+    internal static PatternForm<CoefficientName> Name { get; } = new(
         "a coefficient's name: shape and degree, such as `zero.1`", @"(zero|span|bow|s-shape)\.([0-9])", NameOf);
 
     private static readonly Key<IReadOnlyList<CoefficientName>> Between = new(

@@ -28,6 +28,26 @@ internal static class Locating
         return extent;
     }
 
+    /// <summary>The node at a path; null when there is none.</summary>
+    internal static YamlNode? Value(YamlNode root, string path)
+    {
+        YamlNode node = root;
+        while (path.Length > 0)
+        {
+            (YamlNode Node, Extent Extent, int Length)? step = node switch
+            {
+                MapNode map => IntoMap(map, path, atKey: false),
+                ListNode list => IntoList(list, path),
+                _ => null,
+            };
+            if (step is not { } taken)
+                return null;
+            node = taken.Node;
+            path = path[taken.Length..].TrimStart('.');
+        }
+        return node;
+    }
+
     private static (YamlNode Node, Extent Extent, int Length)? IntoMap(MapNode map, string path, bool atKey)
     {
         MapEntry? entry = map.Entries

@@ -25,10 +25,13 @@ internal sealed class SourceText
     internal string Line(int number) => number >= 1 && number <= Lines.Count ? Lines[number - 1] : "";
 
     /// <summary>Decodes a file. What keeps it from being read is added to the findings; the text is then not to be read.</summary>
-    internal static SourceText Decode(ReadOnlySpan<byte> bytes, FoundFaults faults)
+    /// <param name="bytes">The file's bytes.</param>
+    /// <param name="faults">Where findings go.</param>
+    /// <param name="largest">The most bytes that are read.</param>
+    internal static SourceText Decode(ReadOnlySpan<byte> bytes, FoundFaults faults, int largest = LargestFile)
     {
-        if (bytes.Length > LargestFile)
-            return Refuse(faults, "file-size", $"the file has {bytes.Length} bytes", $"at most {LargestFile} bytes");
+        if (bytes.Length > largest)
+            return Refuse(faults, "file-size", $"the file has {bytes.Length} bytes", $"at most {largest} bytes");
         if (bytes.StartsWith((ReadOnlySpan<byte>)[0xFE, 0xFF]) || bytes.StartsWith((ReadOnlySpan<byte>)[0xFF, 0xFE]) || bytes.Contains((byte)0))
             return Refuse(faults, "encoding", "the file is not UTF-8, it looks like UTF-16 or a binary file", "save it as UTF-8");
         if (bytes.StartsWith(Encoding.UTF8.Preamble))

@@ -8,17 +8,22 @@ namespace BandSpec.Tests.Characterizing;
 /// <summary>Readings of units drawn from known statistics, in the plainest way: no formula is shared with what is tested.</summary>
 internal sealed class SimulatedFamily(Platform truth, int seed)
 {
-    private static readonly double[] Visits = [25, -40, -10, 25, 60, 95, 125, 25];
-    private static readonly (double X, PressureDirection Direction)[] Strokes =
-    [
-        (0, PressureDirection.Rising), (0.5, PressureDirection.Rising), (1, PressureDirection.Rising),
-        (0.5, PressureDirection.Falling), (0, PressureDirection.Falling),
-    ];
-
     private readonly Random random = new(seed);
 
     /// <summary>The part of readings that were not taken, at random.</summary>
     public double Gaps { get; init; }
+
+    /// <summary>Chamber settings in the order in which they are visited; a unit comes from 25 °C.</summary>
+    public IReadOnlyList<double> Visits { get; init; } = [25, -40, -10, 25, 60, 95, 125, 25];
+
+    /// <summary>Pressures of a stroke, rising; the falling ones are the same without the last.</summary>
+    public IReadOnlyList<double> Pressures { get; init; } = [0, 0.5, 1];
+
+    /// <summary>What is added to a unit's error at a reduced temperature: a spoiled unit.</summary>
+    public Func<string, double, double> Spoiling { get; init; } = (_, _) => 0;
+
+    /// <summary>By how much a unit's readings scatter more than the family's.</summary>
+    public Func<string, double> Scatter { get; init; } = _ => 1;
 
     public IReadOnlyList<UnitReading> Readings(int lots, int unitsInLot)
     {
@@ -40,12 +45,13 @@ internal sealed class SimulatedFamily(Platform truth, int seed)
         double before = 25;
         foreach (double celsius in Visits)
         {
-            foreach ((double x, PressureDirection direction) in Strokes)
+            double tau = (celsius - truth.Temperature.Reference.Celsius) / 100;
+            foreach ((double x, PressureDirection direction) in Strokes())
             {
-                double error = Curve(coefficients, x, (celsius - truth.Temperature.Reference.Celsius) / 100);
+                double error = Curve(coefficients, x, tau) + Spoiling(name, tau);
                 error += (direction == PressureDirection.Falling ? 1 : -1) * pressure / 2 * 4 * x * (1 - x);
                 error += Math.Sign(before - celsius) * (celsius == 25 ? thermal : 0);
-                error += truth.Repeatability.Percent * Normal();
+                error += truth.Repeatability.Percent * Scatter(name) * Normal();
                 if (random.NextDouble() >= Gaps)
                     yield return new UnitReading
                     {
@@ -57,6 +63,9 @@ internal sealed class SimulatedFamily(Platform truth, int seed)
             before = celsius;
         }
     }
+
+    private IEnumerable<(double X, PressureDirection Direction)> Strokes() =>
+        [.. Pressures.Select(x => (x, PressureDirection.Rising)), .. Pressures.SkipLast(1).Reverse().Select(x => (x, PressureDirection.Falling))];
 
     /// <summary>Coefficients about their means, correlated as the platform says, by the square root of the covariance.</summary>
     private double[] Draw(double[] mean, double[] sigma)

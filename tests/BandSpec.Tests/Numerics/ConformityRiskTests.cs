@@ -19,12 +19,11 @@ public sealed class ConformityRiskTests
             Interval tolerance = new(end(row[3]), end(row[4])), acceptance = new(end(row[5]), end(row[6]));
             ConformityRisks risks = ConformityRisk.Of(row[0], row[1], row[2], tolerance, acceptance);
             string what = string.Join(' ', row[..7]);
-            // At a mean of 1500 the limits' own rounding, 1e-13 of a step of u, is what the two sides may differ by.
-            double allowed = row[0] == 1500 ? 2e-12 : 1e-13;
-            Close.Relative(row[7], risks.Consumer, allowed, $"consumer {what}");
-            Close.Relative(row[8], risks.Producer, allowed, $"producer {what}");
-            Close.Relative(row[9], risks.Acceptance, allowed, $"accepted {what}");
-            Close.Relative(row[10], risks.Conformance, allowed, $"conforming {what}");
+            const double Allowed = 1e-13;
+            Close.Relative(row[7], risks.Consumer, Allowed, $"consumer {what}");
+            Close.Relative(row[8], risks.Producer, Allowed, $"producer {what}");
+            Close.Relative(row[9], risks.Acceptance, Allowed, $"accepted {what}");
+            Close.Relative(row[10], risks.Conformance, Allowed, $"conforming {what}");
         }
     }
 

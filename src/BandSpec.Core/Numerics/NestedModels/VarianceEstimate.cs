@@ -21,7 +21,7 @@ internal readonly record struct VarianceEstimate(double Variance, double Samplin
     {
         if (!double.IsFinite(StandardError) || !(Freedom > 0))
             return new Interval(0, double.PositiveInfinity);
-        double square = Variance + Sampling, freedom = Freedom, tail = (1 - confidence) / 2, sampling = Sampling;
+        double square = Variance + Sampling, freedom = Math.Max(1, Freedom), tail = (1 - confidence) / 2, sampling = Sampling;
         double Root(double quantile) => Math.Sqrt(Math.Max(0, (square * freedom / ChiSquared.Quantile(quantile, freedom)) - sampling));
         return new Interval(Root(1 - tail), Root(tail));
     }

@@ -9,6 +9,9 @@ namespace BandSpec.Core.Numerics.NestedModels;
 internal sealed record VarianceEstimates(
     IReadOnlyList<VarianceEstimate> Within, IReadOnlyList<VarianceEstimate> Between, VarianceEstimate Residual)
 {
+    /// <summary>A variance below this part of its standard error is one that the search left a hair above zero.</summary>
+    private const double Negligible = 1e-4;
+
     /// <summary>
     /// The uncertainty of a fit's variances, found with the correlations set aside: the variance of an estimated variance hardly depends on them
     /// (for complete readings not at all), while their own number would swamp a small sample.
@@ -27,7 +30,8 @@ internal sealed record VarianceEstimates(
         double[] unitSampling = Sampling(within, point.Lots.SelectMany(lot => lot.Units).Select(unit => unit.Summary.Triangle.Gram()));
         double[] lotSampling = Sampling(between, point.Lots.Select(lot => lot.Precision));
         int size = within.Length;
-        VarianceEstimate Of(double variance, double sampling, double error) => new(variance * square, sampling * square, error * square);
+        VarianceEstimate Of(double variance, double sampling, double error) =>
+            new(variance > Negligible * error ? variance * square : 0, sampling * square, error * square);
         return new VarianceEstimates(
             [.. Enumerable.Range(0, size).Select(j => Of(within[j], unitSampling[j], errors[j]))],
             [.. Enumerable.Range(0, size).Select(j => Of(between[j], lotSampling[j], errors[size + j]))],

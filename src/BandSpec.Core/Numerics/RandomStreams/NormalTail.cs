@@ -1,5 +1,3 @@
-using System.Runtime.Intrinsics;
-
 namespace BandSpec.Core.Numerics.RandomStreams;
 
 /// <summary>
@@ -30,29 +28,13 @@ internal static class NormalTail
         double q = 0.5 - tail;
         if (Math.Abs(q) <= 0.425)
             return q * NormalQuantileRationals.Central(0.180625 - (q * q));
-        double r = Math.Sqrt(-Log(q > 0 ? tail : 1 - tail));
+        double r = Math.Sqrt(-PortableFunctions.Log(q > 0 ? tail : 1 - tail));
         double z = r <= 5 ? NormalQuantileRationals.Middle(r - 1.6) : NormalQuantileRationals.Far(r - 5);
         return q > 0 ? z : -z;
     }
 
     /// <summary>The density <c>φ(z) = e^(−z²/2)/√(2π)</c>.</summary>
-    public static double Density(double z) => InverseRootOfTwoPi * Exp(-z * z / 2);
-
-    /// <summary>
-    /// <c>e^x</c> for <c>−740 &lt; x &lt; 700</c>: <c>2^k·e^r</c> with <c>|r| ≤ ½ ln 2</c> by its Taylor series of degree 13, relative error below
-    /// 2e-15 over the range used; underflows to 0.
-    /// </summary>
-    public static double Exp(double x)
-    {
-        double k = Math.Floor((x * 1.44269504088896338700) + 0.5);
-        double r = (x - (k * 6.93147180369123816490e-01)) - (k * 1.90821492927058770002e-10);
-        double sum = 1;
-        for (int n = 13; n >= 1; n--)
-            sum = 1 + (r * sum / n);
-        return Math.ScaleB(sum, (int)k);
-    }
-
-    private static double Log(double x) => LaneFunctions.Log(Vector512.Create(x)).ToScalar();
+    public static double Density(double z) => InverseRootOfTwoPi * PortableFunctions.Exp(-z * z / 2);
 
     private static double Series(double z)
     {

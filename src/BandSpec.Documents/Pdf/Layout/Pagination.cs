@@ -35,6 +35,8 @@ internal sealed class Pagination
 
     private void Place(Slab slab)
     {
+        // Room after something is no room before the next thing once a page lies between.
+        if (AtTop && slab.Marks.Count == 0) return;
         var before = AtTop ? 0 : slab.Before;
         if (_y + before + slab.Height > _page.Bottom)
         {

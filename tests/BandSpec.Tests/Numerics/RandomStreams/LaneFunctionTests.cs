@@ -10,7 +10,7 @@ public sealed class LaneFunctionTests
 {
     [Fact]
     public void The_logarithm_agrees_with_the_c_library() =>
-        Gen.Double[1e-300, 1e300].Select(Gen.Double[-300.0, 300.0]).Sample((_, power) =>
+        Gen.Double[-300.0, 300.0].Sample(power =>
         {
             double x = Math.Pow(10, power);
             double own = LaneFunctions.Log(Vector512.Create(x)).ToScalar();
@@ -72,5 +72,5 @@ public sealed class LaneFunctionTests
 
     [Fact]
     public void The_exponential_agrees_with_the_c_library() =>
-        Gen.Double[-700.0, 700.0].Sample(x => Assert.Equal(1, NormalTail.Exp(x) / Math.Exp(x), 1e-14));
+        Gen.Double[-700.0, 700.0].Sample(x => Assert.Equal(1, PortableFunctions.Exp(x) / Math.Exp(x), 1e-14));
 }

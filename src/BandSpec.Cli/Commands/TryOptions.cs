@@ -1,0 +1,60 @@
+using System.CommandLine;
+using BandSpec.Cli.Trying;
+using BandSpec.Core.VirtualLots;
+using BandSpec.Files.Inputs;
+
+namespace BandSpec.Cli.Commands;
+
+/// <summary>Argument and options of <c>bandspec try</c>.</summary>
+internal sealed class TryOptions
+{
+    private readonly Argument<string> file = new("FILE") { Description = "The requirement file; platform and station are found from there." };
+    private readonly Option<string> units = new("--units") { Description = "Units to make, such as 1e6; rounded up to whole lots.", DefaultValueFactory = _ => "1e6", HelpName = "N" };
+    private readonly Option<int> lotSize = new("--lot-size") { Description = "Units in a lot, 16 to 100000.", DefaultValueFactory = _ => 400, HelpName = "N" };
+    private readonly Option<ulong> seed = new("--seed") { Description = "Root of all chance.", DefaultValueFactory = _ => 1UL, HelpName = "N" };
+    private readonly Option<string?> part = new("--part") { Description = "Make one part only and write it to a file.", HelpName = "K/N" };
+    private readonly Option<string[]> set = new("--set") { Description = "Read a value as if it were written otherwise; may be given several times.", HelpName = "PATH=VALUE" };
+    private readonly Option<int> threads = new("--threads") { Description = "Threads; one for each processor when left out.", HelpName = "N" };
+    private readonly Option<string?> root = CommonOptions.Root();
+
+    /// <summary>A value to be tried over a range.</summary>
+    public Option<string?> Sweep { get; } = new("--sweep") { Description = "Try a value over a range, with common random numbers.", HelpName = "PATH=FROM..TO:STEP" };
+
+    /// <summary>Where the result is written for gathering.</summary>
+    public Option<string?> Out { get; } = new("--out") { Description = "File for the part; NUMBER-REVISION.part-K-of-N.json when left out.", HelpName = "FILE" };
+
+    /// <summary>Output for machines.</summary>
+    public Option<bool> Json { get; } = CommonOptions.Json();
+
+    /// <summary>No output but findings.</summary>
+    public Option<bool> Quiet { get; } = CommonOptions.Quiet();
+
+    /// <summary>Adds all of them to the command.</summary>
+    public void AddTo(Command command)
+    {
+        command.Add(file);
+        foreach (Option option in new Option[] { units, lotSize, seed, part, Out, set, Sweep, threads, Json, Quiet, root })
+            command.Add(option);
+    }
+
+    /// <summary>What a command line asks for.</summary>
+    /// <exception cref="FormatException">An option is not written as it should be.</exception>
+    public TryRequest RequestOf(ParseResult parsed)
+    {
+        LotOrder order;
+        try
+        {
+            order = LotOrder.For(TryRequest.UnitsOf(parsed.GetValue(units)!), parsed.GetValue(lotSize), parsed.GetValue(seed));
+        }
+        catch (ArgumentOutOfRangeException)
+        {
+            throw new FormatException("a lot has 16 to 100000 units");
+        }
+        if (parsed.GetValue(part) is { } text)
+            order = TryRequest.PartOf(order, text);
+        int wanted = parsed.GetValue(threads);
+        return new TryRequest(
+            parsed.GetRequiredValue(file), parsed.GetValue(root), [.. (parsed.GetValue(set) ?? []).Select(InputChange.Parse)], order,
+            wanted > 0 ? wanted : Environment.ProcessorCount);
+    }
+}

@@ -1,0 +1,100 @@
+using BandSpec.Core.Findings;
+
+namespace BandSpec.Files.Readings;
+
+/// <summary>What a column of readings holds.</summary>
+internal enum ReadingColumn
+{
+    Serial,
+    Point,
+    Temperature,
+    Pressure,
+    Direction,
+    Reading,
+    Lot,
+    Date,
+}
+
+/// <summary>A column's place in the file and the unit its heading names in brackets; empty when it names none.</summary>
+internal readonly record struct PlacedColumn(int Index, string Heading, string Unit);
+
+/// <summary>Which column is which, found by heading in any order.</summary>
+internal sealed class ReadingColumns
+{
+    private static readonly (ReadingColumn Column, string[] Headings)[] Accepted =
+    [
+        (ReadingColumn.Serial, ["serial", "serial-number", "serial-no", "sn", "unit", "unit-id"]),
+        (ReadingColumn.Point, ["point", "point-id", "id", "test-point"]),
+        (ReadingColumn.Temperature, ["temperature", "temp", "t", "chamber-temperature"]),
+        (ReadingColumn.Pressure, ["pressure", "p", "applied-pressure"]),
+        (ReadingColumn.Direction, ["direction", "dir"]),
+        (ReadingColumn.Reading, ["reading", "output", "value", "measured"]),
+        (ReadingColumn.Lot, ["lot", "batch", "lot-number"]),
+        (ReadingColumn.Date, ["date", "day", "time", "timestamp", "date-time"]),
+    ];
+
+    private readonly Dictionary<ReadingColumn, PlacedColumn> columns = [];
+
+    private ReadingColumns(IReadOnlyList<string> headings) => Headings = headings;
+
+    /// <summary>The headings as they stand in the file.</summary>
+    public IReadOnlyList<string> Headings { get; }
+
+    /// <summary>Headings that mean nothing here; their columns are not read.</summary>
+    public List<string> Unused { get; } = [];
+
+    /// <summary>The column of a kind; <see langword="null"/> when the file has none.</summary>
+    public PlacedColumn? this[ReadingColumn column] => columns.TryGetValue(column, out PlacedColumn placed) ? placed : null;
+
+    /// <summary>Finds the columns; what is missing or doubled is found too.</summary>
+    public static (ReadingColumns Columns, IReadOnlyList<Finding> Findings) Of(IReadOnlyList<string> headings)
+    {
+        var found = new ReadingColumns(headings);
+        List<Finding> findings = [];
+        for (int i = 0; i < headings.Count; i++)
+        {
+            (string name, string unit) = Split(headings[i]);
+            if (Accepted.FirstOrDefault(entry => entry.Headings.Contains(name)) is not { Headings: not null } known)
+                found.Unused.Add(headings[i]);
+            else if (!found.columns.TryAdd(known.Column, new(i, headings[i], unit)))
+                findings.Add(new(FieldPath.InReadings(headings[i]), "double-column",
+                    $"two columns for the {Word(known.Column)}: `{found.columns[known.Column].Heading}` and `{headings[i]}`", "one of them"));
+        }
+
+        findings.AddRange(found.MissingColumns());
+        return (found, findings);
+    }
+
+    private IEnumerable<Finding> MissingColumns()
+    {
+        if (this[ReadingColumn.Serial] is null)
+            yield return Missing(ReadingColumn.Serial);
+        if (this[ReadingColumn.Reading] is null)
+            yield return Missing(ReadingColumn.Reading);
+        if (this[ReadingColumn.Point] is null && (this[ReadingColumn.Temperature] is null || this[ReadingColumn.Pressure] is null))
+            yield return Missing(ReadingColumn.Point) with
+            {
+                Accepted = $"a column {Names(ReadingColumn.Point)}, or columns for temperature and pressure",
+            };
+    }
+
+    private Finding Missing(ReadingColumn column) => new(
+        FieldPath.InReadings(""), "missing-column", $"no column for the {Word(column)} among {string.Join(", ", Headings.Select(h => $"`{h}`"))}",
+        $"a column {Names(column)}")
+    {
+        Nearest = Accepted[(int)column].Headings.FirstOrDefault(name => Unused.Exists(heading => Spelling.Nearest(Split(heading).Name, [name]) is not null)),
+    };
+
+    private static string Names(ReadingColumn column) => string.Join(", ", Accepted[(int)column].Headings.Select(name => $"`{name}`"));
+
+    private static string Word(ReadingColumn column) => column == ReadingColumn.Serial ? "serial number" : column.ToString().ToLowerInvariant();
+
+    /// <summary>Name and unit of <c>Reading [mV]</c> or <c>reading (mV)</c>: lower case, blanks and underscores as hyphens.</summary>
+    private static (string Name, string Unit) Split(string heading)
+    {
+        int open = heading.AsSpan().IndexOfAny('[', '('), close = heading.AsSpan().LastIndexOfAny(']', ')');
+        string unit = open > 0 && close > open ? heading[(open + 1)..close].Trim() : "";
+        string name = (open > 0 ? heading[..open] : heading).Trim().ToLowerInvariant().Replace(' ', '-').Replace('_', '-');
+        return (name, unit);
+    }
+}

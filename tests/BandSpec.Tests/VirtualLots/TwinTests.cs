@@ -1,0 +1,50 @@
+using BandSpec.Core.Requirements;
+using BandSpec.Core.Specifying;
+using BandSpec.Core.VirtualLots;
+using Xunit;
+
+namespace BandSpec.Tests.VirtualLots;
+
+/// <summary>
+/// The closed form against virtual lots. About 3,300 figures are compared, most of them strongly correlated with their neighbours; were they
+/// independent, a right pair would pass four standard errors in all of them with probability 0.8. The seed is fixed, so a pass stays one.
+/// </summary>
+public sealed class TwinTests
+{
+    private const double Limit = 4;
+
+    [Fact]
+    public void Closed_form_and_virtual_lots_agree() => Agree(Given.Application(), 400_000);
+
+    [Fact]
+    public void They_agree_with_four_reference_pressures_a_falling_current_and_a_one_sided_profile() =>
+        Agree(
+            Given.Application(
+                Given.Requirement with
+                {
+                    Output = new OutputSignal(SignalKind.Current, "mA", 20, 4, null, 0.002, null),
+                    Profile = [new DwellBin(Given.C(120), Given.C(150), Core.Quantities.Duration.FromHours(20000))],
+                },
+                station: Given.Station with { PressurePoints = new PressureLists([0, 0.25, 0.5, 1], [0, 1]) }),
+            200_000);
+
+    [Fact]
+    public void Another_gradient_than_the_closed_form_was_told_is_noticed()
+    {
+        Specification specification = SpecificationDraft.Draft(Given.Application());
+        LotSubject other = LotSubject.Of(specification) with { Station = Given.Station with { SoakGradient = Given.K(0.5) } };
+        LotResult made = LotRun.Make(other, LotOrder.For(100_000, 400, 1), 2);
+        LotResult claimed = LotResult.From(LotSubject.Of(specification), made.Order, made.Ranges, made.Figures);
+        Assert.True(LotReport.Of(specification, claimed).Twins.Max(t => t.Difference) > 10);
+    }
+
+    private static void Agree(Application application, long units)
+    {
+        Specification specification = SpecificationDraft.Draft(application);
+        LotResult result = LotRun.Make(LotSubject.Of(specification), LotOrder.For(units, 400, 1), 2);
+        LotReport report = LotReport.Of(specification, result);
+        Assert.True(report.Twins.Count > 2000);
+        Twin worst = report.Twins.MaxBy(t => Math.Abs(t.Difference))!;
+        Assert.True(Math.Abs(worst.Difference) <= Limit, $"{worst}");
+    }
+}
