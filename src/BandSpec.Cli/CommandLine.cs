@@ -59,6 +59,8 @@ internal static class CommandLine
         root.Add(CompareCommand.Create(terminal));
         root.Add(ReleaseCommand.Create(terminal));
         root.Add(VerifyCommand.Create(terminal));
+        root.Add(JudgeCommand.Create(terminal));
+        root.Add(SampleCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
         root.Add(TryCommand.Create(terminal));
         root.Add(GatherCommand.Create(terminal));

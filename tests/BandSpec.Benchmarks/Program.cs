@@ -3,10 +3,14 @@ using BandSpec.Tests.Characterizing;
 
 // One process, one run: figures of different runs on a shared machine cannot be compared, ratios within a run can.
 string argument = args.Length > 1 ? args[1] : "";
+string root = argument.Length > 0 ? argument : ".";
 switch (args.FirstOrDefault())
 {
     case "lots":
-        LotBenchmark.Run(Demos.Draft(argument.Length > 0 ? argument : ".", "brine-reinjection"));
+        LotBenchmark.Run(Demos.Draft(root, "brine-reinjection"), root);
+        return 0;
+    case "rare":
+        RareBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
         return 0;
     case "characterize":
         return CharacterizingSpeed.Run(int.TryParse(argument, out int seconds) ? seconds : 900);
@@ -19,7 +23,8 @@ switch (args.FirstOrDefault())
         return 0;
     default:
         Console.Error.WriteLine("""
-            usage: BandSpec.Benchmarks lots [ROOT]               units made a second
+            usage: BandSpec.Benchmarks lots [ROOT]               units made a second beside a NumPy twin
+                   BandSpec.Benchmarks rare [ROOT]               the estimate of a rare event
                    BandSpec.Benchmarks characterize [SECONDS]    the nested model against lme4, which is given so many seconds
                    BandSpec.Benchmarks coverage [REPETITIONS]    how often the intervals of a characterization hold the truth
                    BandSpec.Benchmarks readings FOLDER           writes the demo readings

@@ -53,8 +53,8 @@ internal static class CompareCommand
 
     private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
     {
-        using SearchBar bar = new(terminal, application.Requirement.Identity.FolderName);
-        Specification specification = SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SearchBar.Over(
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
         cancellation.ThrowIfCancellationRequested();
         return specification;
     }

@@ -75,7 +75,7 @@ internal static class DraftCommand
         if (quiet)
             return;
         if (drafts.Count > 1)
-            terminal.Out.Write(DraftScreen.SummaryOf(drafts, terminal.Ink));
+            terminal.Out.Write(DraftSummary.Of(drafts, terminal.Ink));
         else if (drafts[0] is { Specification: { } specification, Package: { } package })
             terminal.Out.Write(DraftScreen.Of(specification, package, terminal.Ink));
         else if (drafts[0] is { State: DraftState.UpToDate, Package: { } kept })

@@ -2,7 +2,6 @@ using BandSpec.Cli.Opening;
 using BandSpec.Cli.Printing;
 using BandSpec.Cli.Versioning;
 using BandSpec.Core.Findings;
-using BandSpec.Core.Planning;
 using BandSpec.Files.Inputs;
 using BandSpec.Files.Releases;
 
@@ -69,8 +68,7 @@ internal sealed class DraftBatch(Terminal terminal, DraftRun run, int workers, C
     {
         if (one.Ended is { } ended)
             return ended;
-        using SearchBar? bar = isOnly ? new SearchBar(terminal, Path.GetFileNameWithoutExtension(one.File.Name)) : null;
-        return Guarded(one.File, () => run.Run(one.File.Name, one.Inputs!, one.Released, bar, cancellation), failed => failed);
+        return Guarded(one.File, () => run.Run(one.File.Name, one.Inputs!, one.Released, isOnly, cancellation), failed => failed);
     }
 
     private T Guarded<T>(NamedFile file, Func<T> work, Func<Draft, T> orElse)

@@ -1,8 +1,8 @@
 using BandSpec.Cli.Opening;
+using BandSpec.Cli.Printing;
 using BandSpec.Cli.Releasing;
 using BandSpec.Cli.Storing;
 using BandSpec.Core.Findings;
-using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Documents;
@@ -35,7 +35,12 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
     }
 
     /// <summary>Drafts a requirement that was read; only what differs from the package that is there is computed again.</summary>
-    public Draft Run(string file, InputSet inputs, ReleaseRecord? released, IProgress<SearchProgress>? progress, CancellationToken cancellation)
+    /// <param name="file">The requirement as the user named it.</param>
+    /// <param name="inputs">What was read.</param>
+    /// <param name="released">The release record up to this revision; null for a draft.</param>
+    /// <param name="isWatched">Whether the search has the screen for itself and shows how far it is.</param>
+    /// <param name="cancellation">Ends the search early.</param>
+    public Draft Run(string file, InputSet inputs, ReleaseRecord? released, bool isWatched, CancellationToken cancellation)
     {
         if (inputs.Application is not { } application)
             return new Draft(file, DraftState.Refused, inputs);
@@ -46,7 +51,10 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
             PackageFolder folder = FolderOf(application);
             if (StoredPackage.Read(folder.FullPath) is { } stored && stored.IsOf(source) && stored.Verdict() is { } verdict)
                 return draft with { Verdict = verdict, Package = new WrittenPackage(ShownFolder(application), stored.Names) };
-            Specification specification = SpecificationDraft.Draft(application, progress, cancellation);
+            Specification specification = isWatched
+                ? SearchBar.Over(
+                    terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation))
+                : SpecificationDraft.Draft(application, null, cancellation);
             IReadOnlyList<PackageFile> files = PackageContents.Of(specification, source);
             folder.Replace(files, terminal.Clock);
             return Written(draft, specification, files);

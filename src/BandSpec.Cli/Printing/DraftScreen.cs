@@ -6,6 +6,7 @@ using BandSpec.Core.Planning;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using Spectre.Console;
 
 namespace BandSpec.Cli.Printing;
 
@@ -32,52 +33,21 @@ internal static class DraftScreen
         return screen.Append('\n').ToString();
     }
 
-    /// <summary>One line for each of several drafts, and how many of each kind there are.</summary>
-    public static string SummaryOf(IReadOnlyList<Draft> drafts, Ink ink)
-    {
-        int width = drafts.Max(draft => CellWidth.Of(draft.File));
-        StringBuilder screen = new("\n");
-        foreach (Draft draft in drafts)
-            screen.Append(Plain, $"{draft.File}{new string(' ', width - CellWidth.Of(draft.File))}  {Outcome(draft, ink)}\n");
-        string[] counts =
-        [
-            .. from state in Enum.GetValues<DraftState>()
-               let count = drafts.Count(draft => draft.State == state)
-               where count > 0
-               select $"{count} {Word(state)}",
-        ];
-        return screen.Append(Plain, $"\n{ink.Bold(string.Join(", ", counts))}\n").ToString();
-    }
-
-    private static string Outcome(Draft draft, Ink ink) => draft switch
-    {
-        { Verdict: { } verdict, Package: { } package } =>
-            $"{Verdict(verdict.Feasible, ink)}  margin {Margin(verdict.Margin)}  {ink.Blue(package.Folder)}"
-            + (draft.State == DraftState.UpToDate ? "  up to date" : "") + (draft.Release is null ? "" : $"  {ink.Green("RELEASED")}"),
-        { State: DraftState.Refused } => ink.Red($"{draft.Findings.Count} finding{(draft.Findings.Count == 1 ? "" : "s")}"),
-        { State: DraftState.Failed } => ink.Red("failed"),
-        _ => ink.Faint(draft.Note ?? ""),
-    };
-
-    private static string Word(DraftState state) => state switch
-    {
-        DraftState.Refused => "with findings",
-        DraftState.UpToDate => "up to date",
-        DraftState.LeftOut => "left out",
-        _ => state.ToString().ToLowerInvariant(),
-    };
-
-    private static string Verdict(bool feasible, Ink ink) =>
-        feasible ? ink.Green("FEASIBLE    ") : ink.Red("NOT FEASIBLE");
-
     private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
     {
         BandNode worst = specification.Bands.Worst;
         Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
-        string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:G4} {pressure.Unit}");
-        screen.Append(Plain, $"{Verdict(specification.Feasible, ink).TrimEnd()}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
+        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red("NOT FEASIBLE"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
         screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
+        if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
+        {
+            string lots = sample.Lots == 1 ? "1 lot" : $"{sample.Lots} lots";
+            screen.Append(Plain, $"at least {Margin(bound.Lower)} with {100 * bound.Confidence:0.#} % confidence: the statistics rest on {sample.Units} units of {lots}\n");
+            if (specification.FurtherUnits is { } further)
+                screen.Append(Plain, $"{ink.Yellow($"{further} more units measured, in lots of the same size, would raise that to 1")}\n");
+        }
         if (!specification.Feasible && specification.Floor.Bound < 1)
             screen.Append(Plain, $"{ink.Yellow("no plan can help: what compensation cannot remove fills the band by itself")}\n");
         screen.Append('\n');
@@ -94,27 +64,30 @@ internal static class DraftScreen
 
     private static void AppendRegions(StringBuilder screen, Specification specification, Ink ink)
     {
-        int decimals = Decimals(specification.Application.Requirement.Rounding.Band.Percent);
-        string format = $"F{decimals}";
-        screen.Append(Plain, $"{ink.Bold("Band")}      {ink.Faint("°C                  allowed   band  typical   margin")}     %FS\n");
+        string format = $"F{Decimals(specification.Application.Requirement.Rounding.Band.Percent)}";
+        Table table = new Table().SimpleBorder().AddColumns("Band, %FS", "allowed", "maximum", "typical", "margin");
+        for (int i = 1; i < table.Columns.Count; i++)
+            table.Columns[i].RightAligned();
         foreach (RegionBand region in specification.Bands.Regions)
-        {
-            string range = $"{region.From.Celsius.ToString(Plain),5} to {region.To.Celsius.ToString(Plain),-5}";
-            string margin = Margin(region.Margin);
-            screen.Append(Plain, $"          {range,-18}")
-                .Append(region.AllowedTightest.Percent.ToString(format, Plain).PadLeft(9))
-                .Append(region.Stated.Percent.ToString(format, Plain).PadLeft(7))
-                .Append(region.Typical.Percent.ToString(format, Plain).PadLeft(9))
-                .Append(Plain, $"{new string(' ', 9 - margin.Length)}{(region.Margin >= 1 ? margin : ink.Red(margin))}\n");
-        }
-        screen.Append('\n');
+            table.AddRow(
+                new Text(string.Create(Plain, $"{region.From.Celsius} to {region.To.Celsius} °C")),
+                Tables.Figure(region.AllowedTightest.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Stated.Percent.ToString(format, Plain)),
+                Tables.Figure(region.Typical.Percent.ToString(format, Plain)),
+                Tables.Figure(Margin(region.Margin), region.Margin < 1 ? Color.Red : null));
+        screen.Append(Tables.Of(table, ink)).Append('\n');
     }
 
-    private static void AppendProfile(StringBuilder screen, ProfileFigures profile, Ink ink) => screen.Append(
-        Plain, $"{ink.Bold("Over life")} rms error {profile.RmsError.Percent:0.000} %FS; outside the allowed error {profile.OutsideProbability * 1e6:0.###} ppm of the time; drift {profile.AgeFactor:0.00} times the ageing test's\n\n");
+    private static void AppendProfile(StringBuilder screen, ProfileFigures profile, Ink ink)
+    {
+        double parts = profile.OutsideProbability * 1e6;
+        string outside = parts < 0.001 ? "less than 0.001" : parts.ToString(parts < 1 ? "0.000" : "0.#", Plain);
+        screen.Append(Plain, $"{ink.Bold("Over life")} rms error {profile.RmsError.Percent:0.000} %FS; beyond the allowed error {outside} millionths of the time;\n");
+        screen.Append(Plain, $"          drift {profile.AgeFactor:0.00} times that of the ageing test\n\n");
+    }
 
     /// <summary>Cut, not rounded: a margin of 0.9996 is not 1.</summary>
-    private static string Margin(double margin) =>
+    internal static string Margin(double margin) =>
         double.IsFinite(margin) ? (Math.Floor((margin * 1000) + 1e-7) / 1000).ToString("0.000", Plain) : "\u221e";
 
     private static int Decimals(double step)

@@ -7,6 +7,9 @@ internal sealed class Ink(bool isColoured)
     /// <summary>No colour at all, for files and pipes.</summary>
     public static Ink None { get; } = new(false);
 
+    /// <summary>Whether escape sequences are wanted.</summary>
+    public bool IsColoured => isColoured;
+
     /// <summary>Something that is wrong.</summary>
     public string Red(string text) => Wrap("31;1", text);
 

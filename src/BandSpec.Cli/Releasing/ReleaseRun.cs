@@ -51,8 +51,8 @@ internal sealed class ReleaseRun(Terminal terminal, DraftRun run, string by)
 
     private Specification Solve(Application application, CancellationToken cancellation)
     {
-        using SearchBar bar = new(terminal, application.Requirement.Identity.FolderName);
-        Specification specification = SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SearchBar.Over(
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
         // A search that was ended early has an answer too, but not one to be frozen.
         cancellation.ThrowIfCancellationRequested();
         return specification;

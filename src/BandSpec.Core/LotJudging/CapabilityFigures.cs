@@ -3,7 +3,7 @@ using BandSpec.Core.Numerics;
 namespace BandSpec.Core.LotJudging;
 
 /// <summary>
-/// Capability of one characteristic by the normal law: Cp and Cpk from the scatter within lots, or Pp and Ppk from that of all values. Limits are
+/// Capability of one characteristic by the normal law: Cp and Cpk from the scatter within lots, or Pp and Ppk from that within and between them. Limits are
 /// two-sided, ±tolerance; an index is infinite when no value differs from another.
 /// </summary>
 /// <param name="Deviation">The standard deviation it is counted with, %FS.</param>

@@ -42,7 +42,10 @@ public sealed record CharacteristicJudgement
     /// <summary>Capability within lots, Cp and Cpk; <see langword="null"/> below two values, like all that follows from it.</summary>
     public CapabilityFigures? Within { get; init; }
 
-    /// <summary>Capability over all values, Pp and Ppk.</summary>
+    /// <summary>
+    /// Capability over lots, Pp and Ppk, from the scatter within lots and between them together. It differs from the plain standard deviation of
+    /// all values, which is too small by about one part in twice the number of lots when they differ.
+    /// </summary>
     public CapabilityFigures? Overall { get; init; }
 
     /// <summary>Capability over all values by percentiles.</summary>
@@ -109,7 +112,7 @@ internal static class CharacteristicJudging
         CapabilityFigures within = CapabilityFigures.Of(
             tally.All.Mean, Math.Sqrt(split.Within), split.WithinFreedom, split.WithinCount, tally.Tolerance);
         CapabilityFigures overall = CapabilityFigures.Of(
-            tally.All.Mean, Math.Sqrt(split.Overall), split.OverallFreedom, split.OverallCount, tally.Tolerance);
+            tally.All.Mean, Math.Sqrt(split.LongRun), split.LongRunFreedom, split.LongRunCount, tally.Tolerance);
         double[] sorted = [.. tally.Kept.Values.Order()], alike = judgement.Lots > 1 ? Alike(tally, sorted) : sorted;
         Normality? normalAlike = Normality.Of(alike), normalAll = Normality.Of(sorted);
         PercentileFigures free = PercentileFigures.Of(sorted, tally.Tolerance);

@@ -81,11 +81,17 @@ internal static class LanewiseLeastSquares
             target[i] = Vector512.FusedMultiplyAdd(minus, source[i], target[i]);
     }
 
-    private static Vector512<double> Dot(ReadOnlySpan<Vector512<double>> a, ReadOnlySpan<Vector512<double>> b)
+    /// <summary><c>Σ a_i b_i</c> in each lane, over two running sums so that one does not wait for the other.</summary>
+    public static Vector512<double> Dot(ReadOnlySpan<Vector512<double>> a, ReadOnlySpan<Vector512<double>> b)
     {
-        Vector512<double> sum = Vector512<double>.Zero;
-        for (int i = 0; i < a.Length && i < b.Length; i++)
-            sum = Vector512.FusedMultiplyAdd(a[i], b[i], sum);
-        return sum;
+        Vector512<double> even = Vector512<double>.Zero, odd = Vector512<double>.Zero;
+        int i = 0;
+        for (; i + 1 < a.Length && i + 1 < b.Length; i += 2)
+        {
+            even = Vector512.FusedMultiplyAdd(a[i], b[i], even);
+            odd = Vector512.FusedMultiplyAdd(a[i + 1], b[i + 1], odd);
+        }
+
+        return i < a.Length && i < b.Length ? Vector512.FusedMultiplyAdd(a[i], b[i], even) + odd : even + odd;
     }
 }

@@ -1,4 +1,5 @@
 using System.Runtime.Intrinsics;
+using BandSpec.Core.Numerics;
 using BandSpec.Core.Residuals;
 
 namespace BandSpec.Core.Planning;
@@ -20,11 +21,11 @@ internal sealed class CoefficientNoise
     private readonly Vector512<double>[] scaled;
     private readonly int[] degrees = new int[4];
 
-    public CoefficientNoise(int powers)
+    public CoefficientNoise(int powers, int entries)
     {
         stride = (2 * powers) - 1;
         polynomials = new Vector512<double>[Pairs.Length * stride];
-        scaled = new Vector512<double>[(2 * powers) + 2];
+        scaled = new Vector512<double>[entries];
     }
 
     /// <summary>Gathers the noise of a fit.</summary>
@@ -40,13 +41,11 @@ internal sealed class CoefficientNoise
         degrees[3] = form.HasSShape ? 0 : -1;
         for (int p = 0; p < Pairs.Length; p++)
             polynomials.AsSpan(p * stride, DegreeOf(Pairs[p]) + 1).Clear();
-        for (int i = 0; i < readings; i++)
-        {
-            for (int c = 0; c < form.Columns; c++)
-                scaled[c] = inverse[(c * readings) + i] * sigmas[i];
-            for (int p = 0; p < Pairs.Length; p++)
-                Gather(Pairs[p], polynomials.AsSpan(p * stride, stride));
-        }
+        for (int c = 0; c < form.Columns; c++)
+            for (int i = 0; i < readings; i++)
+                scaled[(c * readings) + i] = inverse[(c * readings) + i] * sigmas[i];
+        for (int p = 0; p < Pairs.Length; p++)
+            Gather(Pairs[p], polynomials.AsSpan(p * stride, stride), readings);
     }
 
     /// <summary>Adds the noise at a scaled temperature to a covariance.</summary>
@@ -54,12 +53,18 @@ internal sealed class CoefficientNoise
         Horner(0, at), Horner(1, at), Horner(2, at), Horner(3, at), Horner(4, at),
         Horner(5, at), Horner(6, at), Horner(7, at), Horner(8, at), Horner(9, at));
 
-    private void Gather(ShapePair pair, Span<Vector512<double>> target)
+    /// <summary>Covariances of the coefficients of two shapes; for one shape with itself each pair of different coefficients counts twice.</summary>
+    private void Gather(ShapePair pair, Span<Vector512<double>> target, int readings)
     {
         int first = StartOf(pair.First), second = StartOf(pair.Second);
+        bool isOne = pair.First == pair.Second;
         for (int k = 0; k <= degrees[pair.First]; k++)
-            for (int l = 0; l <= degrees[pair.Second]; l++)
-                target[k + l] = Vector512.FusedMultiplyAdd(scaled[first + k], scaled[second + l], target[k + l]);
+            for (int l = isOne ? k : 0; l <= degrees[pair.Second]; l++)
+            {
+                Vector512<double> covariance = LanewiseLeastSquares.Dot(
+                    scaled.AsSpan((first + k) * readings, readings), scaled.AsSpan((second + l) * readings, readings));
+                target[k + l] += isOne && l > k ? covariance + covariance : covariance;
+            }
     }
 
     private int StartOf(int shape)

@@ -20,8 +20,13 @@ internal sealed class PlanAscent(SearchTables tables, MarginScore margin, RmsSco
             foreach ((int zero, int span) in tables.Families.DegreesOf[count])
                 if (Climb(count, zero, span) is { } top)
                     tops.Add(top);
-        return Contest.Winner(tops, rmsFirst: false)
+        Contender best = Contest.Winner(tops, rmsFirst: false)
             ?? throw new InvalidOperationException("an application has at least one candidate plan that its readings determine");
+        var batch = new PlanBatch(best.List.Length, tables.NearestIn(best.List));
+        batch.Add(best.List);
+        fit.Load(batch);
+        fit.To(tables.RowsOf(best.Zero, best.Span));
+        return best with { Rms = rms.Of(fit, double.PositiveInfinity)[0] };
     }
 
     /// <summary>The plan that evenly spread temperatures lead to.</summary>
@@ -66,10 +71,10 @@ internal sealed class PlanAscent(SearchTables tables, MarginScore margin, RmsSco
                     batch.Add(list);
                 fit.Load(batch);
                 Vector512<double> determined = fit.To(tables.RowsOf(zero, span));
-                Vector512<double> score = margin.Of(fit, double.NegativeInfinity, ref row), error = rms.Of(fit, double.PositiveInfinity);
+                Vector512<double> score = margin.Of(fit, double.NegativeInfinity, ref row);
                 for (int lane = 0; lane < batch.Count; lane++)
                     if (determined.AsInt64()[lane] != 0)
-                        yield return new Contender(chunk[lane], zero, span, score[lane], error[lane]);
+                        yield return new Contender(chunk[lane], zero, span, score[lane], double.PositiveInfinity);
             }
     }
 }

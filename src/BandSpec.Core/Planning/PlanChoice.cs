@@ -15,6 +15,12 @@ public sealed record PlanChoice(CompensationPlan Plan, ChamberRun Run, long Plan
     /// <summary>How many plans were decided one by one before the answer was there, in the last exchange round.</summary>
     public required long PlansDecided { get; init; }
 
+    /// <summary>
+    /// How many plans were discarded in groups, by a proof that holds for all of a group; the rest of those considered costs more than the
+    /// choice.
+    /// </summary>
+    public required long PlansDiscarded { get; init; }
+
     /// <summary>Places between the design nodes at which an earlier choice fell short, and at which every plan was judged after that.</summary>
     public required IReadOnlyList<NodePlace> AddedNodes { get; init; }
 

@@ -39,7 +39,8 @@ internal static class PlanChoosing
             if (holds || !answer.Proven || round == MostRounds)
                 return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), search.PlanCount, answer.Proven && holds)
                 {
-                    PlansDecided = answer.Decided,
+                    PlansDecided = answer.Count.Decided,
+                    PlansDiscarded = answer.Count.Discarded,
                     AddedNodes = added,
                     ExchangeRounds = round,
                     Everywhere = everywhere,
@@ -62,6 +63,7 @@ internal static class PlanChoosing
         return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), optimum.PlansConsidered, optimum.Proven && isOptimum)
         {
             PlansDecided = optimum.PlansDecided,
+            PlansDiscarded = optimum.PlansDiscarded,
             AddedNodes = [.. Violated(everywhere, BandMap.Of(application, plan).Margin)],
             ExchangeRounds = 1,
             Everywhere = everywhere,

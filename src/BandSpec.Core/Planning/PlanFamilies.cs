@@ -147,7 +147,7 @@ internal sealed class PlanFamilies
     }
 
     /// <summary>Whether two candidates are at least the separation apart; decimal steps leave no doubt by 10⁻⁹ K.</summary>
-    private bool Apart(int colder, int hotter) => (Candidates[hotter] - Candidates[colder]).Kelvin >= scope.Separation.Kelvin - 1e-9;
+    public bool Apart(int colder, int hotter) => (Candidates[hotter] - Candidates[colder]).Kelvin >= scope.Separation.Kelvin - 1e-9;
 
     private IEnumerable<PlanFamily> FamiliesOf(Requirement requirement, Station station)
     {

@@ -21,6 +21,7 @@ internal sealed class PlanFit
     private readonly Vector512<double>[] triangle;
     private readonly Vector512<double>[] inverse;
     private readonly Vector512<double>[] coefficients;
+    private readonly Vector512<double>[] seen;
     private readonly int powers;
 
     public PlanFit(SearchTables tables)
@@ -32,13 +33,14 @@ internal sealed class PlanFit
         powers = 1 + Math.Max(tables.Raw.Names.Max(n => n.Degree), tables.Forms.Max(f => Math.Max(f.Form.ZeroDegree, f.Form.SpanDegree)));
         points = new FittedPoint[most];
         sigmas = new Vector512<double>[most];
+        seen = new Vector512<double>[most];
         scaledPowers = new Vector512<double>[temperatures * powers];
         tauPowers = new Vector512<double>[temperatures * powers];
         design = new Vector512<double>[most * columns];
         inverse = new Vector512<double>[most * columns];
         triangle = new Vector512<double>[columns * (columns + 1)];
         coefficients = new Vector512<double>[columns * tables.Forms.Max(f => f.Count)];
-        Noise = new CoefficientNoise(powers);
+        Noise = new CoefficientNoise(powers, columns * most);
     }
 
     /// <summary>How many readings each plan has.</summary>
@@ -131,19 +133,19 @@ internal sealed class PlanFit
     /// <summary><c>Q⁺y</c> for what the readings see of a row.</summary>
     private void FillCoefficients(int row)
     {
-        int columns = Rows.Form.Columns;
-        Span<Vector512<double>> target = coefficients.AsSpan(row * columns, columns);
-        target.Clear();
         int place = -1;
-        ShapeVector seen = default;
+        ShapeVector shapes = default;
         for (int i = 0; i < Readings; i++)
         {
             if (points[i].Place != place)
-                seen = SeenAt(row, place = points[i].Place);
-            Vector512<double> reading = seen.At(points[i].Pressure);
-            for (int c = 0; c < target.Length; c++)
-                target[c] = Vector512.FusedMultiplyAdd(inverse[(c * Readings) + i], reading, target[c]);
+                shapes = SeenAt(row, place = points[i].Place);
+            seen[i] = shapes.At(points[i].Pressure);
         }
+
+        int columns = Rows.Form.Columns;
+        ReadOnlySpan<Vector512<double>> readings = seen.AsSpan(0, Readings);
+        for (int c = 0; c < columns; c++)
+            coefficients[(row * columns) + c] = LanewiseLeastSquares.Dot(inverse.AsSpan(c * Readings, Readings), readings);
     }
 
     private ShapeVector SeenAt(int row, int place)

@@ -9,72 +9,80 @@ internal sealed class PlanRunner
     private readonly RmsScore rms;
     private readonly Heat heat;
     private readonly PlanFit fit;
-    private readonly PlanBatch[][] batches;
+    private readonly Dictionary<ListGroup, PlanBatch[]> batches = [];
     private int row;
-    private long plans;
+    private SearchCount count;
 
     public PlanRunner(SearchTables tables, RmsScore rms, Heat heat)
     {
         (this.tables, this.rms, this.heat) = (tables, rms, heat);
         fit = new PlanFit(tables);
-        int most = tables.Application.Requirement.Compensation.MostTemperatures;
-        batches = [.. Enumerable.Range(0, most + 1).Select(n => Enumerable.Range(0, n).Select(i => new PlanBatch(n, i)).ToArray())];
     }
 
-    /// <summary>Takes up the lists of a family with a second temperature, and decides all that fill a batch.</summary>
-    /// <returns>How many plans were decided.</returns>
-    public long Take(PlanFamily family, int second)
+    /// <summary>Takes up the lists of a share that no cut discards, and decides all that fill a batch.</summary>
+    /// <returns>How many plans were decided and discarded.</returns>
+    public SearchCount Take(ListGroup group, PlanFamily family, int second)
     {
-        tables.Families.ForEachList(family, second, Add);
-        return Decided();
+        if (!batches.TryGetValue(group, out PlanBatch[]? own))
+            batches.Add(group, own = [.. Enumerable.Range(0, family.Count).Select(i => new PlanBatch(family.Count, i))]);
+        var walk = new ListWalk(tables, family, group, list => Add(list, group, own));
+        walk.Through(second);
+        count += new SearchCount(0, walk.Discarded);
+        return Counted();
     }
 
     /// <summary>Decides what is left over in batches that were not filled.</summary>
-    /// <returns>How many plans were decided.</returns>
-    public long Finish()
+    /// <returns>How many plans were decided and discarded.</returns>
+    public SearchCount Finish()
     {
-        foreach (PlanBatch batch in batches.SelectMany(b => b).Where(b => b.Count > 0))
-            Decide(batch);
-        return Decided();
+        foreach ((ListGroup group, PlanBatch[] own) in batches)
+            foreach (PlanBatch batch in own.Where(b => b.Count > 0))
+                Decide(batch, group);
+        return Counted();
     }
 
-    private void Add(int[] list)
+    private void Add(int[] list, ListGroup group, PlanBatch[] own)
     {
-        PlanBatch batch = batches[list.Length][tables.NearestIn(list)];
+        PlanBatch batch = own[tables.NearestIn(list)];
         batch.Add(list);
         if (batch.IsFull)
-            Decide(batch);
+            Decide(batch, group);
     }
 
-    private void Decide(PlanBatch batch)
+    private void Decide(PlanBatch batch, ListGroup group)
     {
         fit.Load(batch);
-        foreach ((int zero, int span) in tables.Families.DegreesOf[batch.Temperatures])
-        {
-            plans += batch.Count;
-            Vector512<double> determined = fit.To(tables.RowsOf(zero, span));
-            Vector512<double> least = Vector512.Create(heat.LeastMargin);
-            Vector512<double> margin = heat.Margin.Of(fit, least[0], ref row);
-            Vector512<double> passes = Vector512.GreaterThanOrEqual(margin, least) & determined;
-            if (passes != Vector512<double>.Zero)
-                Enter(batch, zero, span, passes, margin);
-        }
-
+        count += new SearchCount(batch.Count, 0);
+        Vector512<double> determined = fit.To(group.Rows);
+        Vector512<double> least = Vector512.Create(heat.LeastMargin);
+        Vector512<double> margin = heat.Margin.Of(fit, least[0], ref row);
+        Vector512<double> passes = Vector512.GreaterThanOrEqual(margin, least) & determined;
+        if (passes.AsInt64() != Vector512<long>.Zero)
+            Enter(batch, group, passes, margin);
         batch.Clear();
     }
 
-    private void Enter(PlanBatch batch, int zero, int span, Vector512<double> passes, Vector512<double> margin)
+    private void Enter(PlanBatch batch, ListGroup group, Vector512<double> passes, Vector512<double> margin)
     {
         Vector512<double> error = rms.Of(fit, heat.MostRms);
         for (int lane = 0; lane < batch.Count; lane++)
             if (passes.AsInt64()[lane] != 0 && error[lane] <= heat.MostRms)
-                heat.Enter(new Contender([.. batch[lane]], zero, span, margin[lane], error[lane]));
+                heat.Enter(new Contender([.. batch[lane]], group.Form.Zero, group.Form.Span, margin[lane], error[lane]));
     }
 
-    private long Decided()
+    private SearchCount Counted()
     {
-        long decided = plans;
-        plans = 0;
-        return decided;
+        SearchCount counted = count;
+        count = default;
+        return counted;
     }
+}
+
+/// <summary>How many plans a search has dealt with.</summary>
+/// <param name="Decided">Decided one by one.</param>
+/// <param name="Discarded">Discarded by cuts, in groups.</param>
+internal readonly record struct SearchCount(long Decided, long Discarded)
+{
+    /// <summary>Both together.</summary>
+    public static SearchCount operator +(SearchCount a, SearchCount b) => new(a.Decided + b.Decided, a.Discarded + b.Discarded);
 }

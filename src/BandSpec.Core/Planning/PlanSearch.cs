@@ -4,24 +4,24 @@ using BandSpec.Core.Requirements;
 namespace BandSpec.Core.Planning;
 
 /// <summary>How far a search has come.</summary>
-/// <param name="Done">Plans decided so far.</param>
-/// <param name="Total">Plans to be decided at most; a search may end early with a proof.</param>
+/// <param name="Done">Plans decided or discarded so far.</param>
+/// <param name="Total">Plans there are; a search may end early with a proof.</param>
 public readonly record struct SearchProgress(long Done, long Total);
 
 /// <summary>
-/// Finds the best plan among all candidates and proves it, by looking at every plan that could be better: whole cost levels in rising order
-/// for the cheapest, everything for the other objectives. The answer does not depend on the number of threads.
+/// The searches of one application. Each finds the best plan of some families and proves it: every plan is looked at, or discarded by a cut
+/// that proves it not good enough. No result depends on the number of threads.
 /// </summary>
 internal sealed class PlanSearch
 {
-    private const double Feasible = 1;
     private readonly IProgress<SearchProgress>? progress;
     private readonly int threads;
-    private long done;
+    private readonly Lock gate = new();
+    private SearchCount count;
 
     /// <summary>Prepares the searches of an application.</summary>
     /// <param name="application">The application.</param>
-    /// <param name="progress">Is told how far the search has come; may be <see langword="null"/>.</param>
+    /// <param name="progress">Is told how far a search has come, from several threads; may be <see langword="null"/>.</param>
     /// <param name="threads">How many threads may be used; −1 for one a processor.</param>
     public PlanSearch(Application application, IProgress<SearchProgress>? progress = null, int threads = -1)
     {
@@ -46,47 +46,30 @@ internal sealed class PlanSearch
     /// <param name="cancellation">Ends the search early; the best plan met so far is then returned.</param>
     public SearchAnswer Run(PlanObjective objective, IReadOnlyList<NodePlace> added, CancellationToken cancellation = default)
     {
-        var margin = new MarginScore(Tables, added);
-        done = 0;
-        Contender? winner = objective switch
-        {
-            PlanObjective.LeastCost => Cheapest(margin, cancellation),
-            PlanObjective.LeastError => Best(Tables.Families.All, new Heat(margin, Feasible, rmsFirst: true), cancellation),
-            _ => null,
-        };
-        if (!cancellation.IsCancellationRequested)
-            winner ??= Best(Tables.Families.All, new Heat(margin, double.NegativeInfinity, rmsFirst: false), cancellation);
-        winner ??= new PlanAscent(Tables, margin, Rms).Climb();
-        return new SearchAnswer(winner, Interlocked.Read(ref done), !cancellation.IsCancellationRequested);
-    }
-
-    /// <summary>The cheapest feasible plan: the first cost level, from the cheapest up, that has one.</summary>
-    private Contender? Cheapest(MarginScore margin, CancellationToken cancellation)
-    {
-        foreach (IReadOnlyList<PlanFamily> level in Tables.Families.CostLevels())
-        {
-            Contender? winner = Best(level, new Heat(margin, Feasible, rmsFirst: false), cancellation);
-            if (winner is not null || cancellation.IsCancellationRequested)
-                return winner;
-        }
-
-        return null;
+        count = default;
+        Contender winner = new ObjectiveSearch(this, added, cancellation).Best(objective);
+        return new SearchAnswer(winner, count, !cancellation.IsCancellationRequested);
     }
 
     /// <summary>
-    /// The best plan of some families, shared out over the processors by family and second temperature; the best of those looked at when
-    /// the search is ended early.
+    /// The best plan of some families in some groups, shared out over the processors by group, family and second temperature; the best of
+    /// those looked at when the search is ended early.
     /// </summary>
-    private Contender? Best(IReadOnlyList<PlanFamily> families, Heat heat, CancellationToken cancellation)
+    public Contender? Best(IReadOnlyList<PlanFamily> families, IReadOnlyList<ListGroup> groups, Heat heat, CancellationToken cancellation)
     {
-        IEnumerable<(PlanFamily Family, int Second)> shares = families.SelectMany(f => Tables.Families.SecondsOf(f).Select(s => (f, s)));
+        IEnumerable<(ListGroup Group, PlanFamily Family, int Second)> shares =
+            from g in groups
+            from f in families
+            where f.Count == g.Form.Count
+            from second in Tables.Families.SecondsOf(f)
+            select (g, f, second);
         try
         {
             Parallel.ForEach(
                 shares,
                 new ParallelOptions { CancellationToken = cancellation, MaxDegreeOfParallelism = threads },
                 () => new PlanRunner(Tables, Rms, heat),
-                (share, _, runner) => Take(runner, share.Family, share.Second),
+                (share, _, runner) => Take(runner, share.Group, share.Family, share.Second),
                 runner => Report(runner.Finish()));
         }
         catch (OperationCanceledException)
@@ -97,21 +80,23 @@ internal sealed class PlanSearch
         return Contest.Winner(heat.Contenders, heat.RmsFirst);
     }
 
-    private PlanRunner Take(PlanRunner runner, PlanFamily family, int second)
+    private PlanRunner Take(PlanRunner runner, ListGroup group, PlanFamily family, int second)
     {
-        Report(runner.Take(family, second));
+        Report(runner.Take(group, family, second));
         return runner;
     }
 
-    private void Report(long plans)
+    private void Report(SearchCount more)
     {
-        long now = Interlocked.Add(ref done, plans);
-        progress?.Report(new SearchProgress(now, PlanCount));
+        SearchCount now;
+        lock (gate)
+            now = count += more;
+        progress?.Report(new SearchProgress(Math.Min(now.Decided + now.Discarded, PlanCount), PlanCount));
     }
 }
 
 /// <summary>What a search has found.</summary>
 /// <param name="Winner">The best plan.</param>
-/// <param name="Decided">How many plans were decided one by one.</param>
+/// <param name="Count">How many plans were decided and discarded; a plan that was looked at twice counts twice.</param>
 /// <param name="Proven">Whether no candidate plan is better.</param>
-internal sealed record SearchAnswer(Contender Winner, long Decided, bool Proven);
+internal sealed record SearchAnswer(Contender Winner, SearchCount Count, bool Proven);

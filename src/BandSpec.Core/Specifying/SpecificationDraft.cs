@@ -29,13 +29,16 @@ public static class SpecificationDraft
         PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
         BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
+        double confidence = application.Requirement.Capability.Confidence ?? UsualConfidence;
+        MarginBound? bound = MarginBound.Of(application, choice.Plan, bands, confidence);
         return new Specification
         {
             Application = application,
             Choice = choice,
             Optimum = optimum,
             Bands = bands,
-            Bound = MarginBound.Of(application, choice.Plan, bands, application.Requirement.Capability.Confidence ?? UsualConfidence),
+            Bound = bound,
+            FurtherUnits = bound is { Lower: < 1 } ? MarginBound.FurtherUnits(application, choice.Plan, bands, confidence) : null,
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),
             Allocation = allocation,

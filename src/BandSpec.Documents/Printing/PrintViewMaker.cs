@@ -26,16 +26,6 @@ internal sealed class PrintViewMaker
 
     private IReadOnlyList<RegionView> Regions { get; }
 
-    // The point of least margin may lie anywhere: its pressure is told to three figures of the span.
-    private int PressureDecimals
-    {
-        get
-        {
-            var (lower, upper) = (_requirement.Pressure.At(0).Value, _requirement.Pressure.At(1).Value);
-            return Math.Clamp(2 - (int)Math.Floor(Math.Log10(upper - lower)), 0, 6);
-        }
-    }
-
     public PrintView Make(IReadOnlyList<DigestView> inputs, string program, string standing)
     {
         var inputViews = new InputViews(_requirement, _sign);
@@ -44,8 +34,18 @@ internal sealed class PrintViewMaker
             inputViews.Identity, inputViews.Range(platform), inputViews.Output, inputViews.Temperature, Profile(inputViews), Regions,
             Verdict(), new PlanViews(_specification, _sign).Plan, [.. Terms()], [.. Derived()],
             [.. new PointViews(_requirement).Of(_specification.VerificationPoints)], Test(),
-            platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign);
+            platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign)
+        {
+            Sample = Sample(platform.Sample),
+        };
     }
+
+    private SampleView? Sample(PlatformSample? sample) => sample is null || _specification.Bound is not { } bound
+        ? null
+        : new SampleView(
+            Whole(sample.Units), Whole(sample.Lots), Whole(sample.Readings), Shown(Rounded.Given(100 * bound.Confidence)), Margin(bound.Lower));
+
+    private static string Whole(int count) => count.ToString(CultureInfo.InvariantCulture);
 
     private string Shown(Rounded figure) => figure.Shown(_sign);
 
@@ -71,8 +71,15 @@ internal sealed class PrintViewMaker
             allowance.LimitAtEnd is { } end && end != allowance.Limit ? Allowed(end.Percent) : "",
             allowance.OfReading > 0 ? Shown(Rounded.Given(100 * allowance.OfReading)) : "",
             Band(band.Maximum), Band(band.Typical), Margin(band.Margin), band.Margin >= 1,
-            Shown(Rounded.Given(Math.Round(_requirement.Pressure.At(band.Worst.PressureFraction).Value, PressureDecimals))),
+            Shown(Rounded.Given(Coarse(_requirement.Pressure, band.Worst.PressureFraction))),
             Shown(Rounded.Given(Math.Round(band.Worst.Temperature.Celsius, 1))));
+    }
+
+    // Where the margin is least matters to a thousandth of the range; more digits are those of a search, not of the figure.
+    private static double Coarse(PressureRange range, double fraction)
+    {
+        var span = range.At(1).Value - range.At(0).Value;
+        return Math.Round(range.At(fraction).Value, Math.Clamp(2 - (int)Math.Floor(Math.Log10(span)), 0, 9));
     }
 
     private ProfileView Profile(InputViews inputs)

@@ -1,5 +1,6 @@
 using System.Text.Json;
 using BandSpec.Core.Requirements;
+using BandSpec.Core.Residuals;
 using BandSpec.Core.Specifying;
 using BandSpec.Core.TestLimits;
 
@@ -27,12 +28,32 @@ public static class LimitsJson
             json.Object("decision-rule", rule => rule.Figure("guard-band", requirement.Test.GuardBand));
             json.Figure("sample-criterion", requirement.Capability.Sample);
             json.Figure("long-run-criterion", requirement.Capability.LongRun);
+            json.Figure("reference-temperature", requirement.Temperature.Reference.Celsius);
+            json.Objects("derived-limits", DerivedLimits(specification), (one, limit) => WriteDerived(one, limit, requirement));
             json.Objects("points", specification.VerificationPoints, (point, tested) => WritePoint(point, tested, requirement.Output.Unit));
         });
     }
 
     /// <summary>The direction's word in files.</summary>
     internal static string Word(PressureDirection direction) => direction == PressureDirection.Rising ? "rising" : "falling";
+
+    /// <summary>The derived limits, and the limit of pressure hysteresis where the allocation has one: full width, like what a tester measures.</summary>
+    private static IEnumerable<DerivedLimit> DerivedLimits(Specification specification) =>
+        specification.DerivedLimits.Concat(specification.Allocation.Terms
+            .Where(share => share.Term == ErrorTerm.PressureHysteresis)
+            .Select(share => new DerivedLimit("hysteresis", null, share.Limit)));
+
+    private static void WriteDerived(Utf8JsonWriter json, DerivedLimit limit, Requirement requirement)
+    {
+        json.WriteString("name", limit.Name);
+        if (limit.Region is { } region)
+        {
+            json.Figure("from", requirement.AllowedError[region].From.Celsius);
+            json.Figure("to", requirement.AllowedError[region].To.Celsius);
+        }
+
+        json.Figure("limit", limit.Limit.Percent);
+    }
 
     private static void WritePoint(Utf8JsonWriter json, VerificationPoint point, string outputUnit)
     {

@@ -1,5 +1,4 @@
 using System.Text.Json;
-using BandSpec.Tests.House;
 using Snapshooter.Xunit3;
 using Xunit;
 
@@ -25,7 +24,7 @@ public sealed class CommandTests : IDisposable
     public void Check_shows_findings_and_goes_on_with_the_other_files()
     {
         desk.Change("brine-reinjection.yaml", "title:", "titel:");
-        File.Copy(Path.Combine(Tree.Root, "tests", "BandSpec.Tests", "Example", "brine-reinjection.yaml"), desk.At("second.yaml"));
+        desk.Write("second.yaml", File.ReadAllText(desk.At("brine-reinjection.yaml")).Replace("titel:", "title:", StringComparison.Ordinal));
 
         Assert.Equal((2, """
             brine-reinjection.yaml:4:3: unknown key `titel` [unknown-key]
@@ -165,8 +164,7 @@ public sealed class CommandTests : IDisposable
     {
         desk.Write("bad.yaml", "safety-factor: 1,15");
         desk.Write("tight.yaml", File.ReadAllText(desk.At("brine-reinjection.yaml")).Replace("number: HV-3107", "number: HV-1", StringComparison.Ordinal)
-            .Replace("safety-factor: 1.15", "safety-factor: 9", StringComparison.Ordinal)
-            .Replace("temperatures: 3..6", "temperatures: 3", StringComparison.Ordinal));
+            .Replace("safety-factor: 1.15", "safety-factor: 9", StringComparison.Ordinal));
 
         (int code, string output, _) = desk.Run("draft", "bad.yaml", "tight.yaml", "brine-reinjection.yaml");
 
@@ -206,5 +204,34 @@ public sealed class CommandTests : IDisposable
         Assert.Equal(2, code);
         Assert.StartsWith("mine/limits/broken.txt.scriban:2:", output, StringComparison.Ordinal);
         Assert.False(Directory.Exists(desk.At("out")));
+    }
+
+    [Fact]
+    public void Result_limits_and_table_say_the_same()
+    {
+        desk.Run("draft", "brine-reinjection.yaml", "--quiet");
+        JsonElement result = JsonDocument.Parse(File.ReadAllText(desk.At("out/HV-3107-A/result.json"))).RootElement;
+        JsonElement limits = JsonDocument.Parse(File.ReadAllText(desk.At("out/HV-3107-A/limits.json"))).RootElement;
+        string[][] rows = [.. File.ReadAllLines(desk.At("out/HV-3107-A/limits.csv")).Select(line => line.Split(','))];
+
+        Assert.Equal(result.GetProperty("specification").GetRawText(), limits.GetProperty("specification").GetRawText());
+        Assert.Equal(result.GetProperty("feasible").GetBoolean(), limits.GetProperty("feasible").GetBoolean());
+        JsonElement[] points = [.. limits.GetProperty("points").EnumerateArray()];
+        Assert.Equal(points.Length, rows.Length - 1);
+        for (int i = 0; i < points.Length; i++)
+            Assert.Equal(points[i].EnumerateObject().Select(member => member.Value.ToString()), rows[i + 1]);
+        Assert.Equal(points[0].EnumerateObject().Select(member => member.Name), rows[0]);
+    }
+
+    [Fact]
+    public void A_folder_that_cannot_be_written_to_is_one_line_on_standard_error()
+    {
+        desk.Write("taken", "a file");
+
+        (int code, string output, string error) = desk.Run("draft", "brine-reinjection.yaml", "--out", "taken");
+
+        Assert.Equal((3, ""), (code, output));
+        Assert.StartsWith("bandspec: DESK/taken/HV-3107-A cannot be written: ", error, StringComparison.Ordinal);
+        Assert.Equal(1, error.Count(c => c == '\n'));
     }
 }

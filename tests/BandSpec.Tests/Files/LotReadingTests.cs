@@ -1,6 +1,6 @@
 using System.Text;
 using BandSpec.Core.LotJudging;
-using BandSpec.Files.Readings;
+using BandSpec.Files.LotReadings;
 using BandSpec.Tests.LotJudging;
 
 using Xunit;

@@ -12,10 +12,12 @@ public sealed class CapabilityTests
     public void Indices_are_those_of_the_plain_formulas()
     {
         var random = new Random(1);
-        (double Error, string Lot)[] values = [.. Enumerable.Range(0, 120).Select(i => (0.1 + (i / 40 * 0.05) + (0.15 * Draws.Normal(random)), $"L{i / 40}"))];
+        (double Error, string Lot)[] values = [.. Enumerable.Range(0, 120).Select(i => (0.1 + (i / 40 * 0.15) + (0.15 * Draws.Normal(random)), $"L{i / 40}"))];
         CharacteristicJudgement judged = Lots.JudgeOne(values);
-        double mean = values.Average(v => v.Error), overall = Math.Sqrt(values.Sum(v => Math.Pow(v.Error - mean, 2)) / 119);
+        double mean = values.Average(v => v.Error);
         double within = Math.Sqrt(values.GroupBy(v => v.Lot).Sum(lot => lot.Sum(v => Math.Pow(v.Error - lot.Average(w => w.Error), 2))) / 117);
+        double between = values.GroupBy(v => v.Lot).Sum(lot => 40 * Math.Pow(lot.Average(v => v.Error) - mean, 2)) / 2;
+        double overall = Math.Sqrt((within * within) + ((between - (within * within)) / 40));
         Close.Relative(mean, judged.Mean, 1e-12);
         Close.Relative(1 / (3 * within), judged.Within!.Spread, 1e-12);
         Close.Relative((1 - mean) / (3 * within), judged.Within.Nearer, 1e-12);
@@ -54,8 +56,8 @@ public sealed class CapabilityTests
             var all = new Moments(0);
             foreach (Moments lot in lots)
                 all.Add(lot);
-            double z = (1 - Math.Abs(all.Mean)) / Math.Sqrt(split.Overall) / 3;
-            covered += CapabilityLaw.OneSidedLimit(z, split.OverallCount, split.OverallFreedom, 0.95) <= trueIndex ? 1 : 0;
+            double z = (1 - Math.Abs(all.Mean)) / Math.Sqrt(split.LongRun) / 3;
+            covered += CapabilityLaw.OneSidedLimit(z, split.LongRunCount, split.LongRunFreedom, 0.95) <= trueIndex ? 1 : 0;
         }
         Assert.InRange(covered / (double)Runs, 0.92, 0.99);
     }

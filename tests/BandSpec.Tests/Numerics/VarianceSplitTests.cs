@@ -8,7 +8,7 @@ public sealed class VarianceSplitTests
 {
     /// <summary>
     /// Dyestuff (R package lme4): mean square between 11271.5 with 5, within 2451.25 with 24 degrees of freedom (found in the package, recomputed;
-    /// check-values section 8). The overall variance follows as (5·11271.5 + 24·2451.25)/29.
+    /// check-values section 8). The long-run variance is the sum of the components 42.000595233877² and 49.510099979701² that lme4 finds by REML.
     /// </summary>
     [Fact]
     public void Dyestuff()
@@ -21,19 +21,19 @@ public sealed class VarianceSplitTests
         VarianceSplit split = VarianceSplit.Of([.. batches.Select(batch => Moments.Of(batch))]);
         Close.Relative(2451.25, split.Within, 1e-13);
         Assert.Equal(24, split.WithinFreedom);
-        Close.Relative((5 * 11271.5 + 24 * 2451.25) / 29, split.Overall, 1e-13);
+        Close.Relative((42.000595233877 * 42.000595233877) + (49.510099979701 * 49.510099979701), split.LongRun, 1e-12);
         Close.Relative(11271.5 / 30, split.MeanVariance, 1e-13);
-        double a = 5 * 11271.5, b = 24 * 2451.25;
-        Close.Relative((a + b) * (a + b) / (a * a / 5 + b * b / 24), split.OverallFreedom, 1e-13);
+        double between = 11271.5 / 5, within = 2451.25 * 0.8;
+        Close.Relative((between + within) * (between + within) / (between * between / 5 + within * within / 24), split.LongRunFreedom, 1e-13);
     }
 
     [Fact]
     public void One_group_is_one_sample()
     {
         VarianceSplit split = VarianceSplit.Of([Moments.Of([1, 2, 4, 9])]);
-        Assert.Equal((3, 3), (split.WithinFreedom, split.OverallFreedom));
-        Assert.Equal(split.Overall, split.Within);
-        Close.Relative(4, split.OverallCount, 1e-15);
+        Assert.Equal((3, 3), (split.WithinFreedom, split.LongRunFreedom));
+        Assert.Equal(split.LongRun, split.Within);
+        Close.Relative(4, split.LongRunCount, 1e-15);
     }
 
     [Fact]

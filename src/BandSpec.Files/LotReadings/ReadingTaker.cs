@@ -3,7 +3,7 @@ using BandSpec.Core.LotJudging;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.TestLimits;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>
 /// Takes readings as text, finds their point, turns them into numbers of the right unit, and hands them to the collector; what is wrong with

@@ -3,7 +3,7 @@ using BandSpec.Core.Findings;
 using BandSpec.Core.LotJudging;
 using BandSpec.Core.Quantities;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>How a file of readings is laid out, detected from its first lines and stated to the user.</summary>
 public sealed class ReadingLayout

@@ -6,7 +6,7 @@ using BandSpec.Files.Inputs;
 using BandSpec.Files.Yaml;
 using nietras.SeparatedValues;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>What came of reading one file of readings.</summary>
 /// <param name="File">Its name.</param>

@@ -1,6 +1,6 @@
 using System.Text.Json;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>One object of a JSON file, read key by key; it knows where it stands, so that a fault can say it.</summary>
 internal readonly struct JsonPart(JsonElement element, string path)

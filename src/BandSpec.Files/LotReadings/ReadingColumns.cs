@@ -1,6 +1,6 @@
 using BandSpec.Core.Findings;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>What a column of readings holds.</summary>
 internal enum ReadingColumn

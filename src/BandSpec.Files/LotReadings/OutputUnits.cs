@@ -1,4 +1,4 @@
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>Units of readings that can be turned into each other: volts and amperes with their decimal prefixes.</summary>
 internal static class OutputUnits

@@ -6,7 +6,7 @@ using BandSpec.Core.TestLimits;
 using BandSpec.Files.Inputs;
 using BandSpec.Files.Yaml;
 
-namespace BandSpec.Files.Readings;
+namespace BandSpec.Files.LotReadings;
 
 /// <summary>Reads a limits file (<c>limits.json</c>, format <c>bandspec/limits/1</c>) as what a lot is held against.</summary>
 public static class LimitsFile

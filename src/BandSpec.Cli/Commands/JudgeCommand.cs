@@ -1,0 +1,64 @@
+using System.CommandLine;
+using System.Text;
+using BandSpec.Cli.Judging;
+using BandSpec.Cli.Printing;
+using BandSpec.Core.LotJudging;
+using BandSpec.Files.Json;
+
+namespace BandSpec.Cli.Commands;
+
+/// <summary><c>bandspec judge LIMITS READINGS…</c>: a lot held against its limits.</summary>
+internal static class JudgeCommand
+{
+    /// <summary>The command.</summary>
+    public static Command Create(Terminal terminal)
+    {
+        Argument<string> limits = new("LIMITS") { Description = "The limits.json of a specification package." };
+        Argument<string[]> readings = new("READINGS")
+        {
+            Description = "Tables of readings, one reading a line: serial, point (or temperature, pressure, direction), reading; lot or date if known.",
+            Arity = ArgumentArity.OneOrMore,
+        };
+        Option<string?> output = new("--out") { Description = "Folder for the judgement; otherwise out/NUMBER-REVISION-judgement.", HelpName = "DIR" };
+        Option<bool> strict = new("--strict") { Description = "Refuse readings of which any line is at fault." };
+        Option<bool> proven = new("--proven") { Description = "Answer no unless every capability is proven, not only met." };
+        (Option<bool> json, Option<bool> quiet) = (CommonOptions.Json(), CommonOptions.Quiet());
+        TaughtCommand command = new(
+            "judge", "Holds the readings of a lot against limits: capability at every point and of every derived figure, each unit, and what would prove it.",
+            ("bandspec judge out/HV-3107-A/limits.json lot.csv", "the judgement on screen and in out/HV-3107-A-judgement/"),
+            ("bandspec judge limits.json week1.csv week2.csv --strict", "several files as one lot, no line may be at fault"),
+            ("bandspec judge limits.json lot.csv --proven --quiet", "only the exit code: 0 when all is proven"))
+        {
+            limits, readings, output, strict, proven, json, quiet,
+        };
+        command.SetAction(parsed => (int)Run(
+            JudgeRun.Run(parsed.GetRequiredValue(limits), parsed.GetRequiredValue(readings), terminal),
+            new Wishes(parsed.GetValue(output), parsed.GetValue(strict), parsed.GetValue(proven), parsed.GetValue(json), parsed.GetValue(quiet)), terminal));
+        return command;
+    }
+
+    private sealed record Wishes(string? Out, bool Strict, bool Proven, bool Json, bool Quiet);
+
+    private static ExitCode Run(Judgement judgement, Wishes wishes, Terminal terminal)
+    {
+        if (judgement.Judged is not { } judged)
+        {
+            terminal.Out.Write(FindingScreen.Of(judgement.Findings, terminal.Ink));
+            return ExitCode.Findings;
+        }
+
+        if (wishes.Strict && judged.Faults.Total > 0)
+        {
+            terminal.Out.Write(JudgementScreen.FaultsOf(judged.Faults, terminal.Ink));
+            return ExitCode.Findings;
+        }
+
+        string folder = wishes.Out ?? Path.Combine("out", $"{judged.Limits.Specification}-judgement");
+        IReadOnlyList<string> files = JudgementFolder.Write(Path.GetFullPath(folder, terminal.Folder), judged, judgement.Reports);
+        if (wishes.Json)
+            terminal.Out.Write(Encoding.UTF8.GetString(JudgementJson.Write(judged, judgement.Reports).Span));
+        else if (!wishes.Quiet)
+            terminal.Out.Write(JudgementScreen.Of(judged, judgement.Reports, folder, files, terminal.Ink));
+        return (wishes.Proven ? judged.IsProven : judged.IsMet) ? ExitCode.Done : ExitCode.AnswerIsNo;
+    }
+}
