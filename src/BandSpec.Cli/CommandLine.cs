@@ -40,7 +40,7 @@ internal static class CommandLine
         catch (RefusalException refusal)
         {
             terminal.Error.WriteLine($"bandspec: {refusal.Message}");
-            return (int)ExitCode.Fault;
+            return (int)refusal.Code;
         }
         catch (Exception fault)
         {
@@ -57,6 +57,8 @@ internal static class CommandLine
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
         root.Add(CompareCommand.Create(terminal));
+        root.Add(ReleaseCommand.Create(terminal));
+        root.Add(VerifyCommand.Create(terminal));
         root.Add(JudgeCommand.Create(terminal));
         root.Add(SampleCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));

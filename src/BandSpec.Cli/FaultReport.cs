@@ -8,18 +8,24 @@ namespace BandSpec.Cli;
 /// </summary>
 internal static class FaultReport
 {
+    private static int count;
+
     /// <summary>Writes the report.</summary>
-    public static void Write(Exception fault, IReadOnlyList<string> arguments, Terminal terminal)
+    public static void Write(Exception fault, IReadOnlyList<string> arguments, Terminal terminal) =>
+        terminal.Error.WriteLine($"bandspec: {Describe(fault, arguments, terminal)}");
+
+    /// <summary>Writes the details and says the rest in one line.</summary>
+    public static string Describe(Exception fault, IReadOnlyList<string> arguments, Terminal terminal)
     {
         string message = fault.Message.ReplaceLineEndings(" ");
         string where = TryWriteDetails(fault, arguments, terminal) is { } path ? $"details are in {path}" : "the details could not be written";
-        terminal.Error.WriteLine($"bandspec: a fault of the program, not of your files: {message} ({fault.GetType().Name}); {where}");
+        return $"a fault of the program, not of your files: {message} ({fault.GetType().Name}); {where}";
     }
 
     private static string? TryWriteDetails(Exception fault, IReadOnlyList<string> arguments, Terminal terminal)
     {
         string time = terminal.Clock.GetUtcNow().ToString("yyyyMMdd-HHmmss", CultureInfo.InvariantCulture);
-        string path = Path.Combine(Path.GetTempPath(), $"bandspec-fault-{time}-{Environment.ProcessId}.txt");
+        string path = Path.Combine(Path.GetTempPath(), $"bandspec-fault-{time}-{Environment.ProcessId}-{Interlocked.Increment(ref count)}.txt");
         try
         {
             using StreamWriter file = new(new FileStream(path, FileMode.CreateNew));

@@ -27,10 +27,10 @@ public sealed record DocumentOptions
     public ITemplateFolder? Templates { get; init; }
 
     /// <summary>
-    /// Whether the document is released; otherwise every page is marked as a draft. A specification that is not feasible is marked so in
-    /// either case.
+    /// Who released the specification and when, shown on every page; <see langword="null"/> for a draft, which is shown as well. A
+    /// specification that is not feasible is marked so in either case.
     /// </summary>
-    public bool Released { get; init; }
+    public ReleaseMark? Release { get; init; }
 
     /// <summary>Name and version of the program, as the document and the PDF's properties show it.</summary>
     public required string Program { get; init; }
@@ -42,6 +42,12 @@ public sealed record DocumentOptions
     /// </summary>
     public bool ClaimsConformance { get; init; }
 }
+
+/// <summary>A release as documents show it.</summary>
+/// <param name="By">Who released the specification.</param>
+/// <param name="At">When.</param>
+/// <param name="Digest">The digest of its line in the release record.</param>
+public sealed record ReleaseMark(string By, DateTimeOffset At, string Digest);
 
 /// <summary>A drawn file of the package.</summary>
 /// <param name="Name">File name without folder, unique in the package.</param>

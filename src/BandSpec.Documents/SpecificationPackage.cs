@@ -37,13 +37,13 @@ public static class SpecificationPackage
         ArgumentNullException.ThrowIfNull(options);
         var templates = new TemplateSources(options.Templates);
         var words = Words.Load(templates, options.Language);
-        var standing = !specification.Feasible ? Standing.Refused : options.Released ? Standing.Plain : Standing.Draft;
+        var standing = !specification.Feasible ? Standing.Refused : options.Release is null ? Standing.Draft : Standing.Released;
         var view = new PrintViewMaker(specification, words.Plain("decimal-sign")).Make(
             Digests(sources), options.Program, standing.ToString());
         words = words.About(ViewForTemplates.Of(view));
         var composition = new Composition(view, words, new SpecificationCharts(specification, view, words));
         var document = SpecificationComposer.Compose(
-            composition, specification.Application.Requirement.Identity.Date, options.Language, standing, sources.Count > 0);
+            composition, specification.Application.Requirement.Identity.Date, options, standing, sources.Count > 0);
         return
         [
             new("specification.pdf", PdfWriter.Write(document, Sheet(options.Paper), Facts(document.Frame, sources, options))),
@@ -51,6 +51,15 @@ public static class SpecificationPackage
             .. document.Blocks.OfType<Figure>().Select(Picture),
             .. LimitsLayouts.Write(templates, view),
         ];
+    }
+
+    /// <summary>The files of a user's folder that would be read for a language, by their paths in it: what the documents depend on besides.</summary>
+    /// <param name="own">The user's folder.</param>
+    /// <param name="language">The language of the words.</param>
+    public static IReadOnlyList<string> TemplatePaths(ITemplateFolder own, string language)
+    {
+        ArgumentNullException.ThrowIfNull(own);
+        return [.. Words.PathsOf(language).Where(path => own.Read(path) is not null), .. own.Files("limits").Order(StringComparer.Ordinal)];
     }
 
     private static PageGeometry Sheet(Paper paper) => paper == Paper.Letter ? PageGeometry.Letter : PageGeometry.A4;

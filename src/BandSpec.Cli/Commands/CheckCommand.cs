@@ -13,22 +13,27 @@ internal static class CheckCommand
     {
         Argument<string[]> files = CommonOptions.Files();
         (Option<bool> json, Option<bool> quiet, Option<string?> root) = (CommonOptions.Json(), CommonOptions.Quiet(), CommonOptions.Root());
+        (Option<string?> sarif, Option<string?> junit) = (FindingReports.SarifOption(), FindingReports.JunitOption());
         TaughtCommand command = new(
             "check", "Reads requirements with their platforms and stations, and shows every finding at once.",
             ("bandspec check pump.yaml", "findings with file, line, column and what is accepted"),
-            ("bandspec check requirements/*.yaml --json", "the same for programs"),
+            ("bandspec check requirements --json", "of every requirement below a folder, for programs"),
+            ("bandspec check requirements --sarif findings.sarif", "for a merge request: findings at their lines"),
             ("bandspec check pump.yaml && bandspec draft pump.yaml", "draft only what is in order"))
         {
-            files, json, quiet, root,
+            files, json, quiet, root, sarif, junit,
         };
         command.SetAction(parsed => (int)Run(
-            [.. parsed.GetRequiredValue(files).Select(file => (file, InputFolder.Read(file, parsed.GetValue(root), terminal.Folder)))],
-            parsed.GetValue(json), parsed.GetValue(quiet), terminal));
+            [.. RequirementFiles.Among(parsed.GetRequiredValue(files), terminal.Folder).Where(file => file.Note is null)
+                .Select(file => (file.Name, InputFolder.Read(file.Name, parsed.GetValue(root), terminal.Folder)))],
+            new FindingReports(parsed.GetValue(sarif), parsed.GetValue(junit)), parsed.GetValue(json), parsed.GetValue(quiet), terminal));
         return command;
     }
 
-    private static ExitCode Run(IReadOnlyList<(string File, InputSet Set)> read, bool json, bool quiet, Terminal terminal)
+    private static ExitCode Run(
+        IReadOnlyList<(string File, InputSet Set)> read, FindingReports reports, bool json, bool quiet, Terminal terminal)
     {
+        reports.Write([.. read.Select(file => (file.File, file.Set.Findings, (string?)null))], terminal.Folder);
         if (json)
             terminal.Out.Write(FindingJson.Of(read));
         else

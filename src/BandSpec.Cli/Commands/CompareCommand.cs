@@ -51,6 +51,11 @@ internal static class CompareCommand
         return comparison.LimitsDiffer ? ExitCode.AnswerIsNo : ExitCode.Done;
     }
 
-    private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation) => SearchBar.Over(
-        terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
+    private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
+    {
+        Specification specification = SearchBar.Over(
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
+        cancellation.ThrowIfCancellationRequested();
+        return specification;
+    }
 }

@@ -1,7 +1,8 @@
 using System.CommandLine;
 using BandSpec.Cli.Drafting;
+using BandSpec.Cli.Opening;
 using BandSpec.Cli.Printing;
-using BandSpec.Documents;
+using BandSpec.Cli.Versioning;
 using BandSpec.Files.Inputs;
 
 namespace BandSpec.Cli.Commands;
@@ -13,59 +14,73 @@ internal static class DraftCommand
     public static Command Create(Terminal terminal)
     {
         Argument<string[]> files = CommonOptions.Files();
-        Option<string> output = new("--out")
+        PackageOptions package = new();
+        Option<int> workers = new("--workers")
         {
-            Description = "Folder for the packages; `out` when left out.", DefaultValueFactory = _ => "out", HelpName = "DIR",
+            Description = "How many requirements are drafted at once; as many as there are processors when left out.",
+            DefaultValueFactory = _ => Environment.ProcessorCount, HelpName = "N",
         };
-        Option<string?> templates = new("--templates")
+        Option<string?> since = new("--changed-since")
         {
-            Description = "Folder of your own templates; otherwise `templates` in the project, if there is one.", HelpName = "DIR",
+            Description = "Draft only what depends on a file that differs from this revision in git.", HelpName = "REV",
         };
-        Option<string> language = new("--language") { Description = "Language of the documents.", DefaultValueFactory = _ => "en", HelpName = "en|de" };
-        Option<Paper> paper = new("--paper") { Description = "Paper of the PDF.", HelpName = "A4|Letter" };
-        (Option<bool> json, Option<bool> quiet, Option<string?> root) = (CommonOptions.Json(), CommonOptions.Quiet(), CommonOptions.Root());
+        (Option<string?> sarif, Option<string?> junit) = (FindingReports.SarifOption(), FindingReports.JunitOption());
+        (Option<bool> json, Option<bool> quiet) = (CommonOptions.Json(), CommonOptions.Quiet());
+        workers.Validators.Add(result =>
+        {
+            if (result.GetValueOrDefault<int>() is < 1 or > 1024)
+                result.AddError("--workers takes a number from 1 to 1024");
+        });
         TaughtCommand command = new(
-            "draft", "Turns requirements into specification packages, each in a folder of its number and revision.",
+            "draft", "Turns requirements into specification packages, each in a folder of its number and revision. A package that is there already from the same inputs is left as it is.",
             ("bandspec draft pump.yaml", "the package in out/NUMBER-REVISION/"),
-            ("bandspec draft requirements/*.yaml --out packages", "many, one summary at the end"),
+            ("bandspec draft requirements --out packages", "every requirement below a folder, one summary at the end"),
+            ("bandspec draft requirements --changed-since main --sarif findings.sarif", "for a merge request: what it changes, findings at their lines"),
             ("bandspec draft pump.yaml --json", "verdict, margin and file names for programs"))
         {
-            files, output, templates, language, paper, json, quiet, root,
+            files, workers, since, sarif, junit, json, quiet,
         };
+        package.AddTo(command);
         command.SetAction((parsed, cancellation) => Task.FromResult((int)Run(
-            parsed.GetRequiredValue(files),
-            new DraftRun(
-                terminal, new DraftFolders(parsed.GetValue(output)!, parsed.GetValue(root), parsed.GetValue(templates)),
-                new DocumentOptions { Program = CommandLine.Program, Language = parsed.GetValue(language)!, Paper = parsed.GetValue(paper) }),
+            RequirementFiles.Among(parsed.GetRequiredValue(files), terminal.Folder),
+            new DraftBatch(
+                terminal, package.RunOf(parsed, terminal), parsed.GetValue(workers),
+                parsed.GetValue(since) is { } revision ? ChangedFiles.Since(revision, terminal.Folder) : null),
+            new FindingReports(parsed.GetValue(sarif), parsed.GetValue(junit)),
             parsed.GetValue(json), parsed.GetValue(quiet), terminal, cancellation)));
         return command;
     }
 
     /// <summary>One file that cannot be drafted never keeps the others from being drafted; the worst of all is the exit code.</summary>
     private static ExitCode Run(
-        IReadOnlyList<string> files, DraftRun run, bool json, bool quiet, Terminal terminal, CancellationToken cancellation)
+        IReadOnlyList<NamedFile> files, DraftBatch batch, FindingReports reports, bool json, bool quiet, Terminal terminal, CancellationToken cancellation)
     {
-        List<Draft> drafts = [];
-        foreach (string file in files)
-        {
-            Draft draft = run.Run(file, cancellation);
-            drafts.Add(draft);
-            if (!json)
-                Show(draft, isOnly: files.Count == 1, quiet, terminal);
-        }
+        IReadOnlyList<Draft> drafts = batch.Run(files, cancellation);
         if (json)
             terminal.Out.Write(DraftJson.Of(drafts));
-        else if (files.Count > 1 && !quiet)
-            terminal.Out.Write(DraftScreen.SummaryOf(drafts, terminal.Ink));
+        else
+            WriteScreen(drafts, quiet, terminal);
+        foreach (Draft failed in drafts.Where(draft => draft.State == DraftState.Failed))
+            terminal.Error.WriteLine($"bandspec: {failed.Note}");
+        reports.Write(
+            [.. drafts.Select(draft => (draft.File, draft.Findings, draft.State == DraftState.Failed ? draft.Note : null))], terminal.Folder);
         return drafts.Max(draft => draft.ExitCode);
     }
 
-    private static void Show(Draft draft, bool isOnly, bool quiet, Terminal terminal)
+    private static void WriteScreen(IReadOnlyList<Draft> drafts, bool quiet, Terminal terminal)
     {
-        IReadOnlyList<PlacedFinding> findings = draft.Inputs.Findings;
-        if (findings.Count > 0)
+        PlacedFinding[] findings = [.. drafts.SelectMany(draft => draft.Findings).Distinct()];
+        if (findings.Length > 0)
             terminal.Out.Write(FindingScreen.Of(findings, terminal.Ink));
-        if (isOnly && !quiet && draft is { Specification: { } specification, Package: { } package })
+        if (quiet)
+            return;
+        if (drafts.Count > 1)
+            terminal.Out.Write(DraftSummary.Of(drafts, terminal.Ink));
+        else if (drafts[0] is { Specification: { } specification, Package: { } package })
             terminal.Out.Write(DraftScreen.Of(specification, package, terminal.Ink));
+        else if (drafts[0] is { State: DraftState.UpToDate, Package: { } kept })
+            terminal.Out.WriteLine($"{terminal.Ink.Blue(kept.Folder)} is up to date");
+        else if (drafts[0] is { State: DraftState.LeftOut, Note: { } note })
+            terminal.Out.WriteLine($"{drafts[0].File}: {note}");
     }
 }

@@ -40,7 +40,8 @@ internal static class ComparedSide
         try
         {
             IReadOnlyList<DocumentFile> files = SpecificationFile.Attachments(File.ReadAllBytes(path));
-            return CarriedInputs.Read(written, files.DistinctBy(file => file.Name).ToDictionary(file => file.Name, file => file.Bytes));
+            return CarriedInputs.Of(written, files.DistinctBy(file => file.Name).ToDictionary(file => file.Name, file => file.Bytes))?.Read()
+                ?? Refuse(written, "the PDF carries no inputs", "the PDF of a specification");
         }
         catch (Exception refused) when (refused is InvalidDataException or IOException or UnauthorizedAccessException)
         {

@@ -1,23 +1,21 @@
 using System.Text;
 using BandSpec.Documents.Templates;
-using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Opening;
 
-/// <summary>A user's folder of templates on the disk. It remembers what was read from it: those files are inputs of the package too.</summary>
+/// <summary>A user's folder of templates on the disk.</summary>
 internal sealed class TemplateFolder : ITemplateFolder
 {
     private const int LargestTemplate = 1 << 20;
     private readonly string folder;
-    private readonly SortedDictionary<string, byte[]> read = new(StringComparer.Ordinal);
 
     private TemplateFolder(string folder, string name) => (this.folder, Name) = (folder, name);
 
     /// <inheritdoc/>
     public string Name { get; }
 
-    /// <summary>The files that were read, by name.</summary>
-    public IReadOnlyList<ManifestInput> Inputs => [.. read.Select(file => new ManifestInput("template", file.Key, file.Value))];
+    /// <summary>The folder's full path.</summary>
+    public string FullPath => folder;
 
     /// <summary>
     /// The folder that the user named, or else <c>templates</c> in the project of a requirement; null when there is none.
@@ -46,9 +44,7 @@ internal sealed class TemplateFolder : ITemplateFolder
             return null;
         if (new FileInfo(full).Length > LargestTemplate)
             throw new TemplateException($"{Name}/{path}", 1, 1, $"the template is larger than {LargestTemplate} bytes");
-        byte[] bytes = File.ReadAllBytes(full);
-        read[path] = bytes;
-        return Encoding.UTF8.GetString(bytes);
+        return Encoding.UTF8.GetString(File.ReadAllBytes(full));
     }
 
     /// <inheritdoc/>

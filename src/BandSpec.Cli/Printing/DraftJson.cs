@@ -19,20 +19,31 @@ internal static class DraftJson
     private static void Write(Utf8JsonWriter json, Draft draft)
     {
         json.WriteString("file", draft.File);
-        json.WriteBoolean("valid", draft.Specification is not null);
-        if (draft is { Specification: { } specification, Package: { } package })
+        json.WriteBoolean("valid", draft.Verdict is not null);
+        json.WriteString("state", StateOf(draft.State));
+        if (draft.Note is { } note)
+            json.WriteString("note", note);
+        if (draft is { Verdict: { } verdict, Package: { } package, Inputs.Application: { } application })
         {
-            SpecificationIdentity identity = specification.Application.Requirement.Identity;
+            SpecificationIdentity identity = application.Requirement.Identity;
             json.WriteString("number", identity.Number);
             json.WriteString("revision", identity.Revision);
-            json.WriteBoolean("feasible", specification.Feasible);
-            json.Figure("margin", specification.Bands.Margin);
+            json.WriteBoolean("released", draft.Release is not null);
+            json.WriteBoolean("feasible", verdict.Feasible);
+            json.Figure("margin", verdict.Margin);
             json.WriteString("folder", package.Folder);
             json.WriteStartArray("package");
             foreach (string file in package.Files)
                 json.WriteStringValue(file);
             json.WriteEndArray();
         }
-        json.Findings(draft.Inputs.Findings);
+        json.Findings(draft.Findings);
     }
+
+    private static string StateOf(DraftState state) => state switch
+    {
+        DraftState.UpToDate => "up-to-date",
+        DraftState.LeftOut => "left-out",
+        _ => state.ToString().ToLowerInvariant(),
+    };
 }

@@ -33,26 +33,6 @@ internal static class DraftScreen
         return screen.Append('\n').ToString();
     }
 
-    /// <summary>One line for each of several drafts.</summary>
-    public static string SummaryOf(IReadOnlyList<Draft> drafts, Ink ink)
-    {
-        Table table = new Table().NoBorder().HideHeaders().AddColumns("file", "verdict", "margin", "folder");
-        foreach (TableColumn column in table.Columns)
-            column.NoWrap().PadRight(2);
-        foreach (Draft draft in drafts)
-        {
-            int count = draft.Inputs.Findings.Count;
-            if (draft is { Specification: { } specification, Package: { } package })
-                table.AddRow(new Text(draft.File), Verdict(specification), new Text($"margin {Margin(specification.Bands.Margin)}"), new Text(package.Folder));
-            else
-                table.AddRow(new Text(draft.File), new Text($"{count} finding{(count == 1 ? "" : "s")}", Color.Red));
-        }
-        return "\n" + Tables.Of(table, ink);
-    }
-
-    private static Text Verdict(Specification specification) =>
-        specification.Feasible ? new Text("FEASIBLE", Color.Green) : new Text("NOT FEASIBLE", Color.Red);
-
     private static void AppendVerdict(StringBuilder screen, Specification specification, Ink ink)
     {
         BandNode worst = specification.Bands.Worst;
@@ -107,7 +87,7 @@ internal static class DraftScreen
     }
 
     /// <summary>Cut, not rounded: a margin of 0.9996 is not 1.</summary>
-    private static string Margin(double margin) =>
+    internal static string Margin(double margin) =>
         double.IsFinite(margin) ? (Math.Floor((margin * 1000) + 1e-7) / 1000).ToString("0.000", Plain) : "\u221e";
 
     private static int Decimals(double step)

@@ -19,8 +19,13 @@ internal sealed class PackageFolder
     public string FullPath => Path.Combine(parent, name);
 
     /// <summary>Writes the package in the place of any older one.</summary>
+    /// <param name="files">Its files.</param>
+    /// <param name="clock">The clock.</param>
+    /// <param name="whenComplete">
+    /// What is done once every byte of the package is on the disk and before it takes its place; when that fails, the older package stays.
+    /// </param>
     /// <exception cref="RefusalException">The disk, the rights or another run keep it from being written; the older package is untouched.</exception>
-    public void Replace(IReadOnlyList<PackageFile> files, TimeProvider clock)
+    public void Replace(IReadOnlyList<PackageFile> files, TimeProvider clock, Action? whenComplete = null)
     {
         try
         {
@@ -30,7 +35,13 @@ internal sealed class PackageFolder
             RefuseStrangers();
             string fresh = Path.Combine(parent, $".{name}.new");
             WriteAll(fresh, files);
+            whenComplete?.Invoke();
             Swap(fresh);
+        }
+        catch (RefusalException)
+        {
+            TryRemove(Path.Combine(parent, $".{name}.new"));
+            throw;
         }
         catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
         {

@@ -1,22 +1,43 @@
 namespace BandSpec.Cli.Storing;
 
-/// <summary>Writes a file beside its place and renames it there, so that whoever looks finds the old file or the new one, whole.</summary>
+/// <summary>Writes a file so that it is either the old one or the new one, complete, whenever the process is killed.</summary>
 internal static class WholeFile
 {
-    /// <summary>Writes a file; its folder has to be there.</summary>
-    /// <exception cref="RefusalException">It cannot be written.</exception>
+    /// <summary>Writes beside the file under a hidden name, then renames into place.</summary>
+    /// <param name="path">The file's full path; its folder has to be there.</param>
+    /// <param name="bytes">Its new content.</param>
+    /// <exception cref="RefusalException">The disk or the rights keep it from being written; the older file is untouched.</exception>
     public static void Write(string path, ReadOnlyMemory<byte> bytes)
     {
-        string beside = $"{path}.{Environment.ProcessId}.new";
+        string fresh = Path.Combine(Path.GetDirectoryName(path)!, $".{Path.GetFileName(path)}.new");
         try
         {
-            File.WriteAllBytes(beside, bytes.Span);
-            File.Move(beside, path, overwrite: true);
+            using (FileStream stream = new(fresh, FileMode.Create))
+            {
+                stream.Write(bytes.Span);
+                // On the disk before it gets its name, so that not even a loss of power leaves an empty file under it.
+                stream.Flush(flushToDisk: true);
+            }
+
+            File.Move(fresh, path, overwrite: true);
         }
         catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
         {
-            File.Delete(beside);
-            throw new RefusalException($"{path} cannot be written: {refused.Message}");
+            TryDelete(fresh);
+            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
+        }
+    }
+
+    /// <summary>Deletes a file that may be gone, or not to be deleted: then it does no harm where it is.</summary>
+    public static void TryDelete(string path)
+    {
+        try
+        {
+            File.Delete(path);
+        }
+        catch (Exception kept) when (kept is IOException or UnauthorizedAccessException)
+        {
+            // A hidden leftover; the next run writes over it.
         }
     }
 }

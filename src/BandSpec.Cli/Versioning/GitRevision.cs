@@ -24,7 +24,7 @@ internal sealed class GitRevision
         (string revision, string path) = (written[..colon], written[(colon + 1)..]);
         GitAnswer top = Git.Call(folder, MostBytes, "rev-parse", "--show-toplevel");
         if (!top.Succeeded)
-            throw new RefusalException($"{written} is a revision of git, and {folder} is in no repository");
+            throw new RefusalException($"{written} is a revision of git, and {folder} is in no repository", ExitCode.Findings);
         // Git gives the folder without symbolic links; the working folder may be written with them.
         string root = top.Text.TrimEnd('\n', '\r');
         string real = Opening.RealPath.Of(Path.GetFullPath(path, folder));

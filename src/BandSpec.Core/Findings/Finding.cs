@@ -1,6 +1,6 @@
 namespace BandSpec.Core.Findings;
 
-/// <summary>Which of the input files a field is in.</summary>
+/// <summary>Which file a field is in: one of the inputs, or another file that a package depends on.</summary>
 public enum InputFile
 {
     /// <summary>The customer's application and what is promised for it.</summary>
@@ -17,6 +17,9 @@ public enum InputFile
 
     /// <summary>Readings that statistics are made of.</summary>
     Readings,
+
+    /// <summary>A template of the user's for documents or limits.</summary>
+    Template,
 }
 
 /// <summary>Where a field stands in an input: keys joined by points, list items counted from zero, such as <c>temperature.profile[2].to</c>.</summary>

@@ -35,6 +35,7 @@ internal sealed record InputGroup(FigureSubject Subject, string Name, Func<Appli
         OfPlatform("thermal-hysteresis", (p, o) => p with { ThermalHysteresis = o.ThermalHysteresis }),
         OfPlatform("repeatability", (p, o) => p with { Repeatability = o.Repeatability }),
         OfPlatform("ageing", (p, o) => p with { Ageing = o.Ageing }),
+        OfPlatform("sample", (p, o) => p with { Sample = o.Sample }),
         OfStation("pressure-standard", (s, o) => s with { StandardZero = o.StandardZero, StandardProportional = o.StandardProportional }),
         OfStation("reading-noise", (s, o) => s with { ReadingNoise = o.ReadingNoise }),
         OfStation("readings-averaged", (s, o) => s with { ReadingsAveraged = o.ReadingsAveraged }),

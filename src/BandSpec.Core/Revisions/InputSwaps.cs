@@ -27,6 +27,7 @@ internal sealed class InputSwaps(Comparison comparison)
     /// <summary>What the groups' change does alone.</summary>
     public Cause CauseOf(IReadOnlyList<InputGroup> groups, CancellationToken cancellation)
     {
+        cancellation.ThrowIfCancellationRequested();
         ApplicationInputs swapped = Swapped(groups);
         Application? application = swapped.Check().Value;
         return new Cause(

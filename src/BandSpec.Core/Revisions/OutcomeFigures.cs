@@ -35,6 +35,9 @@ internal sealed class OutcomeFigures(Specification specification, IReadOnlyList<
         BandNode worst = specification.Bands.Worst;
         list.Text("feasible", specification.Feasible ? "yes" : "no");
         list.Number("margin", specification.Bands.Margin, "", Leeway.OfMargin);
+        list.Number("margin between the nodes too", specification.Choice.ContinuousMargin, "", Leeway.OfMargin);
+        if (specification.Bound is { } bound)
+            list.Number("margin that can be claimed", bound.Lower, "", Leeway.OfMargin);
         list.Number("floor margin", specification.Floor.Margin, "", Leeway.ForProduction);
         list.Number("worst temperature", worst.Temperature.Celsius, "°C", Leeway.None);
         list.Number("worst pressure fraction", worst.PressureFraction, "", Leeway.None);

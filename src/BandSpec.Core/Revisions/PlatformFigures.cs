@@ -23,6 +23,8 @@ internal sealed class PlatformFigures(Platform platform)
         ListSpread("thermal-hysteresis", platform.ThermalHysteresis, Leeway.LessForProduction);
         list.Error("repeatability", platform.Repeatability, Leeway.LessForProduction);
         ListAgeing(platform.Ageing);
+        if (platform.Sample is { } sample)
+            list.ListSample(sample);
         return list.All;
     }
 

@@ -12,8 +12,8 @@ public static class ReleaseRules
     private const int LongestName = 100;
 
     /// <summary>
-    /// What keeps a finished specification from being released: it does not fit, its revision was released before, or its revision history
-    /// says nothing about it.
+    /// What keeps a finished specification from being released: it does not fit, its plan is not proven, its revision was released before, or
+    /// its revision history says nothing about it.
     /// </summary>
     /// <param name="specification">The finished record.</param>
     /// <param name="earlier">Everything released from the requirement's folder so far.</param>
@@ -27,6 +27,9 @@ public static class ReleaseRules
             specification.Feasible, "allowed-error", "release-feasible",
             string.Create(CultureInfo.InvariantCulture, $"no plan fits: the best has a margin of {specification.Bands.Margin:0.0000}"),
             "an application that a plan fits with a margin of at least 1");
+        findings.Require(
+            specification.Optimum.Proven, "compensation", "release-proven", "a search for the best plan that was ended before it had its proof",
+            "a search that comes to its end");
         if (Find(identity, earlier) is { } past)
             findings.Add(RevisionField, "release-new", $"{Told(past)}", "a revision that was not released before");
         findings.Require(

@@ -28,6 +28,8 @@ internal sealed class RequirementFigures(Requirement requirement, bool regionsBy
         list.Number("safety-factor", requirement.SafetyFactor, "", Leeway.LessForProduction);
         list.Number("capability.sample", requirement.Capability.Sample, "", Leeway.LessForBoth);
         list.Number("capability.long-run", requirement.Capability.LongRun, "", Leeway.LessForBoth);
+        if (requirement.Capability.Confidence is { } confidence)
+            list.Number("capability.confidence", confidence, "", Leeway.LessForBoth);
         ListTerms();
         ListCompensation(requirement.Compensation);
         ListTest();
@@ -120,6 +122,15 @@ internal sealed class RequirementFigures(Requirement requirement, bool regionsBy
         list.Number("compensation.separation", scope.Separation.Kelvin, "K", Leeway.LessForProduction);
         list.Number("compensation.reach", scope.Reach.Kelvin, "K", Leeway.ForProduction);
         list.Word("compensation.objective", scope.Objective);
+        if (scope.Pinned is { } pinned)
+            ListPinned(pinned);
+    }
+
+    private void ListPinned(PinnedPlan pinned)
+    {
+        list.Text("compensation.plan", string.Join(", ", pinned.Temperatures));
+        list.Text("compensation.zero-degree", pinned.ZeroDegree is { } zero ? Number(zero) : "highest");
+        list.Text("compensation.span-degree", pinned.SpanDegree is { } span ? Number(span) : "highest");
     }
 
     private void ListTest()

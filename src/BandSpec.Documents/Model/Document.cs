@@ -6,6 +6,7 @@ internal enum Standing
     Plain,
     Draft,
     Refused,
+    Released,
 }
 
 /// <summary>The mark of a document's standing: a word, and a sentence for the band it stands in (may be empty).</summary>

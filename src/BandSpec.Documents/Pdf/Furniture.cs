@@ -34,7 +34,7 @@ internal static class Furniture
     private static IEnumerable<Mark> Band(Stamp stamp, PageGeometry page)
     {
         if (stamp.Standing == Standing.Plain) return [];
-        var ink = stamp.Standing == Standing.Refused ? Look.Refusal : Look.Soft;
+        var ink = stamp.Standing switch { Standing.Refused => Look.Refusal, Standing.Released => Look.Assurance, _ => Look.Soft };
         var baseline = 16 + TextLayout.Baseline(Look.Stamp) + (BandHeight - Look.Stamp.Leading) / 2;
         var word = LineBreaker.Break(stamp.Word, Look.Stamp, double.MaxValue)[0];
         var sentence = LineBreaker.Break(stamp.Sentence, Look.Stamp with { Face = Face.Regular }, double.MaxValue)[0];

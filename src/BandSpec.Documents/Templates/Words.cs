@@ -22,6 +22,9 @@ internal sealed partial class Words
 
     private sealed record Entry(string File, int Line, SafeTemplate Template);
 
+    /// <summary>The paths of the word files of a language.</summary>
+    public static IEnumerable<string> PathsOf(string language) => Files.Select(file => $"words/{language}/{file}");
+
     /// <summary>
     /// Reads the word files of a language; every entry is parsed at once, so that a mistake shows however rarely the entry is used.
     /// </summary>

@@ -49,7 +49,7 @@ public static class InputReading
             files.First(file => file.Kind == finding.Field.File).Place(finding);
         PlacedFinding[] findings = [.. files.SelectMany(file => file.PlacedFindings())];
         InputSource[] sources = [.. files.Select(file => file.Source).OfType<InputSource>()];
-        return new InputSet(findings.Length == 0 ? Whole(asked, wanted, platform, station) : null, sources, findings);
+        return new InputSet(findings.Length == 0 ? Whole(asked, wanted, platform, station) : null, sources, findings) { Placing = asked.Placed };
     }
 
     /// <summary>The application of three inputs without a finding.</summary>

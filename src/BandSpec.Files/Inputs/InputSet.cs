@@ -8,7 +8,17 @@ namespace BandSpec.Files.Inputs;
 /// <param name="Application">The application; <see langword="null"/> exactly when there are findings.</param>
 /// <param name="Sources">The files that could be had: the requirement first, then platform and station.</param>
 /// <param name="Findings">Everything that was found, by file, line and column.</param>
-public sealed record InputSet(Application? Application, IReadOnlyList<InputSource> Sources, IReadOnlyList<PlacedFinding> Findings);
+public sealed record InputSet(Application? Application, IReadOnlyList<InputSource> Sources, IReadOnlyList<PlacedFinding> Findings)
+{
+    /// <summary>Finds the place of a field of the requirement.</summary>
+    internal Func<Finding, PlacedFinding>? Placing { get; init; }
+
+    /// <summary>The same inputs, refused for what was found only after they had been read; the findings stand in the requirement.</summary>
+    public InputSet Refused(IReadOnlyList<Finding> found) => Refused([.. found.Select(finding => Placing!(finding))]);
+
+    /// <summary>The same inputs, refused for what was found in another file.</summary>
+    public InputSet Refused(IReadOnlyList<PlacedFinding> found) => this with { Application = null, Findings = [.. Findings, .. found] };
+}
 
 /// <summary>An input file that was read.</summary>
 /// <param name="Kind">Which input it is.</param>

@@ -52,16 +52,20 @@ internal sealed class OpenedFile
     }
 
     /// <summary>Adds a finding of a rule at the place of its field.</summary>
-    internal void Place(Finding finding)
-    {
-        Extent extent = root is null ? Extent.Start : Locating.Find(root, finding.Field.Path, finding.AtKey);
-        faults.Add(extent, finding.Field.Path, finding.Rule, finding.Found, finding.Accepted, finding.Nearest, finding.AtKey);
-    }
+    internal void Place(Finding finding) => faults.Add(
+        ExtentOf(finding), finding.Field.Path, finding.Rule, finding.Found, finding.Accepted, finding.Nearest, finding.AtKey);
+
+    /// <summary>A finding at the place of its field, without it being added.</summary>
+    internal PlacedFinding Placed(Finding finding) => new(finding, PlaceOf(ExtentOf(finding)));
 
     /// <summary>Everything found, by line and column.</summary>
     internal IEnumerable<PlacedFinding> PlacedFindings() =>
         from located in faults.All
         let at = located.Extent
         orderby at.Line, at.Column
-        select new PlacedFinding(located.Finding, new Place(name, at.Line, at.Column, at.Length, text.Line(at.Line)));
+        select new PlacedFinding(located.Finding, PlaceOf(at));
+
+    private Extent ExtentOf(Finding finding) => root is null ? Extent.Start : Locating.Find(root, finding.Field.Path, finding.AtKey);
+
+    private Place PlaceOf(Extent at) => new(name, at.Line, at.Column, at.Length, text.Line(at.Line));
 }

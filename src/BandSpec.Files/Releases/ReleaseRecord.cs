@@ -49,6 +49,13 @@ public sealed class ReleaseRecord
     /// <summary>The release with a digest, if there is one.</summary>
     public ChainedRelease? Find(string digest) => Entries.FirstOrDefault(entry => entry.Digest == digest);
 
+    /// <summary>The record as it was when one of its releases was made.</summary>
+    public ReleaseRecord Through(ChainedRelease entry)
+    {
+        int count = 1 + Entries.TakeWhile(other => other != entry).Count();
+        return new ReleaseRecord(string.Concat(text.Split('\n').Take(count).Select(line => line + "\n")), [.. Entries.Take(count)]);
+    }
+
     /// <summary>Reads a record, or finds where its chain is broken.</summary>
     /// <param name="content">The file.</param>
     /// <param name="finding">What is wrong with it; <see langword="null"/> exactly when there is a record.</param>

@@ -199,10 +199,10 @@ public sealed class CommandTests : IDisposable
     {
         desk.Write("mine/limits/broken.txt.scriban", "first line\n{{ for }}");
 
-        (int code, _, string error) = desk.Run("draft", "brine-reinjection.yaml", "--templates", "mine");
+        (int code, string output, _) = desk.Run("draft", "brine-reinjection.yaml", "--templates", "mine");
 
         Assert.Equal(2, code);
-        Assert.StartsWith("mine/limits/broken.txt.scriban:2:", error, StringComparison.Ordinal);
+        Assert.StartsWith("mine/limits/broken.txt.scriban:2:", output, StringComparison.Ordinal);
         Assert.False(Directory.Exists(desk.At("out")));
     }
 

@@ -87,6 +87,6 @@ public sealed class PackageFolderTests : IDisposable
     private static PackageFile[] Package(string text, params string[] more)
     {
         PackageFile[] files = [new("limits.csv", Encoding.UTF8.GetBytes(text)), .. more.Select(name => new PackageFile(name, default))];
-        return [.. files, new("manifest.json", ManifestJson.Write(Given.Requirement.Identity, [], files, "a test"))];
+        return [.. files, new("manifest.json", ManifestJson.Write(Given.Requirement.Identity, new PackageMaking("a test", "A4", "en", null), [], files))];
     }
 }

@@ -27,6 +27,8 @@ internal static class Drafts
 
     public static DocumentOptions Options { get; } = new() { Program = "BandSpec 0.1.0" };
 
+    public static ReleaseMark Mark { get; } = new("Ylva Strøm", new DateTimeOffset(2026, 11, 25, 9, 30, 0, TimeSpan.Zero), new string('a', 64));
+
     public static IReadOnlyDictionary<string, byte[]> Draw(Specification specification, DocumentOptions? options = null) =>
         SpecificationPackage.Draw(specification, Sources, options ?? Options).ToDictionary(f => f.Name, f => f.Bytes.ToArray());
 

@@ -64,7 +64,7 @@ public sealed class SpecificationPackageTests
     [Fact]
     public void Every_page_of_what_is_not_feasible_says_so()
     {
-        var files = Drafts.Draw(Drafts.Refused, Drafts.Options with { Released = true });
+        var files = Drafts.Draw(Drafts.Refused, Drafts.Options with { Release = Drafts.Mark });
         var pages = Tools.Run("pdftotext", files["specification.pdf"], path => $"-layout {path} -").TrimEnd('\f').Split('\f');
         Assert.All(pages, page => Assert.Contains("NOT FEASIBLE", page));
         Assert.StartsWith("**NOT FEASIBLE**", Markdown(files));
@@ -72,10 +72,17 @@ public sealed class SpecificationPackageTests
     }
 
     [Fact]
-    public void A_draft_is_marked_and_a_release_is_not()
+    public void Every_page_says_that_it_is_a_draft_or_who_released_it_and_when()
     {
-        Assert.Contains("DRAFT", Markdown(Feasible.Value));
-        Assert.DoesNotContain("DRAFT", Markdown(Drafts.Draw(Drafts.Feasible, Drafts.Options with { Released = true })));
+        var released = Drafts.Draw(Drafts.Feasible, Drafts.Options with { Release = Drafts.Mark });
+        Assert.StartsWith("**DRAFT**", Markdown(Feasible.Value));
+        Assert.StartsWith("**RELEASED** – by Ylva Strøm on 2026-11-25", Markdown(released));
+        Assert.Contains("09:30:00", Markdown(released));
+        Assert.Contains(Drafts.Mark.Digest, Markdown(released));
+        foreach (var (files, words) in new[] { (Feasible.Value, "DRAFT"), (released, "RELEASED") })
+            Assert.All(
+                Tools.Run("pdftotext", files["specification.pdf"], path => $"-layout {path} -").TrimEnd('\f').Split('\f'),
+                page => Assert.Contains(words, page));
     }
 
     [Fact]

@@ -41,6 +41,13 @@ internal sealed class Workshop : IDisposable
     /// <summary>Runs the program in the folder, without colours.</summary>
     public Screen Run(params string[] arguments) => RunAt(TimeProvider.System, arguments);
 
+    /// <summary>Releases the sample at half past nine on 25 November 2026.</summary>
+    public Screen Release(string by) => RunAt(new FixedClock(new DateTimeOffset(2026, 11, 25, 9, 30, 15, 700, TimeSpan.Zero)), "release", Brine, "--by", by);
+
+    /// <summary>What is in a folder, hidden entries too, but for the repository.</summary>
+    public string[] Names(string folder = "") =>
+        [.. Directory.EnumerateFileSystemEntries(PathOf(folder)).Select(path => Path.GetFileName(path)).Where(name => name != ".git").Order(StringComparer.Ordinal)];
+
     public Screen RunAt(TimeProvider clock, params string[] arguments)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
@@ -79,3 +86,9 @@ internal sealed class Workshop : IDisposable
 
 /// <summary>What a run of the program left on the screen.</summary>
 internal sealed record Screen(int ExitCode, string Output, string Error);
+
+/// <summary>A clock that stands still on the wall, but lets time be waited for.</summary>
+internal sealed class FixedClock(DateTimeOffset now) : TimeProvider
+{
+    public override DateTimeOffset GetUtcNow() => now;
+}

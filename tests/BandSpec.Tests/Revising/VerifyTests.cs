@@ -1,0 +1,107 @@
+using CsCheck;
+using Xunit;
+
+namespace BandSpec.Tests.Revising;
+
+/// <summary>Whatever is changed in a package, verify does not let it pass.</summary>
+public sealed class VerifyTests : IClassFixture<VerifyTests.ReleasedPackage>
+{
+    private readonly ReleasedPackage package;
+
+    public VerifyTests(ReleasedPackage package) => this.package = package;
+
+    [Fact]
+    public void Any_flipped_byte_in_any_file_shows()
+    {
+        foreach (string file in package.Files)
+        {
+            int length = (int)new FileInfo(file).Length;
+            foreach (int at in Offsets(length))
+            {
+                package.Flip(file, at, 1 << (at % 8));
+                try
+                {
+                    Screen screen = package.Shop.Run("verify", "out/HV-3107-A", "--quiet");
+                    Assert.True(screen.ExitCode == 1, $"{Path.GetFileName(file)} at {at}: {screen.Output}{screen.Error}");
+                }
+                finally
+                {
+                    package.Flip(file, at, 1 << (at % 8));
+                }
+            }
+        }
+
+        Assert.Equal(0, package.Shop.Run("verify", "out/HV-3107-A", "--quiet").ExitCode);
+    }
+
+    [Fact]
+    public void Any_flipped_byte_in_a_document_alone_shows()
+    {
+        string pdf = package.Files.Single(file => file.EndsWith(".pdf", StringComparison.Ordinal));
+        byte[] original = File.ReadAllBytes(pdf);
+        string copy = package.Shop.PathOf("copy.pdf");
+        foreach (int at in Offsets(original.Length))
+        {
+            byte[] changed = [.. original];
+            changed[at] ^= (byte)(1 << (at % 8));
+            File.WriteAllBytes(copy, changed);
+            Assert.Equal(1, package.Shop.Run("verify", "copy.pdf", "--quiet").ExitCode);
+        }
+    }
+
+    [Fact]
+    public void A_missing_file_and_a_file_too_many_show()
+    {
+        string limits = package.Files.Single(file => file.EndsWith("limits.json", StringComparison.Ordinal)), away = package.Shop.PathOf("away");
+        File.Move(limits, away);
+        Screen missing = package.Shop.Run("verify", "out/HV-3107-A", "--quiet");
+        File.Move(away, limits);
+        Assert.Equal((1, "DIFFERS limits.json: it is missing\n"), (missing.ExitCode, missing.Output));
+        string stranger = Path.Combine(Path.GetDirectoryName(limits)!, "limits-new.json");
+        File.WriteAllText(stranger, "{}");
+        Screen more = package.Shop.Run("verify", "out/HV-3107-A", "--quiet");
+        File.Delete(stranger);
+        Assert.Equal((1, "DIFFERS limits-new.json: it is not a file of the package\n"), (more.ExitCode, more.Output));
+    }
+
+    [Theory]
+    [InlineData("nowhere")]
+    [InlineData("brine.yaml")]
+    [InlineData("platforms")]
+    public void What_is_no_specification_is_not_verified(string name)
+    {
+        Screen screen = package.Shop.Run("verify", name);
+        Assert.Equal(1, screen.ExitCode);
+        Assert.Contains("it is not the PDF of a specification, or it was damaged", screen.Output, StringComparison.Ordinal);
+    }
+
+    /// <summary>Both ends, and some in between that differ from run to run of the whole suite but not within one.</summary>
+    private static IEnumerable<int> Offsets(int length) =>
+        Gen.Int[0, length - 1].Array[Rounds].Single().Concat([0, length / 2, length - 1]).Distinct();
+
+    /// <summary>BANDSPEC_FLIPS makes the run a long one.</summary>
+    private static int Rounds => int.TryParse(Environment.GetEnvironmentVariable("BANDSPEC_FLIPS"), out int rounds) ? rounds : 2;
+
+    /// <summary>A released package.</summary>
+    public sealed class ReleasedPackage : IDisposable
+    {
+        public ReleasedPackage()
+        {
+            Assert.Equal(0, Shop.Release("Ylva Strøm").ExitCode);
+            Files = [.. Directory.EnumerateFiles(Shop.PathOf("out/HV-3107-A")).Order(StringComparer.Ordinal)];
+        }
+
+        internal Workshop Shop { get; } = new();
+
+        public string[] Files { get; }
+
+        public void Flip(string file, int at, int bit)
+        {
+            byte[] bytes = File.ReadAllBytes(file);
+            bytes[at] ^= (byte)bit;
+            File.WriteAllBytes(file, bytes);
+        }
+
+        public void Dispose() => Shop.Dispose();
+    }
+}
