@@ -43,7 +43,7 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
         if (inputs.Application is not { } application)
             return new Draft(file, inputs, null, null);
         Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation, DraftExtras.DiagnosisOfNo));
         TemplateFolder? templates = TemplateFolder.Find(folders.Templates, file, terminal.Folder);
         IReadOnlyList<PackageFile> files = PackageContents.Of(specification, inputs.Sources, templates, look);
         PackageFolder folder = new(Path.GetFullPath(folders.Out, terminal.Folder), application.Requirement.Identity.FolderName);

@@ -1,7 +1,7 @@
 namespace BandSpec.Core.Planning;
 
 /// <summary>One run over some families: what a plan must reach, and who has reached it. Safe for several threads.</summary>
-internal sealed class Heat(MarginScore margin, double least, bool rmsFirst)
+internal sealed class Heat(MarginScore margin, double least, bool rmsFirst, double mostRms = double.PositiveInfinity)
 {
     private readonly Lock gate = new();
     private double bestMargin = double.NegativeInfinity;
@@ -20,7 +20,7 @@ internal sealed class Heat(MarginScore margin, double least, bool rmsFirst)
     public double LeastMargin => RmsFirst ? least : Math.Max(least, Contest.TieBelow(Volatile.Read(ref bestMargin)));
 
     /// <summary>An rms above this is out.</summary>
-    public double MostRms => RmsFirst ? Contest.TieAbove(Volatile.Read(ref bestRms)) : double.PositiveInfinity;
+    public double MostRms => Math.Min(mostRms, RmsFirst ? Contest.TieAbove(Volatile.Read(ref bestRms)) : double.PositiveInfinity);
 
     /// <summary>Takes a plan into the running and those out that it beats.</summary>
     public void Enter(Contender contender)

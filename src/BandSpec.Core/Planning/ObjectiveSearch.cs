@@ -6,7 +6,7 @@ namespace BandSpec.Core.Planning;
 /// <summary>The way to the best plan by each objective, over one set of nodes.</summary>
 internal sealed class ObjectiveSearch
 {
-    private const double Feasible = 1;
+    private const double Enough = 1;
 
     /// <summary>After so many plans in cost levels without a feasible one, making cuts pays.</summary>
     private const long ManyPlans = 20_000;
@@ -15,14 +15,14 @@ internal sealed class ObjectiveSearch
     private readonly CancellationToken cancellation;
     private readonly MarginScore margin;
     private readonly CutMaking cuts;
-    private readonly Contender start;
+    private readonly Lazy<Contender> start;
 
     public ObjectiveSearch(PlanSearch search, IReadOnlyList<NodePlace> added, CancellationToken cancellation)
     {
         (this.search, this.cancellation) = (search, cancellation);
         margin = new MarginScore(search.Tables, added);
         cuts = new CutMaking(search.Tables, added);
-        start = new PlanAscent(search.Tables, margin, search.Rms).Climb();
+        start = new Lazy<Contender>(() => new PlanAscent(search.Tables, margin, search.Rms).Climb());
     }
 
     private PlanFamilies Families => search.Tables.Families;
@@ -35,48 +35,60 @@ internal sealed class ObjectiveSearch
         _ => MostMargin(),
     };
 
+    /// <summary>The feasible plan of largest margin; nothing when there is none. Sooner done than the largest margin of all.</summary>
+    public Contender? Feasible()
+    {
+        var heat = new Heat(margin, Enough, rmsFirst: false);
+        heat.Enter(start.Value);
+        double level = Math.Max(Enough, Contest.TieBelow(start.Value.Margin));
+        return search.Best(Families.All, cuts.CutAt(level), heat, cancellation);
+    }
+
     /// <summary>The best of all plans by margin, whether feasible or not; begins with a plan found by climbing, which most plans cannot reach.</summary>
     private Contender MostMargin()
     {
         var heat = new Heat(margin, double.NegativeInfinity, rmsFirst: false);
-        heat.Enter(start);
-        return search.Best(Families.All, cuts.CutAt(Contest.TieBelow(start.Margin)), heat, cancellation) ?? start;
+        heat.Enter(start.Value);
+        return search.Best(Families.All, cuts.CutAt(Contest.TieBelow(start.Value.Margin)), heat, cancellation) ?? start.Value;
     }
 
     private Contender LeastError()
     {
         Contender best = BestKnown();
-        if (best.Margin < Feasible)
+        if (best.Margin < Enough)
             return best;
-        var heat = new Heat(margin, Feasible, rmsFirst: true);
+        var heat = new Heat(margin, Enough, rmsFirst: true);
         heat.Enter(best);
-        return search.Best(Families.All, cuts.CutAt(Feasible), heat, cancellation) ?? best;
+        return search.Best(Families.All, cuts.CutAt(Enough), heat, cancellation) ?? best;
     }
 
     /// <summary>A feasible plan, if climbing finds one; otherwise the best of all by margin, which tells whether there is any.</summary>
-    private Contender BestKnown() => start.Margin >= Feasible ? start : MostMargin();
+    private Contender BestKnown() => start.Value.Margin >= Enough ? start.Value : MostMargin();
 
-    /// <summary>The cheapest feasible plan: of the first cost level, from the cheapest up, that has one.</summary>
+    /// <summary>
+    /// The cheapest feasible plan: of the first cost level, from the cheapest up, that has one. After many plans without one it is found out
+    /// first whether there is any, and cuts are made.
+    /// </summary>
     private Contender Cheapest()
     {
-        Contender best = BestKnown();
-        if (best.Margin < Feasible)
-            return best;
         IReadOnlyList<ListGroup> groups = cuts.Uncut();
         long passed = 0;
-        bool areCut = false;
         foreach (IReadOnlyList<PlanFamily> level in Families.CostLevels())
         {
-            Contender? winner = search.Best(level, groups, new Heat(margin, Feasible, rmsFirst: false), cancellation);
+            if (passed >= ManyPlans)
+            {
+                if (BestKnown() is { Margin: < Enough } nearest)
+                    return nearest;
+                groups = cuts.CutAt(Enough);
+                passed = long.MinValue;
+            }
+
+            Contender? winner = search.Best(level, groups, new Heat(margin, Enough, rmsFirst: false), cancellation);
             if (winner is not null || cancellation.IsCancellationRequested)
-                return winner ?? best;
+                return winner ?? start.Value;
             passed += level.Sum(f => Families.ListsIn(f) * Families.DegreesOf[f.Count].Count);
-            if (areCut || passed < ManyPlans)
-                continue;
-            groups = cuts.CutAt(Feasible);
-            areCut = true;
         }
 
-        return best;
+        return passed >= 0 ? BestKnown() : start.Value;
     }
 }

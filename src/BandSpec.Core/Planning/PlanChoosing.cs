@@ -49,6 +49,25 @@ internal static class PlanChoosing
         }
     }
 
+    /// <summary>A plan that is feasible at every pressure and temperature; nothing when no candidate plan is, which is then proven.</summary>
+    public static CompensationPlan? Feasible(PlanSearch search)
+    {
+        List<NodePlace> added = [];
+        while (new ObjectiveSearch(search, added, CancellationToken.None).Feasible() is { } winner)
+        {
+            CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
+            List<NodePlace> shortOf =
+            [
+                .. ContinuousMargin.AllOf(search.Tables.Application, plan).Where(r => r.Margin < 1 - Shortfall).Select(r => r.Worst).Where(p => !added.Contains(p)),
+            ];
+            if (shortOf.Count == 0)
+                return plan;
+            added.AddRange(shortOf);
+        }
+
+        return null;
+    }
+
     /// <summary>The plan that the requirement pins, judged between the nodes as well; nothing when it pins none.</summary>
     /// <param name="application">The application.</param>
     /// <param name="optimum">What the search would have chosen.</param>

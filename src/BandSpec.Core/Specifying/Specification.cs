@@ -45,6 +45,14 @@ public sealed record Specification
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
 
     /// <summary>
+    /// Why the answer is what it is and, when no plan fits, what would make one fit; <see langword="null"/> unless it was asked for.
+    /// </summary>
+    public Diagnosis? Diagnosis { get; init; }
+
+    /// <summary>What each input's small change does to the plan's margin; <see langword="null"/> unless it was asked for.</summary>
+    public IReadOnlyList<MarginGain>? Gains { get; init; }
+
+    /// <summary>
     /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.
     /// </summary>
     public bool Feasible => Bands.Margin >= 1 && Choice.HoldsEverywhere

@@ -21,13 +21,17 @@ public static class SpecificationDraft
     /// <param name="cancellation">
     /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
     /// </param>
+    /// <param name="extras">What is worked out beside the specification.</param>
     public static Specification Draft(
-        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
+        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default,
+        DraftExtras extras = DraftExtras.None)
     {
         ArgumentNullException.ThrowIfNull(application);
         PlanChoice optimum = ConfidentChoice.Of(application, asked => PlanChoosing.Choose(asked, progress, cancellation));
         PlanChoice choice = PlanChoosing.Pinned(application, optimum) ?? optimum;
         BandMap bands = BandMap.Of(application, choice.Plan, choice.AddedNodes);
+        bool fits = bands.Margin >= 1 && choice.HoldsEverywhere;
+        bool isDiagnosed = optimum.Proven && (extras.HasFlag(DraftExtras.Diagnosis) || (!fits && extras.HasFlag(DraftExtras.DiagnosisOfNo)));
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         double confidence = application.Requirement.Capability.Confidence ?? UsualConfidence;
         MarginBound? bound = MarginBound.Of(application, choice.Plan, bands, confidence);
@@ -44,6 +48,25 @@ public static class SpecificationDraft
             Allocation = allocation,
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
+            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum) : null,
+            Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
     }
+}
+
+/// <summary>What can be worked out beside a specification; takes a second or so each.</summary>
+[Flags]
+public enum DraftExtras
+{
+    /// <summary>Nothing more.</summary>
+    None = 0,
+
+    /// <summary>Why the answer is what it is.</summary>
+    Diagnosis = 1,
+
+    /// <summary>The same when the answer is no, with the single changes that would make the requirement feasible.</summary>
+    DiagnosisOfNo = 2,
+
+    /// <summary>What a small change of each input does to the margin.</summary>
+    Gains = 4,
 }
