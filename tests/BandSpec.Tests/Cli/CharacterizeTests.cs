@@ -1,0 +1,89 @@
+using BandSpec.Tests.House;
+using Snapshooter.Xunit3;
+using Xunit;
+
+namespace BandSpec.Tests.Cli;
+
+/// <summary>The commands that make statistics, run on the demo readings as a user would.</summary>
+public sealed class CharacterizeTests : IDisposable
+{
+    private static readonly string[] Range = ["--range", "0 bar..25 bar"];
+    private readonly Desk desk = new();
+
+    public CharacterizeTests()
+    {
+        foreach (string name in new[] { "steel-cell-40.csv", "steel-cell-40-storage.csv" })
+            File.Copy(Path.Combine(Tree.Root, "requirements-demo", "readings", name), desk.At(name));
+    }
+
+    public void Dispose() => desk.Dispose();
+
+    [Fact]
+    public void Characterize_shows_the_statistics_and_writes_platform_and_report()
+    {
+        (int code, string output, string error) = desk.Run(
+            ["characterize", "steel-cell-40.csv", .. Range, "--platform", "cell.yaml", "--report", "report", "--name", "SK-40 steel cell"]);
+
+        Assert.Equal((0, ""), (code, error));
+        Snapshot.Match(output + "\n" + File.ReadAllText(desk.At("cell.yaml")));
+        Assert.Equal(
+            ["characterization.json", "characterization.md", "characterization.pdf", "raw-span.svg", "raw-zero.svg", "residuals.svg"],
+            Directory.EnumerateFiles(desk.At("report")).Select(Path.GetFileName).Order(StringComparer.Ordinal));
+    }
+
+    [Fact]
+    public void A_platform_keeps_its_name_and_ratings_and_age_touches_nothing_but_ageing()
+    {
+        desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--quiet"]);
+        string characterized = File.ReadAllText(desk.At("platforms/steel-cell-40.yaml"));
+        Assert.Contains("platform: { name: SK-40 welded steel cell, revision: 4 }", characterized, StringComparison.Ordinal);
+        Assert.Contains("burst-factor: 5", characterized, StringComparison.Ordinal);
+
+        (int code, string output, string error) = desk.Run(
+            ["age", "steel-cell-40-storage.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--plan-units", "12", "--plan-storage", "85 °C", "--plan-times", "1000 h", "3000 h"]);
+
+        Assert.Equal((0, ""), (code, error));
+        Snapshot.Match(output);
+        string aged = File.ReadAllText(desk.At("platforms/steel-cell-40.yaml"));
+        Assert.Equal(Before(characterized, "ageing:"), Before(aged, "# Drift of 60 units"));
+        Assert.Contains("    activation-energy-error: ", aged, StringComparison.Ordinal);
+        Assert.Equal((0, ""), (desk.Run("check", "brine-reinjection.yaml", "--quiet").ExitCode, desk.Run("check", "brine-reinjection.yaml", "--quiet").Out));
+    }
+
+    [Fact]
+    public void A_draft_says_what_can_be_claimed_from_the_sample()
+    {
+        desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--quiet"]);
+        string output = desk.Run("draft", "brine-reinjection.yaml").Out;
+        Assert.Contains("with 95 % confidence: the statistics rest on 46 units of 3 lots", output, StringComparison.Ordinal);
+        string text = File.ReadAllText(desk.At("out/HV-3107-A/specification.md")).Replace('\u00a0', ' ');
+        Assert.Contains("rest on 3860 readings of 46 units of 3 lots", text, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_confidence_without_a_sample_is_a_finding()
+    {
+        desk.Change("brine-reinjection.yaml", "long-run: 1.33 }", "long-run: 1.33, confidence: 0.95 }");
+        (int code, string output, _) = desk.Run("check", "brine-reinjection.yaml");
+        Assert.Equal(2, code);
+        Assert.Contains("[no-sample]", output, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Findings_name_what_is_wrong_and_nothing_is_written()
+    {
+        (int code, string output, _) = desk.Run("characterize", "steel-cell-40.csv", "--platform", "cell.yaml");
+        Assert.Equal(2, code);
+        Assert.Contains("[no-range]", output, StringComparison.Ordinal);
+        Assert.False(File.Exists(desk.At("cell.yaml")));
+
+        (code, output, _) = desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--exclude", "999"]);
+        Assert.Equal(2, code);
+        Assert.Contains("`999` is to be left out and not among the readings", output, StringComparison.Ordinal);
+
+        Assert.Equal((2, "bandspec: `zero=12`: accepted are zero, span, bow or s-shape with a degree 0 to 8 or `none`, such as zero=3\nbandspec: see `bandspec characterize --help`\n"),
+            (desk.Run("characterize", "steel-cell-40.csv", "--degree", "zero=12").ExitCode, desk.Run("characterize", "steel-cell-40.csv", "--degree", "zero=12").Error));
+    }
+
+    private static string Before(string text, string mark) => text[..text.IndexOf(mark, StringComparison.Ordinal)];
+}
