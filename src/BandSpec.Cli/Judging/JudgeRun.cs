@@ -3,6 +3,7 @@ using BandSpec.Core.LotJudging;
 using BandSpec.Files.Inputs;
 using BandSpec.Files.LotReadings;
 using BandSpec.Files.Yaml;
+using BandSpec.Parquet;
 
 namespace BandSpec.Cli.Judging;
 
@@ -46,12 +47,21 @@ internal static class JudgeRun
         try
         {
             using FileStream stream = new(path, FileMode.Open, FileAccess.Read, FileShare.Read, 1 << 16, FileOptions.SequentialScan);
-            return CsvReadings.Read(stream, file, collector);
+            return IsParquet(stream) ? ParquetReadings.Read(path, file, collector) : CsvReadings.Read(stream, file, collector);
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
             return new(file, null, 0, 0, [Refused(file, fault)]);
         }
+    }
+
+    /// <summary>Told by its first bytes, not by its name.</summary>
+    private static bool IsParquet(FileStream stream)
+    {
+        Span<byte> beginning = stackalloc byte[ParquetReadings.Magic.Length];
+        int read = stream.ReadAtLeast(beginning, beginning.Length, throwOnEndOfStream: false);
+        stream.Position = 0;
+        return beginning[..read].SequenceEqual(ParquetReadings.Magic);
     }
 
     private static PlacedFinding Refused(string file, Exception fault) => new(

@@ -12,7 +12,7 @@ namespace BandSpec.Core.LotJudging;
 /// <param name="Place">Where: temperature, and pressure fraction where it matters.</param>
 /// <param name="Terms">Index of a point and the weight of its error.</param>
 /// <param name="Limit">The magnitude that may not be exceeded.</param>
-internal sealed record DerivedFigure(string Name, string Place, IReadOnlyList<(int Point, double Weight)> Terms, PercentOfSpan Limit)
+internal sealed record DerivedFigure(string Name, string Place, (int Point, double Weight)[] Terms, PercentOfSpan Limit)
 {
     /// <summary>The figure of one unit in %FS, from its errors by point; NaN as soon as one it needs is missing (NaN).</summary>
     public double Of(ReadOnlySpan<float> errors)

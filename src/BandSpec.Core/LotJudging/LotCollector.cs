@@ -30,7 +30,7 @@ public sealed class LotCollector
     /// <summary>Lots told apart at most; readings of later ones count as one more lot.</summary>
     public const int MostLots = 4000;
 
-    private readonly Tally[] tallies;
+    private readonly TallyBench bench;
     private readonly Dictionary<string, int> lots = [];
     private readonly Dictionary<string, int>.AlternateLookup<ReadOnlySpan<char>> lotBySpan;
     private readonly List<int> lotOfUnit = [];
@@ -43,7 +43,7 @@ public sealed class LotCollector
         ArgumentNullException.ThrowIfNull(limits);
         Limits = limits;
         Units = new UnitTable(limits.Points.Count);
-        tallies = [.. limits.Points.Select(point => new Tally(Interval.Symmetric(point.Tolerance.Percent)))];
+        bench = new([.. limits.Points.Select(point => new Tally(Interval.Symmetric(point.Tolerance.Percent)))]);
         lotBySpan = lots.GetAlternateLookup<ReadOnlySpan<char>>();
     }
 
@@ -61,7 +61,8 @@ public sealed class LotCollector
 
     internal UnitTable Units { get; }
 
-    internal IReadOnlyList<Tally> Tallies => tallies;
+    /// <summary>What was tallied at each point, of all readings taken so far.</summary>
+    internal IReadOnlyList<Tally> Tallies => bench.Finish();
 
     /// <summary>
     /// Takes one reading. A second one of the same unit and point is a <see cref="ReadingFault.Duplicate"/>; one of a unit beyond the memory bound
@@ -94,7 +95,7 @@ public sealed class LotCollector
         }
 
         Readings++;
-        tallies[reading.Point].Add(error, lot, unit);
+        bench.Add(new(reading.Point, unit, lot, error));
     }
 
     /// <summary>The lot in which a unit was first met.</summary>

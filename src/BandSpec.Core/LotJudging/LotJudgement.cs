@@ -1,3 +1,5 @@
+using BandSpec.Core.Numerics;
+
 namespace BandSpec.Core.LotJudging;
 
 /// <summary>What a lot is worth: the finished record that screens and documents are written from.</summary>
@@ -36,7 +38,7 @@ public sealed record LotJudgement
     /// <summary>Whether every demand is proven. Each at 95 %: that all hold is then proven at 95 % too, since the weakest decides.</summary>
     public bool IsProven => Sample == Standing.Proven && LongRun == Standing.Proven && IsMet;
 
-    /// <summary>The main story: judges everything that was collected.</summary>
+    /// <summary>The main story: judges everything that was collected. Characteristics are judged side by side; the answer does not depend on it.</summary>
     public static LotJudgement Of(LotCollector collected)
     {
         ArgumentNullException.ThrowIfNull(collected);
@@ -46,14 +48,14 @@ public sealed record LotJudgement
         long[] verdicts = new long[Enum.GetValues<UnitVerdict>().Length];
         for (int unit = 0; unit < collected.Units.Count; unit++)
             verdicts[(int)judging.VerdictOf(unit)]++;
-        IEnumerable<CharacteristicJudgement> points = limits.Points.Select((point, i) =>
-            CharacteristicJudging.Judge(point.Id, "", false, collected.Tallies[i], limits, collected.Units));
-        IEnumerable<CharacteristicJudgement> derived = figures.Zip(Tallied(collected, figures), (figure, tally) =>
-            CharacteristicJudging.Judge(figure.Name, figure.Place, true, tally, limits, collected.Units));
+        Func<CharacteristicJudgement>[] points = [.. limits.Points.Select((point, i) => (Func<CharacteristicJudgement>)(() =>
+            CharacteristicJudging.Judge(point.Id, "", false, collected.Tallies[i], limits, collected.Units)))];
+        Func<CharacteristicJudgement>[] derived = [.. figures.Select(figure => (Func<CharacteristicJudgement>)(() =>
+            CharacteristicJudging.Judge(figure.Name, figure.Place, true, Tallied(collected, figure), limits, collected.Units)))];
         return new LotJudgement
         {
             Limits = limits,
-            Characteristics = [.. points, .. derived],
+            Characteristics = [.. points.Concat(derived).AsParallel().AsOrdered().Select(judge => judge())],
             Readings = collected.Readings,
             LotNames = collected.LotNames,
             UnitCounts = (verdicts[(int)UnitVerdict.Pass], verdicts[(int)UnitVerdict.Fail], verdicts[(int)UnitVerdict.Incomplete]),
@@ -62,15 +64,14 @@ public sealed record LotJudgement
         };
     }
 
-    /// <summary>The derived figures of every unit that has the readings for them, taken in like readings.</summary>
-    private static Tally[] Tallied(LotCollector collected, IReadOnlyList<DerivedFigure> figures)
+    /// <summary>One derived figure of every unit that has the readings for it, taken in like readings.</summary>
+    private static Tally Tallied(LotCollector collected, DerivedFigure figure)
     {
-        Tally[] tallies = [.. figures.Select(figure => new Tally(Numerics.Interval.Symmetric(figure.Limit.Percent)))];
+        var tally = new Tally(Interval.Symmetric(figure.Limit.Percent));
         for (int unit = 0; unit < collected.Units.Count; unit++)
-            for (int k = 0; k < tallies.Length; k++)
-                if (figures[k].Of(collected.Units.ErrorsOf(unit)) is var value && !double.IsNaN(value))
-                    tallies[k].Add(value, collected.LotOf(unit), unit);
-        return tallies;
+            if (figure.Of(collected.Units.ErrorsOf(unit)) is var value && !double.IsNaN(value))
+                tally.Add(value, collected.LotOf(unit), unit);
+        return tally;
     }
 
     private static Standing? Worst(IEnumerable<CriterionJudgement?> judgements) => judgements.Max(j => j?.Standing);

@@ -22,8 +22,10 @@ public sealed record UnitJudgement(
     string Serial, UnitVerdict Verdict, IReadOnlyList<(string Name, double Error)> Reasons, IReadOnlyList<string> Missing);
 
 /// <summary>Judges units one by one.</summary>
-internal sealed class UnitJudging(LotLimits limits, UnitTable units, IReadOnlyList<DerivedFigure> figures)
+internal sealed class UnitJudging(LotLimits limits, UnitTable units, IReadOnlyList<DerivedFigure> derived)
 {
+    private readonly DerivedFigure[] figures = [.. derived];
+
     /// <summary>Only the verdict, for counting.</summary>
     public UnitVerdict VerdictOf(int unit)
     {
@@ -45,6 +47,9 @@ internal sealed class UnitJudging(LotLimits limits, UnitTable units, IReadOnlyLi
     /// <summary>The verdict with its reasons.</summary>
     public UnitJudgement Judge(int unit)
     {
+        UnitVerdict verdict = VerdictOf(unit);
+        if (verdict == UnitVerdict.Pass)
+            return new(units.SerialOf(unit), verdict, [], []);
         ReadOnlySpan<float> errors = units.ErrorsOf(unit);
         List<(string, double)> reasons = [];
         List<string> missing = [];
@@ -59,6 +64,6 @@ internal sealed class UnitJudging(LotLimits limits, UnitTable units, IReadOnlyLi
         foreach (DerivedFigure figure in figures)
             if (figure.Of(errors) is var value && Math.Abs(value) > figure.Limit.Percent)
                 reasons.Add(($"{figure.Name} at {figure.Place}", value));
-        return new(units.SerialOf(unit), VerdictOf(unit), reasons, missing);
+        return new(units.SerialOf(unit), verdict, reasons, missing);
     }
 }

@@ -15,6 +15,13 @@ public static class UnitsCsv
         to.Write("serial,verdict,reasons,missing\n");
         foreach (UnitJudgement unit in units)
         {
+            if (unit.Verdict == UnitVerdict.Pass)
+            {
+                to.Write(Cell(unit.Serial));
+                to.Write(",pass,,\n");
+                continue;
+            }
+
             string reasons = string.Join("; ", unit.Reasons.Select(r => string.Create(CultureInfo.InvariantCulture, $"{r.Name} {r.Error:0.####} %FS")));
             to.Write($"{Cell(unit.Serial)},{JudgementJson.Word(unit.Verdict)},{Cell(reasons)},{Cell(string.Join("; ", unit.Missing))}\n");
         }

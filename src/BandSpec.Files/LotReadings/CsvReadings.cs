@@ -88,14 +88,14 @@ public static class CsvReadings
 /// <summary>Picks the cells of one line by the layout.</summary>
 internal sealed class CsvLine(ReadingLayout layout, ReadingTaker taker)
 {
-    private readonly int serial = Index(layout, ReadingColumn.Serial);
-    private readonly int reading = Index(layout, ReadingColumn.Reading);
-    private readonly int point = Index(layout, ReadingColumn.Point);
-    private readonly int temperature = Index(layout, ReadingColumn.Temperature);
-    private readonly int pressure = Index(layout, ReadingColumn.Pressure);
-    private readonly int direction = Index(layout, ReadingColumn.Direction);
+    private readonly int serial = Index(layout, LotColumn.Serial);
+    private readonly int reading = Index(layout, LotColumn.Reading);
+    private readonly int point = Index(layout, LotColumn.Point);
+    private readonly int temperature = Index(layout, LotColumn.Temperature);
+    private readonly int pressure = Index(layout, LotColumn.Pressure);
+    private readonly int direction = Index(layout, LotColumn.Direction);
     private readonly int lot = layout.LotIndex;
-    private readonly int needed = 1 + new[] { ReadingColumn.Serial, ReadingColumn.Reading, ReadingColumn.Point }.Max(column => Index(layout, column));
+    private readonly int needed = 1 + new[] { LotColumn.Serial, LotColumn.Reading, LotColumn.Point }.Max(column => Index(layout, column));
 
     public void Take(SepReader.Row row)
     {
@@ -124,5 +124,5 @@ internal sealed class CsvLine(ReadingLayout layout, ReadingTaker taker)
 
     private static ReadOnlySpan<char> Cell(SepReader.Row row, int index) => index >= 0 && index < row.ColCount ? row[index].Span : default;
 
-    private static int Index(ReadingLayout layout, ReadingColumn column) => layout.Columns[column]?.Index ?? -1;
+    private static int Index(ReadingLayout layout, LotColumn column) => layout.Columns[column]?.Index ?? -1;
 }

@@ -3,7 +3,7 @@ using BandSpec.Core.Findings;
 namespace BandSpec.Files.LotReadings;
 
 /// <summary>What a column of readings holds.</summary>
-internal enum ReadingColumn
+internal enum LotColumn
 {
     Serial,
     Point,
@@ -21,19 +21,19 @@ internal readonly record struct PlacedColumn(int Index, string Heading, string U
 /// <summary>Which column is which, found by heading in any order.</summary>
 internal sealed class ReadingColumns
 {
-    private static readonly (ReadingColumn Column, string[] Headings)[] Accepted =
+    private static readonly (LotColumn Column, string[] Headings)[] Accepted =
     [
-        (ReadingColumn.Serial, ["serial", "serial-number", "serial-no", "sn", "unit", "unit-id"]),
-        (ReadingColumn.Point, ["point", "point-id", "id", "test-point"]),
-        (ReadingColumn.Temperature, ["temperature", "temp", "t", "chamber-temperature"]),
-        (ReadingColumn.Pressure, ["pressure", "p", "applied-pressure"]),
-        (ReadingColumn.Direction, ["direction", "dir"]),
-        (ReadingColumn.Reading, ["reading", "output", "value", "measured"]),
-        (ReadingColumn.Lot, ["lot", "batch", "lot-number"]),
-        (ReadingColumn.Date, ["date", "day", "time", "timestamp", "date-time"]),
+        (LotColumn.Serial, ["serial", "serial-number", "serial-no", "sn", "unit", "unit-id"]),
+        (LotColumn.Point, ["point", "point-id", "id", "test-point"]),
+        (LotColumn.Temperature, ["temperature", "temp", "t", "chamber-temperature"]),
+        (LotColumn.Pressure, ["pressure", "p", "applied-pressure"]),
+        (LotColumn.Direction, ["direction", "dir"]),
+        (LotColumn.Reading, ["reading", "output", "value", "measured"]),
+        (LotColumn.Lot, ["lot", "batch", "lot-number"]),
+        (LotColumn.Date, ["date", "day", "time", "timestamp", "date-time"]),
     ];
 
-    private readonly Dictionary<ReadingColumn, PlacedColumn> columns = [];
+    private readonly Dictionary<LotColumn, PlacedColumn> columns = [];
 
     private ReadingColumns(IReadOnlyList<string> headings) => Headings = headings;
 
@@ -44,7 +44,7 @@ internal sealed class ReadingColumns
     public List<string> Unused { get; } = [];
 
     /// <summary>The column of a kind; <see langword="null"/> when the file has none.</summary>
-    public PlacedColumn? this[ReadingColumn column] => columns.TryGetValue(column, out PlacedColumn placed) ? placed : null;
+    public PlacedColumn? this[LotColumn column] => columns.TryGetValue(column, out PlacedColumn placed) ? placed : null;
 
     /// <summary>Finds the columns; what is missing or doubled is found too.</summary>
     public static (ReadingColumns Columns, IReadOnlyList<Finding> Findings) Of(IReadOnlyList<string> headings)
@@ -67,27 +67,27 @@ internal sealed class ReadingColumns
 
     private IEnumerable<Finding> MissingColumns()
     {
-        if (this[ReadingColumn.Serial] is null)
-            yield return Missing(ReadingColumn.Serial);
-        if (this[ReadingColumn.Reading] is null)
-            yield return Missing(ReadingColumn.Reading);
-        if (this[ReadingColumn.Point] is null && (this[ReadingColumn.Temperature] is null || this[ReadingColumn.Pressure] is null))
-            yield return Missing(ReadingColumn.Point) with
+        if (this[LotColumn.Serial] is null)
+            yield return Missing(LotColumn.Serial);
+        if (this[LotColumn.Reading] is null)
+            yield return Missing(LotColumn.Reading);
+        if (this[LotColumn.Point] is null && (this[LotColumn.Temperature] is null || this[LotColumn.Pressure] is null))
+            yield return Missing(LotColumn.Point) with
             {
-                Accepted = $"a column {Names(ReadingColumn.Point)}, or columns for temperature and pressure",
+                Accepted = $"a column {Names(LotColumn.Point)}, or columns for temperature and pressure",
             };
     }
 
-    private Finding Missing(ReadingColumn column) => new(
+    private Finding Missing(LotColumn column) => new(
         FieldPath.InReadings(""), "missing-column", $"no column for the {Word(column)} among {string.Join(", ", Headings.Select(h => $"`{h}`"))}",
         $"a column {Names(column)}")
     {
         Nearest = Accepted[(int)column].Headings.FirstOrDefault(name => Unused.Exists(heading => Spelling.Nearest(Split(heading).Name, [name]) is not null)),
     };
 
-    private static string Names(ReadingColumn column) => string.Join(", ", Accepted[(int)column].Headings.Select(name => $"`{name}`"));
+    private static string Names(LotColumn column) => string.Join(", ", Accepted[(int)column].Headings.Select(name => $"`{name}`"));
 
-    private static string Word(ReadingColumn column) => column == ReadingColumn.Serial ? "serial number" : column.ToString().ToLowerInvariant();
+    private static string Word(LotColumn column) => column == LotColumn.Serial ? "serial number" : column.ToString().ToLowerInvariant();
 
     /// <summary>Name and unit of <c>Reading [mV]</c> or <c>reading (mV)</c>: lower case, blanks and underscores as hyphens.</summary>
     private static (string Name, string Unit) Split(string heading)

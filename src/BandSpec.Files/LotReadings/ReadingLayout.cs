@@ -11,7 +11,7 @@ public sealed class ReadingLayout
     private ReadingLayout(ReadingColumns columns, char separator, char decimalSign) =>
         (Columns, Separator, DecimalSign) = (columns, separator, decimalSign);
 
-    /// <summary>What parts the cells: <c>;</c>, <c>,</c> or a tab.</summary>
+    /// <summary>What parts the cells: <c>;</c>, <c>,</c> or a tab; the zero character in a file of typed columns.</summary>
     public char Separator { get; }
 
     /// <summary>What parts whole from fraction: <c>.</c> or <c>,</c>.</summary>
@@ -25,9 +25,10 @@ public sealed class ReadingLayout
     {
         get
         {
-            IEnumerable<string> taken = Enum.GetValues<ReadingColumn>().Where(IsRead).Select(c => $"{c.ToString().ToLowerInvariant()} from `{Columns[c]!.Value.Heading}`");
+            IEnumerable<string> taken = Enum.GetValues<LotColumn>().Where(IsRead).Select(c => $"{c.ToString().ToLowerInvariant()} from `{Columns[c]!.Value.Heading}`");
             string parted = Separator switch { '\t' => "tabs", ';' => "semicolons", _ => "commas" };
-            return $"cells parted by {parted}, decimal {(DecimalSign == ',' ? "comma" : "point")}; {string.Join(", ", taken)}";
+            string form = Separator == '\0' ? "columns of a database" : $"cells parted by {parted}, decimal {(DecimalSign == ',' ? "comma" : "point")}";
+            return $"{form}; {string.Join(", ", taken)}";
         }
     }
 
@@ -40,10 +41,16 @@ public sealed class ReadingLayout
     internal PressureUnit PressureUnit { get; private set; } = PressureUnit.Pascal;
 
     /// <summary>Where the lot stands: the lot's own column, else the date's; −1 without either.</summary>
-    internal int LotIndex => Columns[ReadingColumn.Lot]?.Index ?? Columns[ReadingColumn.Date]?.Index ?? -1;
+    internal int LotIndex => Columns[LotColumn.Lot]?.Index ?? Columns[LotColumn.Date]?.Index ?? -1;
 
     /// <summary>Whether the lot is the day of a date, so that the time after it does not count.</summary>
-    internal bool LotIsDay => Columns[ReadingColumn.Lot] is null;
+    internal bool LotIsDay => Columns[LotColumn.Lot] is null;
+
+    /// <summary>The heading that the lot is taken from; <see langword="null"/> without one.</summary>
+    internal string? LotHeading => HeadingOf(LotColumn.Lot) ?? HeadingOf(LotColumn.Date);
+
+    /// <summary>Whether points are found by their id, not by place.</summary>
+    internal bool HasPoint => Columns[LotColumn.Point] is not null;
 
     /// <summary>How numbers are written.</summary>
     internal CultureInfo Culture
@@ -73,17 +80,31 @@ public sealed class ReadingLayout
         (ReadingColumns columns, IReadOnlyList<Finding> findings) = ReadingColumns.Of(Cells(lines[0], separator));
         if (findings.Count > 0)
             return (null, findings);
-        int reading = columns[ReadingColumn.Reading]!.Value.Index;
+        int reading = columns[LotColumn.Reading]!.Value.Index;
         string[] readings = [.. lines.Skip(1).Take(200).Select(line => Cells(line, separator)).Where(cells => cells.Length > reading).Select(cells => cells[reading])];
         bool comma = separator != ',' && readings.Any(r => r.Contains(',')) && !readings.Any(r => r.Contains('.'));
-        var layout = new ReadingLayout(columns, separator, comma ? ',' : '.');
+        return Fitted(new ReadingLayout(columns, separator, comma ? ',' : '.'), limits);
+    }
+
+    /// <summary>The layout of a file whose columns are typed, so that only headings count.</summary>
+    internal static (ReadingLayout? Layout, IReadOnlyList<Finding> Findings) OfTable(IReadOnlyList<string> headings, LotLimits limits)
+    {
+        (ReadingColumns columns, IReadOnlyList<Finding> findings) = ReadingColumns.Of(headings);
+        return findings.Count > 0 ? (null, findings) : Fitted(new ReadingLayout(columns, '\0', '.'), limits);
+    }
+
+    /// <summary>The heading of a column; <see langword="null"/> when there is none.</summary>
+    internal string? HeadingOf(LotColumn column) => Columns[column]?.Heading;
+
+    private static (ReadingLayout? Layout, IReadOnlyList<Finding> Findings) Fitted(ReadingLayout layout, LotLimits limits)
+    {
         Finding[] units = [.. layout.TakeUnits(limits)];
         return units.Length > 0 ? (null, units) : (layout, []);
     }
 
     private IEnumerable<Finding> TakeUnits(LotLimits limits)
     {
-        PlacedColumn reading = Columns[ReadingColumn.Reading]!.Value;
+        PlacedColumn reading = Columns[LotColumn.Reading]!.Value;
         if (reading.Unit.Length == 0)
             ReadingFactor = 1;
         else if (OutputUnits.Factor(reading.Unit, limits.OutputUnit) is { } factor)
@@ -92,7 +113,7 @@ public sealed class ReadingLayout
             yield return new(FieldPath.InReadings(reading.Heading), "unit", $"readings in `{reading.Unit}`", $"`{limits.OutputUnit}`, as in the limits");
 
         PressureUnit = limits.Points[0].Pressure.Unit;
-        if (Columns[ReadingColumn.Pressure] is { Unit.Length: > 0 } pressure)
+        if (Columns[LotColumn.Pressure] is { Unit.Length: > 0 } pressure)
         {
             if (PressureUnit.All.FirstOrDefault(unit => unit.Symbol == pressure.Unit) is { } known)
                 PressureUnit = known;
@@ -101,11 +122,11 @@ public sealed class ReadingLayout
         }
     }
 
-    private bool IsRead(ReadingColumn column) => column switch
+    private bool IsRead(LotColumn column) => column switch
     {
-        ReadingColumn.Date => Columns[column] is not null && Columns[ReadingColumn.Lot] is null,
-        ReadingColumn.Temperature or ReadingColumn.Pressure or ReadingColumn.Direction =>
-            Columns[column] is not null && Columns[ReadingColumn.Point] is null,
+        LotColumn.Date => Columns[column] is not null && Columns[LotColumn.Lot] is null,
+        LotColumn.Temperature or LotColumn.Pressure or LotColumn.Direction =>
+            Columns[column] is not null && Columns[LotColumn.Point] is null,
         _ => Columns[column] is not null,
     };
 
