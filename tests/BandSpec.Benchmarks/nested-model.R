@@ -15,10 +15,11 @@ theta <- mapply(function(group, column) ours[column, group], names(names), unlis
 cat(sprintf("lme4 %s, same likelihood at our estimates: %.8f\n", packageVersion("lme4"), deviance(theta)))
 
 invisible(tryCatch({
-  setTimeLimit(elapsed = as.numeric(arguments[2]), transient = TRUE)
-  start <- proc.time()[["elapsed"]]
+  setTimeLimit(cpu = as.numeric(arguments[2]), transient = TRUE)
+  start <- proc.time()
   fit <- suppressMessages(suppressWarnings(lmer(model, readings, REML = TRUE,
     control = lmerControl(calc.derivs = FALSE, check.conv.singular = "ignore"))))
-  cat(sprintf("lme4's own search: %.1f s, %d evaluations, deviance %.8f\n",
-    proc.time()[["elapsed"]] - start, as.integer(fit@optinfo$feval), REMLcrit(fit)))
-}, error = function(e) cat(sprintf("lme4's own search was stopped after %s s without an answer\n", arguments[2]))))
+  took <- proc.time() - start
+  cat(sprintf("lme4's own search: %.1f s by the clock, %.1f s of processor time, %d evaluations, deviance %.8f\n",
+    took[["elapsed"]], took[["user.self"]] + took[["sys.self"]], as.integer(fit@optinfo$feval), REMLcrit(fit)))
+}, error = function(e) cat(sprintf("lme4's own search was stopped after %s s of processor time without an answer\n", arguments[2]))))

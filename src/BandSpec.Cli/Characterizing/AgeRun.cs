@@ -63,11 +63,8 @@ internal sealed class AgeRun(Terminal terminal)
     {
         if (Platform is not null && earlier is not null)
         {
-            Platform aged = earlier with
-            {
-                Ageing = found.ToAgeing(), Sample = earlier.Sample is { } sample ? sample with { Ageing = found.ToAccuracy() } : null,
-            };
-            files.Write(Platform, PlatformYaml.Write(aged, StatisticsRemarks.Of(found, files.Names)));
+            files.Write(Platform, AgeingInFile.Replace(
+                files.Text(Platform), found.ToAgeing(), found.ToAccuracy(), StatisticsRemarks.Of(found, files.Names)));
         }
 
         if (Report is null)

@@ -37,6 +37,9 @@ internal sealed class StatisticsFiles(Terminal terminal)
         return !Show(findings);
     }
 
+    /// <summary>The text of a file that was read before.</summary>
+    public string Text(string file) => File.ReadAllText(PathOf(file));
+
     /// <summary>Shows findings about the readings as a whole, and says whether there were any.</summary>
     public bool Show(IReadOnlyList<Finding> findings) => Show(
         [.. findings.Select(finding => new PlacedFinding(finding, new Place(string.Join(", ", Names), 1, 1, 1, "")))]);

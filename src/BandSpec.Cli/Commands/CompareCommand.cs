@@ -51,9 +51,6 @@ internal static class CompareCommand
         return comparison.LimitsDiffer ? ExitCode.AnswerIsNo : ExitCode.Done;
     }
 
-    private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
-    {
-        using SearchBar bar = new(terminal, application.Requirement.Identity.FolderName);
-        return SpecificationDraft.Draft(application, bar, cancellation);
-    }
+    private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation) => SearchBar.Over(
+        terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
 }

@@ -61,6 +61,13 @@ internal static class DraftScreen
         screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red("NOT FEASIBLE"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
         screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
+        if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
+        {
+            string lots = sample.Lots == 1 ? "1 lot" : $"{sample.Lots} lots";
+            screen.Append(Plain, $"at least {Margin(bound.Lower)} with {100 * bound.Confidence:0.#} % confidence: the statistics rest on {sample.Units} units of {lots}\n");
+            if (specification.FurtherUnits is { } further)
+                screen.Append(Plain, $"{ink.Yellow($"{further} more units measured, in lots of the same size, would raise that to 1")}\n");
+        }
         if (!specification.Feasible && specification.Floor.Bound < 1)
             screen.Append(Plain, $"{ink.Yellow("no plan can help: what compensation cannot remove fills the band by itself")}\n");
         screen.Append('\n');

@@ -29,9 +29,8 @@ internal sealed class TryRun(Terminal terminal)
         InputSet inputs = InputFolder.Read(request.File, request.Root, terminal.Folder, request.Changes);
         if (inputs.Application is not { } application)
             return new Tried(inputs, null, null);
-        Specification specification;
-        using (SearchBar bar = new(terminal, application.Requirement.Identity.FolderName))
-            specification = SpecificationDraft.Draft(application, bar, cancellation);
+        Specification specification = SearchBar.Over(
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
         using (LotBar bar = new(terminal, request.Order.LotSize))
             return new Tried(inputs, specification, LotRun.Make(LotSubject.Of(specification), request.Order, request.Threads, bar, cancellation));
     }

@@ -13,8 +13,8 @@ public sealed record DegreeStep(PressureShape Shape, int Degree, double Gain, bo
 /// <summary>
 /// Chooses the degrees in temperature. The criterion is Schwarz' (1978, Ann. Statist. 6, 461-464): minus twice the logarithm of the full
 /// likelihood plus <c>ln(units)</c> for each mean and spread; units are what is counted because means and spreads are statistics of units
-/// (Pauler 1998, Biometrika 85, 13-27). From constants in zero and span upwards, the step that lowers it most is taken until none does; a
-/// step may take in two degrees at once, since a curve can be odd.
+/// (Pauler 1998, Biometrika 85, 13-27). From constants in zero and span upwards, the step that lowers it most is taken until none does;
+/// where no single degree does, two at once are tried, since a curve can be odd.
 /// </summary>
 /// <param name="family">The readings.</param>
 /// <param name="supported">The columns that the readings support.</param>
@@ -34,10 +34,12 @@ internal sealed class DegreeSelection(
     {
         foreach (PressureShape shape in Enum.GetValues<PressureShape>())
             degrees[shape] = Math.Min(HighestOf(shape), pinned.GetValueOrDefault(shape, shape <= PressureShape.Span ? 0 : -1));
-        double best = Trials().Any() ? Criterion(degrees) : 0;
+        double best = Trials(1).Any() ? Criterion(degrees) : 0;
         while (true)
         {
-            List<(DegreeStep Step, double Criterion)> trials = [.. Trials().Select(trial => Try(trial, best))];
+            List<(DegreeStep Step, double Criterion)> trials = [.. Trials(1).Select(trial => Try(trial, best))];
+            if (trials.All(trial => trial.Criterion >= best))
+                trials.AddRange(Trials(2).Select(trial => Try(trial, best)));
             if (trials.Count == 0 || trials.MinBy(trial => trial.Criterion) is var lowest && lowest.Criterion >= best)
             {
                 steps.AddRange(trials.Select(trial => trial.Step));
@@ -49,10 +51,9 @@ internal sealed class DegreeSelection(
         }
     }
 
-    private IEnumerable<(PressureShape Shape, int Degree)> Trials() =>
+    private IEnumerable<(PressureShape Shape, int Degree)> Trials(int further) =>
         from shape in degrees.Keys.Order()
         where !pinned.ContainsKey(shape)
-        from further in Enumerable.Range(1, 2)
         where degrees[shape] + further <= HighestOf(shape)
         select (shape, degrees[shape] + further);
 

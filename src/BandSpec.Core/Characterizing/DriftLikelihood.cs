@@ -13,6 +13,9 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
     private const double EnergyScale = 0.1;
     private const double ExponentScale = 0.1;
 
+    /// <summary>Deviance that nobody misses: intervals end where it has risen by about 4.</summary>
+    private const double Worthwhile = 1e-7;
+
     /// <summary>From a guess by the information matrix two or three steps reach the profile to 1e-6 of the deviance's rise at the interval's end.</summary>
     private const int ProfileSteps = 3;
 
@@ -26,7 +29,7 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
     {
         if (support.Free.Count == 0)
             return LawAt([]);
-        Minimum minimum = new QuasiNewton(Sloped, 200).From([.. support.Free.Select(_ => 0.0)], [.. support.Free.Select(_ => 100.0)]);
+        Minimum minimum = new QuasiNewton(Sloped, 100, Worthwhile).From([.. support.Free.Select(_ => 0.0)], [.. support.Free.Select(_ => 100.0)]);
         return LawAt(minimum.Point.Place);
     }
 
@@ -36,8 +39,11 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
         support.Free.Contains(DriftFigure.Energy) ? energy : support.StartEnergy,
         support.Free.Contains(DriftFigure.Exponent) ? exponent : support.StartExponent);
 
-    /// <summary>Minus twice the logarithm of the likelihood; infinite for a law that is not to be thought of.</summary>
-    public double Deviance(DriftLaw law) => law.Energy is >= -1e-9 and <= 10 && law.Exponent is >= 0 and <= 5
+    /// <summary>
+    /// Minus twice the logarithm of the likelihood; infinite far outside what is thinkable. Somewhat below zero it goes on smoothly, so that
+    /// an interval's end at zero is an ordinary place.
+    /// </summary>
+    public double Deviance(DriftLaw law) => law.Energy is >= -2 and <= 10 && law.Exponent is >= -1 and <= 5
         ? Fit(law, restricted: false).Fit.Deviance
         : double.PositiveInfinity;
 
@@ -62,7 +68,7 @@ internal sealed class DriftLikelihood(IReadOnlyList<StoredUnit> units, AgeingSco
         DriftLaw Shifted(double[] errors) => held == DriftFigure.Energy
             ? new DriftLaw(scope, law.Energy, law.Exponent + (errors[0] * error))
             : new DriftLaw(scope, law.Energy + (errors[0] * error), law.Exponent);
-        return new QuasiNewton(place => SlopedBy(place, p => Deviance(Shifted(p))), ProfileSteps).From([0.0], [2.0]).Point.Value;
+        return new QuasiNewton(place => SlopedBy(place, p => Deviance(Shifted(p))), ProfileSteps, Worthwhile).From([0.0], [2.0]).Point.Value;
     }
 
     private SlopedPoint Sloped(double[] place) => SlopedBy(place, p => Deviance(LawAt(p)));

@@ -52,7 +52,8 @@ internal sealed class DriftRegion(
         double slope = covariance[held, other] / covariance[held, held];
         double rest = Math.Sqrt(Math.Max(0, covariance[other, other] - (slope * covariance[held, other])));
         return likelihood.Profile(figure, likelihood.LawAt(
-            law.Energy + (held == 0 ? shift : slope * shift), Math.Max(0, law.Exponent + (held == 1 ? shift : slope * shift))), rest);
+            Math.Clamp(law.Energy + (held == 0 ? shift : slope * shift), -1, 9),
+            Math.Clamp(law.Exponent + (held == 1 ? shift : slope * shift), -0.5, 4)), rest);
     }
 
     private DriftFigures Corner(Grid root, double angle, double quantile)

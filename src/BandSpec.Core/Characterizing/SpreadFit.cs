@@ -5,6 +5,9 @@ namespace BandSpec.Core.Characterizing;
 /// <summary>The most likely spreads of a set of columns, with or without correlations.</summary>
 internal sealed class SpreadFit
 {
+    /// <summary>A hundredth of the deviance that a single parameter has to bring.</summary>
+    private const double NearEnough = 0.03;
+
     private SpreadFit(NestedLikelihood likelihood, NestedFit fit, SharedCorrelationLaw law, bool[] within, bool[] between)
     {
         (Likelihood, Fit, Law) = (likelihood, fit, law);
@@ -27,6 +30,9 @@ internal sealed class SpreadFit
     public int Parameters => FreeWithin.Length + Law.Start.Length + 1;
 
     /// <summary>The most likely spreads without correlations.</summary>
+    /// <param name="sample">The readings on the columns.</param>
+    /// <param name="columns">The columns.</param>
+    /// <param name="restricted">Restricted likelihood, to the last digit; otherwise the full one, near enough to choose degrees by.</param>
     public static SpreadFit Of(NestedSample sample, IReadOnlyList<ReadingColumn> columns, bool restricted)
     {
         NestedLikelihood likelihood = new(sample, restricted);
@@ -34,7 +40,7 @@ internal sealed class SpreadFit
         bool[] between = [.. columns.Select(c => c.DiffersBetweenLots && sample.Lots.Count > 1)];
         (double[] sigma, double[] lotSigma) = NestedEstimation.RoughSpreads(likelihood, within, between);
         SharedCorrelationLaw law = new(sigma, lotSigma, [], []);
-        return new SpreadFit(likelihood, NestedEstimation.Fit(likelihood, law), law, within, between);
+        return new SpreadFit(likelihood, NestedEstimation.Fit(likelihood, law, restricted ? 0 : NearEnough), law, within, between);
     }
 
     /// <summary>The most likely spreads with one more correlated pair, searched from this fit.</summary>

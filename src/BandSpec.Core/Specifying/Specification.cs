@@ -24,6 +24,11 @@ public sealed record Specification
     /// <summary>What can be claimed of the margin; <see langword="null"/> when the platform does not say what its statistics rest on.</summary>
     public MarginBound? Bound { get; init; }
 
+    /// <summary>
+    /// How many more units have to be measured until the bound reaches 1; <see langword="null"/> when it does already, or when no number would do.
+    /// </summary>
+    public int? FurtherUnits { get; init; }
+
     /// <summary>What a perfect correction would leave.</summary>
     public required BandFloor Floor { get; init; }
 

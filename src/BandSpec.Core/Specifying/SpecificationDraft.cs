@@ -33,13 +33,16 @@ public static class SpecificationDraft
         bool fits = bands.Margin >= 1 && choice.HoldsEverywhere;
         bool isDiagnosed = optimum.Proven && (extras.HasFlag(DraftExtras.Diagnosis) || (!fits && extras.HasFlag(DraftExtras.DiagnosisOfNo)));
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
+        double confidence = application.Requirement.Capability.Confidence ?? UsualConfidence;
+        MarginBound? bound = MarginBound.Of(application, choice.Plan, bands, confidence);
         return new Specification
         {
             Application = application,
             Choice = choice,
             Optimum = optimum,
             Bands = bands,
-            Bound = MarginBound.Of(application, choice.Plan, bands, application.Requirement.Capability.Confidence ?? UsualConfidence),
+            Bound = bound,
+            FurtherUnits = bound is { Lower: < 1 } ? MarginBound.FurtherUnits(application, choice.Plan, bands, confidence) : null,
             Floor = BandFloor.Of(application),
             Profile = ProfileFigures.Of(application, choice.Plan),
             Allocation = allocation,

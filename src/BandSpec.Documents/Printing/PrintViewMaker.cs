@@ -34,8 +34,18 @@ internal sealed class PrintViewMaker
             inputViews.Identity, inputViews.Range(platform), inputViews.Output, inputViews.Temperature, Profile(inputViews), Regions,
             Verdict(), new PlanViews(_specification, _sign).Plan, [.. Terms()], [.. Derived()],
             [.. new PointViews(_requirement).Of(_specification.VerificationPoints)], Test(),
-            platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign);
+            platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign)
+        {
+            Sample = Sample(platform.Sample),
+        };
     }
+
+    private SampleView? Sample(PlatformSample? sample) => sample is null || _specification.Bound is not { } bound
+        ? null
+        : new SampleView(
+            Whole(sample.Units), Whole(sample.Lots), Whole(sample.Readings), Shown(Rounded.Given(100 * bound.Confidence)), Margin(bound.Lower));
+
+    private static string Whole(int count) => count.ToString(CultureInfo.InvariantCulture);
 
     private string Shown(Rounded figure) => figure.Shown(_sign);
 

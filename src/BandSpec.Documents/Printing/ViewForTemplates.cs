@@ -9,9 +9,13 @@ internal static class ViewForTemplates
         ("specification", Of(view.Identity)), ("standing", view.Standing), ("feasible", view.Verdict.Feasible), ("program", view.Program),
         ("platform", Script(("name", view.Platform), ("revision", view.PlatformRevision))), ("station", Script(("name", view.Station))),
         ("pressure", Of(view.Range)), ("output", Of(view.Output)), ("temperature", Of(view.Temperature)), ("profile", Of(view.Profile)),
+        ("has_sample", view.Sample is not null), ("sample", Of(view.Sample)),
         ("regions", List(view.Regions.Select(Of))),
         ("margin", view.Verdict.Margin), ("floor_margin", view.Verdict.FloorMargin), ("floor_holds", view.Verdict.FloorHolds),
         ("worst", Of(view.Verdict.Worst)), ("tightest", Of(view.Verdict.Tightest)), ("plan", Of(view.Plan)), ("test", Of(view.Test)));
+
+    private static ScriptObject Of(SampleView? s) => Script(
+        ("units", s?.Units ?? ""), ("lots", s?.Lots ?? ""), ("readings", s?.Readings ?? ""), ("confidence", s?.Confidence ?? ""), ("margin", s?.Margin ?? ""));
 
     public static ScriptObject Of(RegionView r) => Script(
         ("from", r.From), ("to", r.To), ("allowed", r.Allowed), ("allowed_at_start", r.AllowedAtStart), ("allowed_at_end", r.AllowedAtEnd),

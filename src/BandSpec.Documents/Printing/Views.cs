@@ -86,4 +86,11 @@ internal sealed record PrintView(
     IReadOnlyList<RegionView> Regions,
     VerdictView Verdict, PlanView Plan, IReadOnlyList<TermView> Terms, IReadOnlyList<DerivedView> Derived, IReadOnlyList<PointView> Points,
     TestView Test, string Platform, string PlatformRevision, string Station, IReadOnlyList<DigestView> Inputs, string Program,
-    string Standing, string DecimalSign);
+    string Standing, string DecimalSign)
+{
+    /// <summary>What the platform's statistics rest on; nothing when the platform does not say.</summary>
+    public SampleView? Sample { get; init; }
+}
+
+/// <summary>The sample behind the statistics, and the margin that can be claimed from it.</summary>
+internal sealed record SampleView(string Units, string Lots, string Readings, string Confidence, string Margin);

@@ -2,6 +2,7 @@ using System.Text.Json;
 using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
+using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Core.TestLimits;
 
@@ -28,6 +29,8 @@ public static class ResultJson
             json.Figure("margin", specification.Bands.Margin);
             json.Figure("floor-margin", specification.Floor.Margin);
             json.Figure("margin-bound", specification.Floor.Bound);
+            if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
+                json.Object("claim", claim => WriteClaim(claim, bound, sample));
             json.Object("worst", worst => WritePlace(worst, specification.Bands.Worst));
             json.Object("plan", plan => WritePlan(plan, specification.Choice));
             json.Objects("regions", specification.Bands.Regions, WriteRegion);
@@ -36,6 +39,15 @@ public static class ResultJson
             json.Object("profile", profile => WriteProfile(profile, specification.Profile));
             json.Objects("nodes", specification.Bands.Nodes, WriteNode);
         });
+    }
+
+    private static void WriteClaim(Utf8JsonWriter json, MarginBound bound, PlatformSample sample)
+    {
+        json.Figure("margin", bound.Lower);
+        json.Figure("confidence", bound.Confidence);
+        json.WriteNumber("units", sample.Units);
+        json.WriteNumber("lots", sample.Lots);
+        json.WriteNumber("readings", sample.Readings);
     }
 
     private static void WritePlace(Utf8JsonWriter json, BandNode node)

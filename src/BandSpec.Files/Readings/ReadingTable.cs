@@ -85,17 +85,17 @@ internal sealed class ReadingTable
 
         using SepReader rows = Sep.Reader(options => options with { HasHeader = false, DisableColCountCheck = true })
             .FromText(string.Join('\n', text.Lines.Skip(skipped)));
+        bool hasAll = false;
         foreach (SepReader.Row row in rows)
         {
             string[] cells = new string[row.ColCount];
             for (int i = 0; i < cells.Length; i++)
                 cells[i] = row[i].ToString();
-            int line = row.LineNumberFrom + skipped;
-            if (header.Count == 0)
+            if (header.Count > 0 && cells.Any(cell => cell.Trim().Length > 0))
+                TakeRow(new ReadingRow(row.LineNumberFrom + skipped, cells), take);
+            else if (header.Count == 0)
                 header.AddRange(cells.Select(HeaderCell.Of));
-            else if (cells.Any(cell => cell.Trim().Length > 0))
-                TakeRow(new ReadingRow(line, cells), take);
-            if (line == skipped + 1 && !HasAll(needed, line))
+            if (!hasAll && !(hasAll = HasAll(needed, skipped + 1)))
                 return;
         }
     }

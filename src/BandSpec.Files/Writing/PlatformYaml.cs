@@ -57,7 +57,8 @@ public static class PlatformYaml
                 FormattableString.Invariant($"    - {{ between: [{c.First}, {c.Second}], value: {c.Value} }}"), $"{c.First} {c.Second}");
     }
 
-    private static void AgeingLines(Ageing ageing, YamlLines lines)
+    /// <summary>Writes the <c>ageing</c> with what is said above and beside it.</summary>
+    internal static void AgeingLines(Ageing ageing, YamlLines lines)
     {
         lines.Above("ageing");
         lines.Add("ageing:");

@@ -6,6 +6,7 @@ namespace BandSpec.Files.Writing;
 /// <summary>Writes the <c>sample</c> of a platform file.</summary>
 internal static class SampleYaml
 {
+    /// <summary>Writes the whole.</summary>
     public static void Write(PlatformSample sample, YamlLines lines)
     {
         lines.Add("sample:                   # what the statistics rest on, and how uncertain they are for that");
@@ -30,7 +31,8 @@ internal static class SampleYaml
             Write(ageing, lines);
     }
 
-    private static void Write(AgeingAccuracy ageing, YamlLines lines)
+    /// <summary>Writes the accuracy of the drift.</summary>
+    public static void Write(AgeingAccuracy ageing, YamlLines lines)
     {
         lines.Add("  ageing:");
         lines.Add(FormattableString.Invariant($"    units: {ageing.Units}"));

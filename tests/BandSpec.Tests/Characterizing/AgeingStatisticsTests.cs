@@ -49,6 +49,15 @@ public sealed class AgeingStatisticsTests(ITestOutputHelper output)
     }
 
     [Fact]
+    public void Drift_that_hardly_shows_leaves_the_figures_wide_open()
+    {
+        Ageing faint = Truth with { Zero = Given.Spread(0.004, 0.002), Span = Given.Spread(0, 0.002) };
+        AgeingStatistics found = Of(new SimulatedStorage(faint, Repeatability, 2).Readings(8, 105, 125), Scope);
+        Assert.True(found.ActivationEnergy.Covers(0.6), found.ActivationEnergy.ToString());
+        Assert.True(found.ActivationEnergy.Upper - found.ActivationEnergy.Lower > 0.5);
+    }
+
+    [Fact]
     public void One_storage_temperature_needs_an_activation_energy_to_assume()
     {
         List<DriftReading> readings = new SimulatedStorage(Truth, Repeatability, 4).Readings(20, 125);

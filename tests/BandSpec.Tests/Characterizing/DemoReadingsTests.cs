@@ -28,7 +28,7 @@ public sealed class DemoReadingsTests
     [Fact]
     public void The_family_is_recognised_and_its_spoiled_units_are_named()
     {
-        Characterization found = Family();
+        Characterization found = Found.Value;
         Assert.Equal(DemoReadings.Spoiled, found.SuspectUnits.Select(unit => unit.Unit).Order());
         Assert.Equal("repeatability", found.SuspectUnits.Single(unit => unit.Unit == "038").Term);
         Assert.Equal(46, found.Units);
@@ -42,7 +42,7 @@ public sealed class DemoReadingsTests
     [Fact]
     public void The_written_platform_reads_back_the_same_and_fits_the_demo()
     {
-        Characterization found = Family();
+        Characterization found = Found.Value;
         Platform written = PlatformFrame.Of(Given.Platform).With(found);
         string text = PlatformYaml.Write(written, StatisticsRemarks.Of(found, ["steel-cell-40.csv"]));
         (Platform? read, IReadOnlyList<PlacedFinding> findings) = PlatformReading.Read(InputContent.Of("cell.yaml", Encoding.UTF8.GetBytes(text)));
@@ -62,15 +62,15 @@ public sealed class DemoReadingsTests
             set.Readings, new AgeingScope { TestTemperature = Given.C(125), TestDuration = Duration.FromHours(1000) }).Value!;
         Assert.True(found.ActivationEnergy.Covers(0.6), found.ActivationEnergy.ToString());
         Assert.True(found.TimeExponent.Covers(0.5), found.TimeExponent.ToString());
-        Assert.True(found.Zero.Mean.Covers(0.06), found.Zero.Mean.ToString());
+        Assert.True(found.Zero.Mean.Covers(0.02), found.Zero.Mean.ToString());
     }
 
-    private static Characterization Family()
+    private static readonly Lazy<Characterization> Found = new(() =>
     {
         ReadingsSet<UnitReading> set = FamilyReadings.Read(Content("steel-cell-40.csv"), Format);
         Assert.Empty(set.Findings);
         return Characterization.Of(set.Readings, Families.OpenScope).Value!;
-    }
+    });
 
     private static InputContent Content(string name) => InputContent.Of(name, File.ReadAllBytes(PathOf(name)));
 

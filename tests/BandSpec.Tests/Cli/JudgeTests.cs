@@ -59,7 +59,7 @@ public sealed class JudgeTests : IDisposable
         (int code, string screen, _) = desk.Run("judge", "limits.json", "lot.csv");
         Assert.Equal(1, code);
         Snapshot.Match(screen);
-        Assert.Contains("U901,fail,V1 1.25 %FS,V2; V3; V4; V5; V6\n", File.ReadAllText(desk.At("out/T-7-B-judgement/units.csv")), StringComparison.Ordinal);
+        Assert.Contains("U901,fail,V1 1.25 %FS; zero at 25 °C 1.25 %FS,V2; V3; V4; V5; V6\n", File.ReadAllText(desk.At("out/T-7-B-judgement/units.csv")), StringComparison.Ordinal);
     }
 
     [Fact]

@@ -21,7 +21,10 @@ public sealed partial class RoomRules
 
     [Fact]
     public void Writers_see_no_specification_but_only_what_is_printed() =>
-        Assert.Empty(Offenders(Core(), ["Printing/", "Composing/SpecificationCharts.cs", "SpecificationPackage.cs"]));
+        Assert.Empty(Offenders(Core(), ["Printing/", "Composing/SpecificationCharts.cs", "SpecificationPackage.cs", .. Reports]));
+
+    /// <summary>Reports of readings have no template and no second writer of their figures: they go through Printing.Figures without a view.</summary>
+    private static readonly string[] Reports = ["Composing/AgeingComposer.cs", "Composing/CharacterizationComposer.cs", "StatisticsReports.cs"];
 
     private static List<string> Offenders(Regex forbidden, string[] allowed) =>
         [.. Directory.EnumerateFiles(Room, "*.cs", SearchOption.AllDirectories)

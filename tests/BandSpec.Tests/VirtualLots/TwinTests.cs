@@ -1,6 +1,7 @@
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Core.VirtualLots;
+using BandSpec.Files.Inputs;
 using Xunit;
 
 namespace BandSpec.Tests.VirtualLots;
@@ -28,6 +29,22 @@ public sealed class TwinTests
                 station: Given.Station with { PressurePoints = new PressureLists([0, 0.25, 0.5, 1], [0, 1]) }),
             200_000);
 
+    /// <summary>
+    /// Every demo, its band figures: means, what adds, spreads, bands and capabilities. Risks of single verification points are left out: they
+    /// are tails, and where unsettled temperature is a large part of the spread the product with a unit's own slope has heavier ones than the
+    /// normal law that the closed form takes (0.37 % in closed form against 0.43 % counted at one point of the first demo).
+    /// </summary>
+    [Theory]
+    [InlineData("brine-reinjection")]
+    [InlineData("cold-store-suction")]
+    [InlineData("hydrogen-dryer")]
+    public void Closed_form_and_virtual_lots_agree_for_every_demo(string name)
+    {
+        string folder = Path.Combine(House.Tree.Root, "requirements-demo");
+        InputContent Open(string path) => InputContent.Of(path, File.ReadAllBytes(Path.Combine(folder, path)));
+        Agree(InputReading.Read(Open(name + ".yaml"), Open).Application!, 200_000, withRisks: false);
+    }
+
     [Fact]
     public void Another_gradient_than_the_closed_form_was_told_is_noticed()
     {
@@ -38,13 +55,13 @@ public sealed class TwinTests
         Assert.True(LotReport.Of(specification, claimed).Twins.Max(t => t.Difference) > 10);
     }
 
-    private static void Agree(Application application, long units)
+    private static void Agree(Application application, long units, bool withRisks = true)
     {
         Specification specification = SpecificationDraft.Draft(application);
         LotResult result = LotRun.Make(LotSubject.Of(specification), LotOrder.For(units, 400, 1), 2);
         LotReport report = LotReport.Of(specification, result);
         Assert.True(report.Twins.Count > 2000);
-        Twin worst = report.Twins.MaxBy(t => Math.Abs(t.Difference))!;
+        Twin worst = report.Twins.Where(t => withRisks || !t.Figure.EndsWith("-risk", StringComparison.Ordinal)).MaxBy(t => Math.Abs(t.Difference))!;
         Assert.True(Math.Abs(worst.Difference) <= Limit, $"{worst}");
     }
 }

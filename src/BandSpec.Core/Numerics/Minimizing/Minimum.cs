@@ -13,7 +13,7 @@ internal sealed record SlopedPoint(double[] Place, double Value, double[] Slope)
 /// <summary>How a minimisation ended.</summary>
 internal enum MinimizingEnd
 {
-    /// <summary>The decrease still to be had is lost in rounding.</summary>
+    /// <summary>The decrease still to be had is not worth a step, or lost in rounding.</summary>
     Converged,
 
     /// <summary>No further step lowers the function, though its slope asks for one: rounding has the last word.</summary>

@@ -9,7 +9,8 @@ namespace BandSpec.Core.Numerics.Minimizing;
 /// </summary>
 /// <param name="function">The function with its slope.</param>
 /// <param name="mostSteps">The most steps.</param>
-internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int mostSteps)
+/// <param name="worthwhile">A decrease, in the function's unit, below which no further step is wanted; 0 to go on until rounding ends it.</param>
+internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int mostSteps, double worthwhile = 0)
 {
     private const double SufficientDecrease = 1e-4;
     private const double SlopeLeft = 0.9;
@@ -20,18 +21,20 @@ internal sealed class QuasiNewton(Func<double[], SlopedPoint> function, int most
     private const int MostHalvings = 40;
     private int evaluations;
 
-    /// <summary>Minimises from a start inside the domain.</summary>
+    /// <summary>Minimises from a start; one outside the domain is returned as it is.</summary>
     /// <param name="start">The start.</param>
     /// <param name="curvature">A guess of the second derivative along each coordinate, above 0: sets the first step.</param>
     public Minimum From(double[] start, double[] curvature)
     {
         SlopedPoint here = Evaluate(start);
+        if (!double.IsFinite(here.Value))
+            return new Minimum(here, MinimizingEnd.NoFurtherDecrease, evaluations);
         Grid inverse = Grid.Diagonal(Array.ConvertAll(curvature, c => 1 / c));
         for (int step = 0; step < mostSteps; step++)
         {
             double[] direction = Array.ConvertAll(inverse.Times(here.Slope), d => -d);
             double slope = Vectors.Dot(here.Slope, direction);
-            if (-slope / 2 < RoundingPart * Math.Max(1, Math.Abs(here.Value)))
+            if (-slope / 2 < Math.Max(worthwhile, RoundingPart * Math.Max(1, Math.Abs(here.Value))))
                 return new Minimum(here, MinimizingEnd.Converged, evaluations);
             SlopedPoint? next = Search(here, direction, slope);
             if (next is null)

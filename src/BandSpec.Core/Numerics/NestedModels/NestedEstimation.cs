@@ -15,14 +15,17 @@ internal static class NestedEstimation
     private const int MostRestarts = 5;
 
     /// <summary>The most likely parameters of a law.</summary>
-    public static NestedFit Fit(NestedLikelihood likelihood, ICovarianceLaw law)
+    /// <param name="likelihood">The likelihood.</param>
+    /// <param name="law">The law.</param>
+    /// <param name="worthwhile">The deviance that the answer may be above the smallest one, about; 0 for as little as rounding allows.</param>
+    public static NestedFit Fit(NestedLikelihood likelihood, ICovarianceLaw law, double worthwhile = 0)
     {
         double[] start = law.Start;
         double[] curvature = law.Curvature(likelihood.Sample.Units, likelihood.Sample.Lots.Count);
         int evaluations = 0;
         for (int restart = 0; ; restart++)
         {
-            QuasiNewton search = new(parameters => Evaluate(likelihood, law, parameters), MostSteps);
+            QuasiNewton search = new(parameters => Evaluate(likelihood, law, parameters), MostSteps, worthwhile);
             Minimum minimum = search.From(start, curvature);
             evaluations += minimum.Evaluations + 1;
             NestedFactors factors = law.Factors(minimum.Point.Place)!;
