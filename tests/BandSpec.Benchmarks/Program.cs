@@ -9,6 +9,9 @@ switch (args.FirstOrDefault())
     case "lots":
         LotBenchmark.Run(Demos.Draft(root, "brine-reinjection"), root);
         return 0;
+    case "plans":
+        PlanBenchmark.Run(root);
+        return 0;
     case "rare":
         RareBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
         return 0;
@@ -24,6 +27,7 @@ switch (args.FirstOrDefault())
     default:
         Console.Error.WriteLine("""
             usage: BandSpec.Benchmarks lots [ROOT]               units made a second beside a NumPy twin
+                   BandSpec.Benchmarks plans [ROOT]              the plan search beside a NumPy loop, and its growth
                    BandSpec.Benchmarks rare [ROOT]               the estimate of a rare event
                    BandSpec.Benchmarks characterize [SECONDS]    the nested model against lme4, which is given so many seconds
                    BandSpec.Benchmarks coverage [REPETITIONS]    how often the intervals of a characterization hold the truth
