@@ -54,7 +54,7 @@ internal static class CompareCommand
     private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
     {
         Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation));
         cancellation.ThrowIfCancellationRequested();
         return specification;
     }

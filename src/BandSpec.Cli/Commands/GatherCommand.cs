@@ -4,7 +4,6 @@ using BandSpec.Cli.Trying;
 using BandSpec.Core.Specifying;
 using BandSpec.Core.VirtualLots;
 using BandSpec.Files.Inputs;
-using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;
 
@@ -39,7 +38,7 @@ internal static class GatherCommand
             terminal.Out.Write(FindingScreen.Of(inputs.Findings, terminal.Ink));
             return ExitCode.Findings;
         }
-        Specification specification = SpecificationDraft.Draft(application, null, cancellation);
+        Specification specification = SpecificationDraft.Draft(application, null, cancellation: cancellation);
         GatheredLots gathered = shelf.Gather(LotSubject.Of(specification));
         foreach (PartFinding finding in gathered.Findings)
             terminal.Error.WriteLine($"bandspec: {PartWords.Of(finding, files, shelf.Parts[0].Order)}");

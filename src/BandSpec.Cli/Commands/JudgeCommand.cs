@@ -2,7 +2,6 @@ using System.CommandLine;
 using System.Text;
 using BandSpec.Cli.Judging;
 using BandSpec.Cli.Printing;
-using BandSpec.Core.LotJudging;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;

@@ -3,7 +3,6 @@ using BandSpec.Cli.Printing;
 using BandSpec.Cli.Storing;
 using BandSpec.Cli.Trying;
 using BandSpec.Core.VirtualLots;
-using BandSpec.Files.Inputs;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;

@@ -1,11 +1,9 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
-using BandSpec.Core.Characterizing;
 using BandSpec.Core.Findings;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Files.Forms;
-using BandSpec.Files.Inputs;
 using BandSpec.Files.Readings;
 using BandSpec.Files.Yaml;
 

@@ -2,7 +2,6 @@ using System.Security.Cryptography;
 using BandSpec.Cli.Drafting;
 using BandSpec.Cli.Printing;
 using BandSpec.Cli.Storing;
-using BandSpec.Core.Findings;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Revisions;
 using BandSpec.Core.Specifying;
@@ -52,7 +51,7 @@ internal sealed class ReleaseRun(Terminal terminal, DraftRun run, string by)
     private Specification Solve(Application application, CancellationToken cancellation)
     {
         Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation, DraftExtras.DiagnosisOfNo));
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, DraftExtras.DiagnosisOfNo, cancellation));
         // A search that was ended early has an answer too, but not one to be frozen.
         cancellation.ThrowIfCancellationRequested();
         return specification;

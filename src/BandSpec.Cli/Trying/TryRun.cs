@@ -30,7 +30,7 @@ internal sealed class TryRun(Terminal terminal)
         if (inputs.Application is not { } application)
             return new Tried(inputs, null, null);
         Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation));
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation));
         using (LotBar bar = new(terminal, request.Order.LotSize))
             return new Tried(inputs, specification, LotRun.Make(LotSubject.Of(specification), request.Order, request.Threads, bar, cancellation));
     }

@@ -1,5 +1,4 @@
 using BandSpec.Core.Requirements;
-using BandSpec.Core.Residuals;
 
 namespace BandSpec.Core.Bands;
 

@@ -1,4 +1,3 @@
-using BandSpec.Core.Numerics;
 
 namespace BandSpec.Core.Bands;
 

@@ -1,5 +1,4 @@
 using BandSpec.Core.Bands;
-using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Planning;

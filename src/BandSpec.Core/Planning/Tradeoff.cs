@@ -1,4 +1,3 @@
-using BandSpec.Core.Bands;
 using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Planning;

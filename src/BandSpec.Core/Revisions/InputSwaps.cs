@@ -33,7 +33,7 @@ internal sealed class InputSwaps(Comparison comparison)
         return new Cause(
             [.. groups.Select(group => (group.Subject, group.Name))],
             Comparison.InputsBetween(old, swapped),
-            application is null ? null : Comparison.Of(comparison.Old, SpecificationDraft.Draft(application, null, cancellation)).Outcome);
+            application is null ? null : Comparison.Of(comparison.Old, SpecificationDraft.Draft(application, null, cancellation: cancellation)).Outcome);
     }
 
     /// <summary>

@@ -18,13 +18,13 @@ public static class SpecificationDraft
     /// </summary>
     /// <param name="application">The inputs, known to fit each other.</param>
     /// <param name="progress">Is told how far the search has come, from several threads; may be <see langword="null"/>.</param>
+    /// <param name="extras">What is worked out beside the specification.</param>
     /// <param name="cancellation">
     /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
     /// </param>
-    /// <param name="extras">What is worked out beside the specification.</param>
     public static Specification Draft(
-        Application application, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default,
-        DraftExtras extras = DraftExtras.None)
+        Application application, IProgress<SearchProgress>? progress = null, DraftExtras extras = DraftExtras.None,
+        CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
         PlanChoice optimum = ConfidentChoice.Of(application, asked => PlanChoosing.Choose(asked, progress, cancellation));

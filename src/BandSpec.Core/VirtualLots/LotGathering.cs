@@ -57,7 +57,7 @@ public static class LotGathering
         {
             LotOrder other = parts[i].Order;
             if (parts[i].Fingerprint != fingerprint || (other.Lots, other.LotSize, other.Seed) != (order.Lots, order.LotSize, order.Seed))
-                yield return new PartFinding(PartFault.Foreign, i, parts[i].Ranges.FirstOrDefault());
+                yield return new PartFinding(PartFault.Foreign, i, parts[i].Ranges.Count > 0 ? parts[i].Ranges[0] : default);
         }
     }
 

@@ -1,6 +1,5 @@
 using System.Globalization;
 using BandSpec.Core.LotJudging;
-using BandSpec.Core.Quantities;
 using BandSpec.Core.TestLimits;
 
 namespace BandSpec.Files.LotReadings;

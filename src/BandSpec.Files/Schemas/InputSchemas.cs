@@ -1,4 +1,3 @@
-using System.Text.Json;
 using BandSpec.Core.Findings;
 using BandSpec.Files.Forms;
 using BandSpec.Files.Inputs;

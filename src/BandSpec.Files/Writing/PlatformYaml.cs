@@ -1,4 +1,3 @@
-using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 
 namespace BandSpec.Files.Writing;

@@ -1,7 +1,6 @@
 using System.Globalization;
 using System.Text;
 using BandSpec.Core.Characterizing;
-using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
 
 namespace BandSpec.Tests.Characterizing;

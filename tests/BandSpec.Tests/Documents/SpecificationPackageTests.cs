@@ -1,6 +1,5 @@
 using System.Text;
 using BandSpec.Documents;
-using BandSpec.Documents.Pdf;
 using Xunit;
 
 namespace BandSpec.Tests.Documents;

@@ -3,7 +3,6 @@ using System.Text.Json;
 using System.Text.Json.Nodes;
 using BandSpec.Core.Findings;
 using BandSpec.Core.Specifying;
-using BandSpec.Files.Inputs;
 using BandSpec.Files.Json;
 using BandSpec.Files.Schemas;
 using BandSpec.Files.Yaml;

@@ -1,6 +1,5 @@
 using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
-using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using Xunit;
