@@ -44,7 +44,10 @@ internal sealed class PossibleChanges(Application application)
             yield return AllowedError(r);
         yield return Down("safety-factor", requirement.SafetyFactor, 1, 0.01, "", v => With(requirement with { SafetyFactor = v }));
         yield return Down("capability", requirement.Capability.Sample, LeastCapability(), 0.01, "", v => With(
-            requirement with { Capability = new CapabilityTarget(v, requirement.Capability.LongRun * v / requirement.Capability.Sample) }));
+            requirement with
+            {
+                Capability = requirement.Capability with { Sample = v, LongRun = requirement.Capability.LongRun * v / requirement.Capability.Sample },
+            }));
         yield return binding > requirement.Temperature.Reference ? UpperLimit() : LowerLimit();
         CompensationScope scope = requirement.Compensation;
         yield return new PossibleChange(
