@@ -53,8 +53,8 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
                 return draft with { Verdict = verdict, Package = new WrittenPackage(ShownFolder(application), stored.Names) };
             Specification specification = isWatched
                 ? SearchBar.Over(
-                    terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, DraftExtras.DiagnosisOfNo, cancellation))
-                : SpecificationDraft.Draft(application, null, DraftExtras.DiagnosisOfNo, cancellation);
+                    terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation))
+                : SpecificationDraft.Draft(application, null, cancellation: cancellation);
             IReadOnlyList<PackageFile> files = PackageContents.Of(specification, source);
             folder.Replace(files, terminal.Clock);
             return Written(draft, specification, files);

@@ -62,7 +62,7 @@ internal sealed class CarriedPackage
 
     private static Specification Solve(Application application, CancellationToken cancellation)
     {
-        Specification specification = SpecificationDraft.Draft(application, null, DraftExtras.DiagnosisOfNo, cancellation);
+        Specification specification = SpecificationDraft.Draft(application, null, cancellation: cancellation);
         cancellation.ThrowIfCancellationRequested();
         return specification;
     }
