@@ -59,6 +59,7 @@ internal static class CommandLine
         root.Add(CompareCommand.Create(terminal));
         root.Add(ReleaseCommand.Create(terminal));
         root.Add(VerifyCommand.Create(terminal));
+        root.Add(UnpackCommand.Create(terminal));
         root.Add(JudgeCommand.Create(terminal));
         root.Add(SampleCommand.Create(terminal));
         root.Add(NewCommand.Create(terminal));
