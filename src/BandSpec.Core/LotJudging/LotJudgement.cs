@@ -48,8 +48,10 @@ public sealed record LotJudgement
         long[] verdicts = new long[Enum.GetValues<UnitVerdict>().Length];
         for (int unit = 0; unit < collected.Units.Count; unit++)
             verdicts[(int)judging.VerdictOf(unit)]++;
+        // Asking for the tallies finishes the collection: once, before several threads read them.
+        IReadOnlyList<Tally> tallies = collected.Tallies;
         Func<CharacteristicJudgement>[] points = [.. limits.Points.Select((point, i) => (Func<CharacteristicJudgement>)(() =>
-            CharacteristicJudging.Judge(point.Id, "", false, collected.Tallies[i], limits, collected.Units)))];
+            CharacteristicJudging.Judge(point.Id, "", false, tallies[i], limits, collected.Units)))];
         Func<CharacteristicJudgement>[] derived = [.. figures.Select(figure => (Func<CharacteristicJudgement>)(() =>
             CharacteristicJudging.Judge(figure.Name, figure.Place, true, Tallied(collected, figure), limits, collected.Units)))];
         return new LotJudgement
