@@ -84,7 +84,7 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
     {
         State = DraftState.Drafted,
         Specification = specification,
-        Verdict = new Verdict(specification.Feasible, specification.Bands.Margin),
+        Verdict = new Verdict(specification.Feasible, specification.Bands.Margin, specification.Optimum.Proven),
         Package = new WrittenPackage(ShownFolder(specification.Application), [.. files.Select(file => file.Name)]),
     };
 

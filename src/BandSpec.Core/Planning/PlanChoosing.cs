@@ -11,8 +11,8 @@ namespace BandSpec.Core.Planning;
 /// </summary>
 internal static class PlanChoosing
 {
-    /// <summary>How far below its margin at the nodes, relative, a choice may fall between them.</summary>
-    internal const double Shortfall = 1e-8;
+    /// <inheritdoc cref="PlanChoice.Shortfall"/>
+    internal const double Shortfall = PlanChoice.Shortfall;
 
     /// <summary>A choice that still falls short after this many rounds is given as not proven; three or four are usual.</summary>
     private const int MostRounds = 60;
@@ -77,8 +77,7 @@ internal static class PlanChoosing
             return null;
         CompensationPlan plan = pinned.Complete(application.Requirement.Temperature.Reference, application.Platform, application.Station);
         IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
-        bool isOptimum = plan.Temperatures.SequenceEqual(optimum.Plan.Temperatures)
-            && (plan.ZeroDegree, plan.SpanDegree) == (optimum.Plan.ZeroDegree, optimum.Plan.SpanDegree);
+        bool isOptimum = plan.IsLike(optimum.Plan);
         return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), optimum.PlansConsidered, optimum.Proven && isOptimum)
         {
             PlansDecided = optimum.PlansDecided,

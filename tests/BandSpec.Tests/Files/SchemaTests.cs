@@ -2,6 +2,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using BandSpec.Core.Findings;
+using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Files.Json;
 using BandSpec.Files.Schemas;
@@ -64,8 +65,26 @@ public sealed class SchemaTests
     {
         Specification specification = SpecificationDraft.Draft(Given.Application());
 
-        Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Result.Span)), ResultJson.Write(specification)));
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(specification)));
         Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Limits.Span)), LimitsJson.Write(specification)));
+    }
+
+    [Fact]
+    public void The_result_of_a_pinned_plan_tells_the_optimum_by_its_schema()
+    {
+        Specification free = SpecificationDraft.Draft(Given.Application());
+        Specification pinned = SpecificationDraft.Draft(Given.Application(Given.Requirement with
+        {
+            Compensation = Given.Requirement.Compensation with { Pinned = new PinnedPlan([Given.C(-20), Given.C(25), Given.C(150)], 2, 2) },
+        }));
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(pinned)).RootElement, optimum = result.GetProperty("optimum");
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(pinned)));
+        Assert.Equal([-20, 25, 150], result.GetProperty("plan").GetProperty("temperatures").EnumerateArray().Select(t => t.GetDouble()));
+        Assert.Equal(free.Choice.Plan.Temperatures.Select(t => t.Celsius), optimum.GetProperty("temperatures").EnumerateArray().Select(t => t.GetDouble()));
+        Assert.Equal(free.Choice.ContinuousMargin, optimum.GetProperty("margin-continuous").GetDouble());
+        Assert.True(optimum.GetProperty("proven").GetBoolean());
+        Assert.False(JsonDocument.Parse(ResultJson.Write(free)).RootElement.TryGetProperty("optimum", out _));
     }
 
     private static InputFile KindOf(string file) =>
@@ -73,6 +92,8 @@ public sealed class SchemaTests
         : file.StartsWith("stations", StringComparison.Ordinal) ? InputFile.Station : InputFile.Requirement;
 
     private static JsonSchema SchemaOf(InputFile kind) => Schemas[kind];
+
+    private static readonly JsonSchema ResultSchema = JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Result.Span));
 
     // A schema registers itself by its identifier, which may be done once only.
     private static readonly Dictionary<InputFile, JsonSchema> Schemas = Enum.GetValues<InputFile>()
