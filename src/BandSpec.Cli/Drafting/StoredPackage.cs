@@ -46,7 +46,8 @@ internal sealed class StoredPackage
             JsonElement margin = result.RootElement.GetProperty("margin");
             // A plan that the requirement pins is not proven best itself: whether the search came to its end stands with what it found instead.
             JsonElement searched = result.RootElement.TryGetProperty("optimum", out JsonElement optimum) ? optimum : result.RootElement.GetProperty("plan");
-            return !searched.GetProperty("proven").GetBoolean() ? null : new Verdict(
+            bool isCut = result.RootElement.TryGetProperty("diagnosis-complete", out JsonElement complete) && !complete.GetBoolean();
+            return isCut || !searched.GetProperty("proven").GetBoolean() ? null : new Verdict(
                 result.RootElement.GetProperty("feasible").GetBoolean(), margin.ValueKind == JsonValueKind.Null ? double.PositiveInfinity : margin.GetDouble(),
                 Proven: true);
         }

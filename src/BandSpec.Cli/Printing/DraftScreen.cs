@@ -26,6 +26,7 @@ internal static class DraftScreen
         AppendVerdict(screen, specification, ink);
         AppendPlan(screen, specification, ink);
         AppendRegions(screen, specification, ink);
+        screen.Append(DiagnosisScreen.Of(specification, ink));
         AppendProfile(screen, specification.Profile, ink);
         screen.Append(Plain, $"{ink.Bold("Package")}   {ink.Blue(package.Folder)}\n");
         foreach (string line in Wrapped(package.Files))

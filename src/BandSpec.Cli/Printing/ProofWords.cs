@@ -19,8 +19,9 @@ internal static class ProofWords
     };
 
     /// <summary>The message about a draft that was stopped.</summary>
-    public static string Stopped(Specification specification) =>
-        $"{specification.Application.Requirement.Identity.FolderName}: stopped when {Settled(specification.Optimum)} plans were decided or discarded; "
+    public static string Stopped(Specification specification) => specification.Optimum.Proven
+        ? $"{specification.Application.Requirement.Identity.FolderName}: stopped while changes were looked for that would make a plan fit; its package has those that were found"
+        : $"{specification.Application.Requirement.Identity.FolderName}: stopped when {Settled(specification.Optimum)} plans were decided or discarded; "
         + "its package holds the best plan so far, marked as not proven";
 
     private static string Settled(PlanChoice choice)

@@ -53,6 +53,8 @@ internal sealed class SearchBar : IProgress<SearchProgress>, IDisposable
             lapBegun = last.Total == 0 ? begun : terminal.Clock.GetTimestamp();
         last = value;
         double part = Math.Clamp((double)value.Done / Math.Max(1, value.Total), 0, 1);
+        if (value.OfChanges)
+            return $"{name} {StatusLine.Bar(part)} no plan fits; {value.Done} of {value.Total} kinds of change looked at that would make one fit";
         return string.Create(
             CultureInfo.InvariantCulture,
             $"{name} {StatusLine.Bar(part)} {value.Done:N0} of {value.Total:N0} plans, {StatusLine.Left(terminal.Clock.GetElapsedTime(lapBegun), part)} left at this pace; Ctrl-C keeps the best so far");

@@ -50,11 +50,21 @@ internal static class PlanChoosing
         }
     }
 
-    /// <summary>A plan that is feasible at every pressure and temperature; nothing when no candidate plan is, which is then proven.</summary>
-    public static CompensationPlan? Feasible(PlanSearch search)
+    /// <summary>A good plan, found quickly and without proof.</summary>
+    public static CompensationPlan Climbed(PlanSearch search)
+    {
+        Contender top = new PlanAscent(search.Tables, new MarginScore(search.Tables, []), search.Rms).Climb();
+        return search.Tables.PlanOf(top.List, top.Zero, top.Span);
+    }
+
+    /// <summary>
+    /// A plan that is feasible at every pressure and temperature; nothing when no candidate plan is, which is then proven, or when the search is
+    /// ended early.
+    /// </summary>
+    public static CompensationPlan? Feasible(PlanSearch search, CancellationToken cancellation = default)
     {
         List<NodePlace> added = [];
-        while (new ObjectiveSearch(search, added, CancellationToken.None).Feasible() is { } winner)
+        while (new ObjectiveSearch(search, added, cancellation).Feasible() is { } winner && !cancellation.IsCancellationRequested)
         {
             CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
             List<NodePlace> shortOf =

@@ -45,7 +45,7 @@ public static class SpecificationDraft
             Allocation = allocation,
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
-            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum) : null,
+            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum, progress, cancellation) : null,
             Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
     }
@@ -66,4 +66,10 @@ public enum DraftExtras
 
     /// <summary>What a small change of each input does to the margin.</summary>
     Gains = 4,
+
+    /// <summary>What a package has unless more is asked for.</summary>
+    Usual = DiagnosisOfNo,
+
+    /// <summary>Everything there is.</summary>
+    All = Diagnosis | DiagnosisOfNo | Gains,
 }

@@ -42,6 +42,7 @@ public static class ResultJson
             json.Objects("allocation", specification.Allocation.Terms, WriteShare);
             json.Objects("derived-limits", specification.DerivedLimits, WriteLimit);
             json.Object("profile", profile => WriteProfile(profile, specification.Profile));
+            json.Diagnosis(specification);
             json.Objects("nodes", specification.Bands.Nodes, WriteNode);
         });
     }

@@ -4,6 +4,7 @@ using System.Text.Json.Nodes;
 using BandSpec.Core.Findings;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using BandSpec.Files.Inputs;
 using BandSpec.Files.Json;
 using BandSpec.Files.Schemas;
 using BandSpec.Files.Yaml;
@@ -85,6 +86,36 @@ public sealed class SchemaTests
         Assert.Equal(free.Choice.ContinuousMargin, optimum.GetProperty("margin-continuous").GetDouble());
         Assert.True(optimum.GetProperty("proven").GetBoolean());
         Assert.False(JsonDocument.Parse(ResultJson.Write(free)).RootElement.TryGetProperty("optimum", out _));
+    }
+
+    [Fact]
+    public void A_result_with_its_diagnosis_follows_its_schema()
+    {
+        Specification refused = Documents.Drafts.Refused;
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(refused)).RootElement;
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(refused)));
+        Assert.Equal(refused.Diagnosis!.Changes.Count, result.GetProperty("diagnosis").GetArrayLength());
+        Assert.All(result.GetProperty("diagnosis").EnumerateArray(), change => Assert.Equal(
+            change.GetProperty("suffices").GetBoolean(), change.GetProperty("after").ValueKind == JsonValueKind.Number));
+        Assert.Equal(refused.Gains!.Count, result.GetProperty("gains").GetArrayLength());
+        Assert.Equal("ageing", result.GetProperty("held-by").GetProperty("perfect-correction").GetProperty("terms")[0].GetProperty("term").GetString());
+    }
+
+    [Theory]
+    [InlineData("brine-reinjection.yaml")]
+    [InlineData("cold-store-suction.yaml")]
+    [InlineData("hydrogen-dryer.yaml")]
+    public void The_results_of_the_demos_follow_the_schema(string file)
+    {
+        InputContent Content(string name) => InputContent.Of(name, File.ReadAllBytes(Path.Combine(DemoFolder, name)));
+        Specification specification = SpecificationDraft.Draft(InputReading.Read(Content(file), Content).Application!, extras: DraftExtras.Usual);
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(specification)).RootElement;
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(specification)));
+        Assert.Equal(!specification.Feasible, result.TryGetProperty("diagnosis", out _));
+        Assert.InRange(result.GetProperty("margin-continuous").GetDouble(), 0, result.GetProperty("margin").GetDouble() * (1 + 1e-9));
+        Assert.Equal(result.GetProperty("exchange-rounds").GetInt32() > 1, result.GetProperty("added-nodes").GetArrayLength() > 0);
     }
 
     private static InputFile KindOf(string file) =>
