@@ -21,10 +21,10 @@ internal static class WholeFile
 
             File.Move(fresh, path, overwrite: true);
         }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
             TryDelete(fresh);
-            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
+            throw WritingFault.Refuse(path, refused);
         }
     }
 
