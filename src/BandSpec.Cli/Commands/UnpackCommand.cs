@@ -37,12 +37,9 @@ internal static class UnpackCommand
             throw new RefusalException($"{file} carries a file that would not stay in its folder, `{stray.Name}`; nothing was written", ExitCode.Findings);
         if (Path.Exists(folder))
             throw new RefusalException($"{shown} exists already and was left as it is; name another folder with --out", ExitCode.Findings);
-        Directory.CreateDirectory(folder);
+        WholeFile.WriteInto(folder, carried);
         foreach (DocumentFile one in carried)
-        {
-            WholeFile.Write(Path.Combine(folder, one.Name), one.Bytes);
             terminal.Out.WriteLine(Path.Combine(shown, one.Name));
-        }
 
         return ExitCode.Done;
     }

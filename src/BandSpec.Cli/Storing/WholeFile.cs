@@ -1,3 +1,5 @@
+using BandSpec.Documents;
+
 namespace BandSpec.Cli.Storing;
 
 /// <summary>Writes a file so that it is either the old one or the new one, complete, whenever the process is killed.</summary>
@@ -26,6 +28,25 @@ internal static class WholeFile
             TryDelete(fresh);
             throw WritingFault.Refuse(path, refused);
         }
+    }
+
+    /// <summary>Writes files into a folder, which is made when it is not there.</summary>
+    /// <param name="folder">The folder's full path.</param>
+    /// <param name="files">The files; one that is there already is replaced.</param>
+    /// <exception cref="RefusalException">The disk or the rights keep one from being written; it is as it was.</exception>
+    public static void WriteInto(string folder, IEnumerable<DocumentFile> files)
+    {
+        try
+        {
+            Directory.CreateDirectory(folder);
+        }
+        catch (Exception refused) when (WritingFault.Is(refused))
+        {
+            throw WritingFault.Refuse(folder, refused);
+        }
+
+        foreach (DocumentFile file in files)
+            Write(Path.Combine(folder, file.Name), file.Bytes);
     }
 
     /// <summary>Deletes a file that may be gone, or not to be deleted: then it does no harm where it is.</summary>
