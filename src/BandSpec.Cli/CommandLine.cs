@@ -19,7 +19,8 @@ internal static class CommandLine
     {
         try
         {
-            ParseResult parsed = Build(terminal).Parse(arguments);
+            // Whoever names no command wants to know which there are.
+            ParseResult parsed = Build(terminal).Parse(arguments.Count == 0 ? ["--help"] : arguments);
             if (parsed.Errors.Count > 0 && parsed.Action is ParseErrorAction)
                 return RefuseArguments(parsed, terminal);
             return parsed.Invoke(new InvocationConfiguration
