@@ -3,6 +3,7 @@ using System.CommandLine.Help;
 using System.CommandLine.Invocation;
 using BandSpec.Cli.Commands;
 using BandSpec.Cli.Printing;
+using BandSpec.Cli.Storing;
 using BandSpec.Core.Findings;
 using BandSpec.Documents.Templates;
 
@@ -42,6 +43,16 @@ internal static class CommandLine
         {
             terminal.Error.WriteLine($"bandspec: {refusal.Message}");
             return (int)refusal.Code;
+        }
+        catch (IOException closed) when (WritingFault.IsClosedPipe(closed))
+        {
+            // Whoever read the output has seen enough.
+            return (int)ExitCode.Fault;
+        }
+        catch (Exception refused) when (WritingFault.IsOfDisk(refused))
+        {
+            terminal.Error.WriteLine($"bandspec: {WritingFault.Refuse("the output", refused).Message}");
+            return (int)ExitCode.Fault;
         }
         catch (Exception fault)
         {

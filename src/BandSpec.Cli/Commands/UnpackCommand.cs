@@ -1,4 +1,5 @@
 using System.CommandLine;
+using BandSpec.Cli.Opening;
 using BandSpec.Cli.Printing;
 using BandSpec.Cli.Storing;
 using BandSpec.Documents;
@@ -48,7 +49,7 @@ internal static class UnpackCommand
     {
         try
         {
-            return SpecificationFile.Attachments(File.ReadAllBytes(Path.GetFullPath(file, terminal.Folder)));
+            return SpecificationFile.Attachments(BoundedFile.Read(Path.GetFullPath(file, terminal.Folder)));
         }
         catch (InvalidDataException)
         {

@@ -1,4 +1,5 @@
 using System.Security.Cryptography;
+using BandSpec.Cli.Opening;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Verifying;
@@ -6,9 +7,6 @@ namespace BandSpec.Cli.Verifying;
 /// <summary>Compares files byte by byte with what they should be.</summary>
 internal static class FileComparison
 {
-    /// <summary>No file of a package is larger.</summary>
-    private const int LargestFile = 64 << 20;
-
     /// <summary>Every file of a folder, the missing and the strange ones too.</summary>
     /// <param name="folder">The folder's full path.</param>
     /// <param name="expected">The files that should be in it, and no others.</param>
@@ -36,9 +34,7 @@ internal static class FileComparison
     {
         try
         {
-            if (!File.Exists(path) || new FileInfo(path).Length > LargestFile)
-                return null;
-            return File.ReadAllBytes(path);
+            return BoundedFile.Read(path);
         }
         catch (Exception unreadable) when (unreadable is IOException or UnauthorizedAccessException)
         {

@@ -45,6 +45,7 @@ internal sealed class SafeTemplate
             // The limits would cut the text off without a word otherwise.
             OnStringLimit = ScriptLimitBehavior.Throw,
             OnOutputLimit = ScriptLimitBehavior.Throw,
+            TemplateLoader = NoOther.Instance,
             RegexTimeOut = TimeSpan.FromMilliseconds(500),
             NewLine = "\n",
             MemberFilter = _ => false,
@@ -84,6 +85,21 @@ internal sealed class SafeTemplate
         var functions = (ScriptObject)all.Clone(deep: false);
         foreach (var name in names) functions.Remove(name);
         builtins.SetValue(group, functions, readOnly: true);
+    }
+
+    /// <summary>A template is one file: what it seems to say is all that it says.</summary>
+    private sealed class NoOther : ITemplateLoader
+    {
+        public static readonly NoOther Instance = new();
+
+        public string GetPath(TemplateContext context, SourceSpan callerSpan, string templateName) =>
+            throw new ScriptRuntimeException(callerSpan, $"a template cannot include another, `{templateName}`");
+
+        public string? Load(TemplateContext context, SourceSpan callerSpan, string templatePath) =>
+            throw new ScriptRuntimeException(callerSpan, "a template cannot include another");
+
+        public ValueTask<string?> LoadAsync(TemplateContext context, SourceSpan callerSpan, string templatePath) =>
+            throw new ScriptRuntimeException(callerSpan, "a template cannot include another");
     }
 
     private sealed class EscapingContext(ScriptObject builtins, Func<string, string>? escape) : TemplateContext(builtins)

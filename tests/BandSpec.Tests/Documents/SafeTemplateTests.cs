@@ -46,6 +46,10 @@ public sealed class SafeTemplateTests
     }
 
     [Fact]
+    public void Says_in_plain_words_that_one_template_cannot_include_another() => Assert.Equal(
+        "layout.txt:1:4: a template cannot include another, `/etc/hostname`.", Assert.Throws<TemplateException>(() => Render("{{ include '/etc/hostname' }}")).Message);
+
+    [Fact]
     public void Leaves_its_own_text_alone_and_escapes_values() =>
         Assert.Equal(
             "<b>&lt;Brine&gt;</b>", new SafeTemplate("t", "<b>{{ '<Brine>' }}</b>").Render(View, System.Security.SecurityElement.Escape));
