@@ -22,6 +22,9 @@ internal sealed class SafeTemplate
     public SafeTemplate(string file, string text)
     {
         _file = file;
+        // Scriban takes it for the end of the text, and would leave the rest out without a word.
+        if (text.IndexOf('\0', StringComparison.Ordinal) is >= 0 and var at)
+            throw new TemplateException(file, text.AsSpan(0, at).Count('\n') + 1, at - text.LastIndexOf('\n', at), "An invisible character, U+0000.");
         _template = Template.Parse(text, file, new ParserOptions { ExpressionDepthLimit = 100 });
         if (_template.Messages.FirstOrDefault(m => m.Type == ParserMessageType.Error) is { } error) throw At(error.Span, error.Message);
     }
@@ -64,8 +67,9 @@ internal sealed class SafeTemplate
         }
     }
 
+    // What is missing at the end of the text has no place of its own.
     private TemplateException At(SourceSpan span, string reason) =>
-        new(_file, span.Start.Line + 1, span.Start.Column + 1, reason.Trim().TrimEnd('.') + ".");
+        new(_file, Math.Max(span.Start.Line, 0) + 1, Math.Max(span.Start.Column, 0) + 1, reason.Trim().TrimEnd('.') + ".");
 
     // Without the clock, chance, and evaluation of text made up at run time. Shared by all templates, so read-only throughout.
     private static ScriptObject MakeBuiltins()

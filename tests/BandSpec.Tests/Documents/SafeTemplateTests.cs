@@ -37,6 +37,7 @@ public sealed class SafeTemplateTests
     [InlineData("{{ math.pi = 3 }}")]
     [InlineData("{{ if feasible }}never closed")]
     [InlineData("{{ end }}")]
+    [InlineData("{{ title }} \0 the rest")]
     [InlineData("{{ ('a' | string.repeat 30) + '!' | regex.match '^(a+)+$' }}")]
     public void Refuses_with_file_line_and_column(string hostile)
     {
