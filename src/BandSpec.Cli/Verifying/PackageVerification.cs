@@ -22,6 +22,8 @@ internal sealed class PackageVerification(string name, string? record, string wo
         string path = Path.GetFullPath(name, workingFolder);
         bool isFolder = Directory.Exists(path);
         string document = isFolder ? Path.Combine(path, PackageNames.Document) : path;
+        if (!File.Exists(document))
+            return Fail(isFolder ? PackageNames.Document : name, isFolder ? "it is missing, and with it what everything could be computed from" : "there is no such file");
         if (FileComparison.Read(document) is not { } pdf || CarriedPackage.Of(name, pdf) is not { } carried)
             return Fail(Path.GetFileName(document), "it is not the PDF of a specification, or it was damaged");
         if (carried.Provenance.Making.Program != CommandLine.Program)

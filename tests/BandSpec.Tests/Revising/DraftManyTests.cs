@@ -38,7 +38,7 @@ public sealed class DraftManyTests
         Directory.CreateDirectory(shop.PathOf(".git"));
         using JsonDocument json = JsonDocument.Parse(shop.Run("draft", ".", "--json").Output);
         Assert.Equal(
-            ["./a.yaml drafted", "./b.yaml drafted", "./brine.yaml drafted", "./deep/er/c.yaml drafted"],
+            ["a.yaml drafted", "b.yaml drafted", "brine.yaml drafted", "deep/er/c.yaml drafted"],
             json.RootElement.GetProperty("files").EnumerateArray().Select(f => $"{f.GetProperty("file").GetString()} {f.GetProperty("state").GetString()}"));
         Assert.Equal((2, "", "bandspec: there is no requirement in platforms\n"), Parts(shop.Run("draft", "platforms")));
     }
