@@ -22,7 +22,7 @@ internal sealed class PackageOptions
         Description = "Language of the documents.", DefaultValueFactory = _ => "en", HelpName = "en|de",
     };
 
-    private readonly Option<Paper> paper = new("--paper") { Description = "Paper of the PDF.", HelpName = "A4|Letter" };
+    private readonly Option<Paper> paper = PaperOption.Create();
     private readonly Option<string?> root = CommonOptions.Root();
     private readonly Option<bool> diagnose = new("--diagnose")
     {

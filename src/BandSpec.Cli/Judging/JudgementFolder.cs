@@ -1,4 +1,5 @@
 using System.Text;
+using BandSpec.Cli.Storing;
 using BandSpec.Core.LotJudging;
 using BandSpec.Files.Csv;
 using BandSpec.Files.Json;
@@ -24,17 +25,25 @@ internal static class JudgementFolder
             });
             return ["judgement.json", "units.csv"];
         }
-        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
-            throw new RefusalException($"{folder} cannot be written: {fault.Message}");
+            throw WritingFault.Refuse(folder, refused);
         }
     }
 
     private static void Replace(string folder, string name, Action<Stream> write)
     {
         string path = Path.Combine(folder, name), unfinished = $"{path}.unfinished";
-        using (FileStream stream = File.Create(unfinished))
-            write(stream);
-        File.Move(unfinished, path, overwrite: true);
+        try
+        {
+            using (FileStream stream = File.Create(unfinished))
+                write(stream);
+            File.Move(unfinished, path, overwrite: true);
+        }
+        catch (IOException)
+        {
+            WholeFile.TryDelete(unfinished);
+            throw;
+        }
     }
 }
