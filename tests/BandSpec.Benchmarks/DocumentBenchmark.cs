@@ -1,6 +1,5 @@
 using System.Diagnostics;
 using BandSpec.Core.Specifying;
-using BandSpec.Documents;
 using BandSpec.Tests.Documents;
 using PdfSharp.Pdf;
 using PdfSharp.Pdf.IO;

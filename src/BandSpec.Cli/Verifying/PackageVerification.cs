@@ -1,6 +1,5 @@
 using BandSpec.Cli.Releasing;
 using BandSpec.Files.Inputs;
-using BandSpec.Files.Json;
 using BandSpec.Files.Releases;
 
 namespace BandSpec.Cli.Verifying;
