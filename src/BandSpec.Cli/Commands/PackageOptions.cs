@@ -24,16 +24,21 @@ internal sealed class PackageOptions
 
     private readonly Option<Paper> paper = PaperOption.Create();
     private readonly Option<string?> root = CommonOptions.Root();
+    private readonly Option<bool> diagnose = new("--diagnose")
+    {
+        Description = "Add what holds the margin and what each input's improvement buys; when no plan fits, what would make one fit is there anyway.",
+    };
 
     /// <summary>Adds all of them to a command.</summary>
     public void AddTo(Command command)
     {
-        foreach (Option option in new Option[] { output, templates, language, paper, root })
+        foreach (Option option in new Option[] { output, templates, language, paper, root, diagnose })
             command.Add(option);
     }
 
     /// <summary>A run with what the command line says.</summary>
     public DraftRun RunOf(ParseResult parsed, Terminal terminal) => new(
         terminal, new DraftFolders(parsed.GetValue(output)!, parsed.GetValue(root), parsed.GetValue(templates)),
-        new DocumentOptions { Program = CommandLine.Program, Language = parsed.GetValue(language)!, Paper = parsed.GetValue(paper) });
+        new DocumentOptions { Program = CommandLine.Program, Language = parsed.GetValue(language)!, Paper = parsed.GetValue(paper) },
+        parsed.GetValue(diagnose));
 }

@@ -16,6 +16,9 @@ internal static class WholeFile
         {
             using (FileStream stream = new(fresh, FileMode.Create))
             {
+                // Who may read the file is not changed by writing it anew.
+                if (!OperatingSystem.IsWindows() && File.Exists(path))
+                    File.SetUnixFileMode(stream.SafeFileHandle, File.GetUnixFileMode(path));
                 stream.Write(bytes.Span);
                 // On the disk before it gets its name, so that not even a loss of power leaves an empty file under it.
                 stream.Flush(flushToDisk: true);
@@ -30,21 +33,21 @@ internal static class WholeFile
         }
     }
 
+    /// <summary>The same, in a folder that is made if it is not there.</summary>
+    /// <exception cref="RefusalException">The disk or the rights keep it from being written.</exception>
+    public static void WriteInFolder(string path, ReadOnlyMemory<byte> bytes)
+    {
+        MakeFolder(Path.GetDirectoryName(path)!);
+        Write(path, bytes);
+    }
+
     /// <summary>Writes files into a folder, which is made when it is not there.</summary>
     /// <param name="folder">The folder's full path.</param>
     /// <param name="files">The files; one that is there already is replaced.</param>
     /// <exception cref="RefusalException">The disk or the rights keep one from being written; it is as it was.</exception>
     public static void WriteInto(string folder, IEnumerable<DocumentFile> files)
     {
-        try
-        {
-            Directory.CreateDirectory(folder);
-        }
-        catch (Exception refused) when (WritingFault.Is(refused))
-        {
-            throw WritingFault.Refuse(folder, refused);
-        }
-
+        MakeFolder(folder);
         foreach (DocumentFile file in files)
             Write(Path.Combine(folder, file.Name), file.Bytes);
     }
@@ -59,6 +62,18 @@ internal static class WholeFile
         catch (Exception kept) when (kept is IOException or UnauthorizedAccessException)
         {
             // A hidden leftover; the next run writes over it.
+        }
+    }
+
+    private static void MakeFolder(string folder)
+    {
+        try
+        {
+            Directory.CreateDirectory(folder);
+        }
+        catch (Exception refused) when (WritingFault.Is(refused))
+        {
+            throw WritingFault.Refuse(folder, refused);
         }
     }
 }
