@@ -67,6 +67,21 @@ public sealed class TryTests : IDisposable
     }
 
     [Fact]
+    public void A_sweep_is_drawn_when_a_file_is_named()
+    {
+        (int code, string output, string error) = desk.Run(
+            "try", "brine-reinjection.yaml", "--units", "400", "--lot-size", "40", "--sweep", "safety-factor=1.1..1.3:0.1", "--chart", "charts/safety.svg");
+
+        Assert.Equal((0, ""), (code, error));
+        Assert.EndsWith("Chart     charts/safety.svg\n", output, StringComparison.Ordinal);
+        string chart = File.ReadAllText(desk.At("charts/safety.svg"));
+        Assert.Matches(@"3\svalues of safety-factor from 1\.1\sto\s1\.3: the margin goes from", chart);
+        Assert.Equal(
+            (2, "", "bandspec: --chart draws a sweep; say what to sweep, such as --sweep safety-factor=1.0..1.5:0.1\n"),
+            desk.Run("try", "brine-reinjection.yaml", "--chart", "safety.svg"));
+    }
+
+    [Fact]
     public void A_change_shows_and_the_rest_of_the_chance_stays()
     {
         double Yield(params string[] change)
