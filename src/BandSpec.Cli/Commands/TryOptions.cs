@@ -48,15 +48,7 @@ internal sealed class TryOptions
     /// <exception cref="FormatException">An option is not written as it should be.</exception>
     public TryRequest RequestOf(ParseResult parsed)
     {
-        LotOrder order;
-        try
-        {
-            order = LotOrder.For(TryRequest.UnitsOf(parsed.GetValue(units)!), parsed.GetValue(lotSize), parsed.GetValue(seed));
-        }
-        catch (ArgumentOutOfRangeException)
-        {
-            throw new FormatException("a lot has 16 to 100000 units");
-        }
+        LotOrder order = LotOrder.For(TryRequest.UnitsOf(parsed.GetValue(units)!), parsed.GetValue(lotSize), parsed.GetValue(seed));
         if (parsed.GetValue(part) is { } text)
             order = TryRequest.PartOf(order, text);
         return new TryRequest(

@@ -100,7 +100,7 @@ public sealed class TryTests : IDisposable
     [InlineData("--sweep", "safety-factor=1..2", "bandspec: `safety-factor=1..2`: a sweep is written PATH=FROM..TO:STEP, such as safety-factor=1.0..1.5:0.1\n")]
     [InlineData("--units", "many", "bandspec: `many`: units are a whole number from 1 to 1e12\n")]
     [InlineData("--part", "3/2", "bandspec: `3/2`: a part is written PART/PARTS, such as 3/64, with at most as many parts as lots (2500)\n")]
-    [InlineData("--lot-size", "3", "bandspec: a lot has 16 to 100000 units\n")]
+    [InlineData("--lot-size", "3", "bandspec: `3`: --lot-size takes a whole number from 16 to 100000\nbandspec: see `bandspec try --help`\n")]
     public void What_makes_no_sense_is_refused_with_what_would(string option, string value, string message) =>
         Assert.Equal((2, "", message), desk.Run("try", "brine-reinjection.yaml", option, value));
 
