@@ -3,7 +3,8 @@ namespace BandSpec.Core.Bands;
 
 /// <summary>
 /// Finds the least margin over a region by branch and bound. A rectangle is done with when Bernstein coefficients prove that all of it keeps
-/// the least margin met so far; otherwise it is halved, and the corners of its halves may lower that margin. The margin is at least
+/// the least margin met so far; otherwise it is halved, and the corners of its halves may lower that margin: from a corner that does, the way
+/// leads downhill to the least margin near it. The margin is at least
 /// <c>m &gt; 0</c> where <c>room ≥ 0</c> and <c>room² − m²·(3Cσ)² ≥ 0</c>; at least <c>m ≤ 0</c> where <c>room ≥ 0</c> or
 /// <c>m²·(3Cσ)² − room² ≥ 0</c>: polynomials, all of them.
 /// </summary>
@@ -51,11 +52,26 @@ internal sealed class LeastMarginSearch
         for (int corner = 0; corner < 4; corner++)
         {
             bool upperU = corner % 2 == 1, upperV = corner >= 2;
-            double margin = patch.MarginAt(upperU, upperV);
-            if (margin >= least.Margin)
+            double margin = patch.MarginAt(upperU, upperV), before = least.Margin;
+            if (margin >= before)
                 continue;
-            (double fraction, double along) = patch.PlaceOf(upperU, upperV);
-            least = (margin, fraction, along);
+            (double u, double v) = patch.Corner(upperU, upperV);
+            Keep(patch.Piece, margin, u, v);
+            if (margin < before - (Gap * Math.Abs(before)))
+                GoDownhill(patch.Piece, u, v);
         }
+    }
+
+    private void GoDownhill(RegionPiece piece, double u, double v)
+    {
+        (double margin, u, v) = new MarginDescent(piece).From(u, v);
+        if (margin < least.Margin)
+            Keep(piece, margin, u, v);
+    }
+
+    private void Keep(RegionPiece piece, double margin, double u, double v)
+    {
+        (double fraction, double along) = piece.PlaceOf(u, v);
+        least = (margin, fraction, along);
     }
 }

@@ -5,7 +5,6 @@ namespace BandSpec.Core.Bands;
 /// <summary>A rectangle of a <see cref="RegionPiece"/> with the nets of all branches of the room, of their squares, and of the needs.</summary>
 internal sealed class MarginPatch
 {
-    private readonly RegionPiece piece;
     private readonly Interval u;
     private readonly Interval v;
     private readonly BernsteinNet[] rooms;
@@ -15,9 +14,12 @@ internal sealed class MarginPatch
     private MarginPatch(
         RegionPiece piece, Interval u, Interval v, int depth, BernsteinNet[] rooms, BernsteinNet[] squares, BernsteinNet[] needs)
     {
-        (this.piece, this.u, this.v, Depth) = (piece, u, v, depth);
+        (Piece, this.u, this.v, Depth) = (piece, u, v, depth);
         (this.rooms, this.squares, this.needs) = (rooms, squares, needs);
     }
+
+    /// <summary>The piece.</summary>
+    public RegionPiece Piece { get; }
 
     /// <summary>How often the piece was halved to come here.</summary>
     public int Depth { get; }
@@ -50,9 +52,8 @@ internal sealed class MarginPatch
         return needs.Min(n => Ratio(room, Math.Sqrt(Math.Max(0, n.Corner(upperU, upperV)))));
     }
 
-    /// <summary>The pressure fraction and the place between the region's ends of a corner.</summary>
-    public (double Fraction, double Along) PlaceOf(bool upperU, bool upperV) =>
-        piece.PlaceOf(upperU ? u.Upper : u.Lower, upperV ? v.Upper : v.Lower);
+    /// <summary>Where in the piece a corner lies.</summary>
+    public (double U, double V) Corner(bool upperU, bool upperV) => (upperU ? u.Upper : u.Lower, upperV ? v.Upper : v.Lower);
 
     /// <summary>Two halves, cut across the direction in which room and need change more: a valley is not cut along its floor.</summary>
     public (MarginPatch Lower, MarginPatch Upper) Halve()
@@ -63,8 +64,8 @@ internal sealed class MarginPatch
         Interval low = new(cut.Lower, middle), high = new(middle, cut.Upper);
         (BernsteinNet Lower, BernsteinNet Upper)[] r = Halves(rooms, alongU), s = Halves(squares, alongU), n = Halves(needs, alongU);
         return (
-            new MarginPatch(piece, alongU ? low : u, alongU ? v : low, Depth + 1, Lowers(r), Lowers(s), Lowers(n)),
-            new MarginPatch(piece, alongU ? high : u, alongU ? v : high, Depth + 1, Uppers(r), Uppers(s), Uppers(n)));
+            new MarginPatch(Piece, alongU ? low : u, alongU ? v : low, Depth + 1, Lowers(r), Lowers(s), Lowers(n)),
+            new MarginPatch(Piece, alongU ? high : u, alongU ? v : high, Depth + 1, Uppers(r), Uppers(s), Uppers(n)));
     }
 
     private static (BernsteinNet Lower, BernsteinNet Upper)[] Halves(BernsteinNet[] nets, bool alongU) => [.. nets.Select(n => n.Halve(alongU))];

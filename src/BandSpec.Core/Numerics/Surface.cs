@@ -48,6 +48,30 @@ internal sealed class Surface
         return new Surface(c);
     }
 
+    /// <summary>Value and derivatives at a place, by Horner's rule.</summary>
+    public SurfaceJet At(double x, double t)
+    {
+        SurfaceJet sum = default;
+        for (int i = DegreeInX; i >= 0; i--)
+            sum = sum.TimesPlus(x, InT(i, t));
+        return sum;
+    }
+
+    /// <summary>The value alone.</summary>
+    public double ValueAt(double x, double t)
+    {
+        double sum = 0;
+        for (int i = DegreeInX; i >= 0; i--)
+        {
+            double inT = 0;
+            for (int k = DegreeInT; k >= 0; k--)
+                inT = (inT * t) + coefficients[i, k];
+            sum = (sum * x) + inT;
+        }
+
+        return sum;
+    }
+
     /// <summary>The surface in new variables <c>u, v</c>: <c>x</c> replaced by a surface in them, <c>t</c> by a polynomial in <c>v</c>.</summary>
     public Surface Substitute(Surface x, double[] t)
     {
@@ -62,4 +86,31 @@ internal sealed class Surface
 
         return result;
     }
+
+    private (double Value, double First, double Second) InT(int i, double t)
+    {
+        double value = 0, first = 0, half = 0;
+        for (int k = DegreeInT; k >= 0; k--)
+        {
+            half = (half * t) + first;
+            first = (first * t) + value;
+            value = (value * t) + coefficients[i, k];
+        }
+
+        return (value, first, 2 * half);
+    }
+}
+
+/// <summary>A surface at a place: its value and its first and second derivatives.</summary>
+/// <param name="Value">The value.</param>
+/// <param name="X">Derivative by <c>x</c>.</param>
+/// <param name="T">Derivative by <c>t</c>.</param>
+/// <param name="XX">Second derivative by <c>x</c>.</param>
+/// <param name="XT">Derivative by both.</param>
+/// <param name="TT">Second derivative by <c>t</c>.</param>
+internal readonly record struct SurfaceJet(double Value, double X, double T, double XX, double XT, double TT)
+{
+    /// <summary>One step of Horner's rule: this times <c>x</c>, plus a polynomial in <c>t</c>.</summary>
+    public SurfaceJet TimesPlus(double x, (double Value, double First, double Second) next) => new(
+        (Value * x) + next.Value, (X * x) + Value, (T * x) + next.First, (XX * x) + (2 * X), (XT * x) + T, (TT * x) + next.Second);
 }

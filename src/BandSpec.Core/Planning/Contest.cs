@@ -19,10 +19,16 @@ internal static class Contest
     private const double Tie = 1e-9;
 
     /// <summary>The lowest margin that ties with <paramref name="best"/>.</summary>
-    public static double TieBelow(double best) => double.IsInfinity(best) ? best : best - (Tie * Math.Abs(best));
+    public static double TieBelow(double best) => Below(best, Tie);
 
     /// <summary>The highest rms that ties with <paramref name="best"/>.</summary>
-    public static double TieAbove(double best) => best + (Tie * Math.Abs(best));
+    public static double TieAbove(double best) => Above(best, Tie);
+
+    /// <summary>Less than <paramref name="best"/> by a fraction of it.</summary>
+    public static double Below(double best, double fraction) => double.IsInfinity(best) ? best : best - (fraction * Math.Abs(best));
+
+    /// <summary>More than <paramref name="best"/> by a fraction of it.</summary>
+    public static double Above(double best, double fraction) => double.IsInfinity(best) ? best : best + (fraction * Math.Abs(best));
 
     /// <summary>The winner, or nothing when there is no contender.</summary>
     /// <param name="contenders">All plans in the running.</param>

@@ -4,7 +4,7 @@ namespace BandSpec.Core.Planning;
 
 /// <summary>
 /// Makes the cuts of a search before it begins: from lists picked at even distances a cut is made for each that no earlier cut discards. One
-/// after the other and always the same, so that what a search discards does not depend on its threads.
+/// after the other and always the same in each group, so that what a search discards does not depend on its threads.
 /// </summary>
 internal sealed class CutMaking
 {
@@ -19,20 +19,33 @@ internal sealed class CutMaking
 
     private readonly SearchTables tables;
     private readonly IReadOnlyList<NodePlace> added;
+    private readonly PlanForm[] forms;
 
-    public CutMaking(SearchTables tables, IReadOnlyList<NodePlace> added) => (this.tables, this.added) = (tables, added);
+    public CutMaking(SearchTables tables, IReadOnlyList<NodePlace> added)
+    {
+        (this.tables, this.added) = (tables, added);
+        forms =
+        [
+            .. from count in tables.Families.All.Select(f => f.Count).Distinct().Order()
+               from degrees in tables.Families.DegreesOf[count]
+               select new PlanForm(count, degrees.Zero, degrees.Span),
+        ];
+    }
 
     /// <summary>All groups of a search, without cuts.</summary>
-    public IReadOnlyList<ListGroup> Uncut() => [.. Forms().Select((f, i) => new ListGroup(tables, i, f, []))];
+    public IReadOnlyList<ListGroup> Uncut() => [.. forms.Select((f, i) => new ListGroup(tables, i, f, []))];
 
     /// <summary>All groups of a search with cuts that discard plans of less than a margin.</summary>
     /// <param name="level">The margin; cuts are made for a positive one only.</param>
-    public IReadOnlyList<ListGroup> CutAt(double level) => [.. Forms().Select((f, i) => new ListGroup(tables, i, f, CutsFor(f, level)))];
-
-    private IEnumerable<PlanForm> Forms() =>
-        from count in tables.Families.All.Select(f => f.Count).Distinct().Order()
-        from degrees in tables.Families.DegreesOf[count]
-        select new PlanForm(count, degrees.Zero, degrees.Span);
+    /// <param name="threads">How many threads may be used; −1 for one a processor.</param>
+    public IReadOnlyList<ListGroup> CutAt(double level, int threads = -1)
+    {
+        var groups = new ListGroup[forms.Length];
+        Parallel.For(
+            0, forms.Length, new ParallelOptions { MaxDegreeOfParallelism = threads },
+            i => groups[i] = new ListGroup(tables, i, forms[i], CutsFor(forms[i], level)));
+        return groups;
+    }
 
     private List<PriceCut> CutsFor(PlanForm form, double level)
     {

@@ -36,7 +36,7 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
     /// <summary>The front of cost against rms error, over feasible plans.</summary>
     public IReadOnlyList<TradeoffPoint> ByRmsError()
     {
-        (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(1), 1);
+        (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(1, search.Threads), 1);
         List<TradeoffPoint> front = [];
         double toBeat = double.PositiveInfinity;
         foreach (IReadOnlyList<PlanFamily> level in search.Tables.Families.CostLevels())
@@ -58,10 +58,19 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
     /// <summary>The best plan of a level that keeps what it was chosen for at every place; nothing when none does.</summary>
     private TradeoffPoint? BestOf(IReadOnlyList<PlanFamily> level, Func<MarginScore, Heat> heat, Func<double, bool> isEnough)
     {
+        Shortlist? shortlist = null;
         while (!cancellation.IsCancellationRequested)
         {
             var margin = new MarginScore(search.Tables, added);
-            if (search.Best(level, groups, heat(margin), cancellation) is not { } winner || cancellation.IsCancellationRequested)
+            Contender? winner = shortlist?.WinnerOver(search.Tables, margin);
+            if (winner is null)
+            {
+                Heat run = heat(margin);
+                winner = search.Best(level, groups, run, cancellation);
+                shortlist = run.Shortlist(cutAt);
+            }
+
+            if (winner is null || cancellation.IsCancellationRequested)
                 return null;
             CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
             IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(search.Tables.Application, plan);
@@ -82,6 +91,6 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
     {
         if (toBeat <= 0 || toBeat < cutAt * NewCuts)
             return;
-        (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(toBeat), toBeat);
+        (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(toBeat, search.Threads), toBeat);
     }
 }

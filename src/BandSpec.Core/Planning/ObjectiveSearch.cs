@@ -25,6 +25,9 @@ internal sealed class ObjectiveSearch
         start = new Lazy<Contender>(() => new PlanAscent(search.Tables, margin, search.Rms).Climb());
     }
 
+    /// <summary>The plans in the running when the search that decided had ended; nothing before.</summary>
+    public Shortlist? Shortlist { get; private set; }
+
     private PlanFamilies Families => search.Tables.Families;
 
     /// <summary>The best plan by an objective; when none is feasible, the one of largest margin.</summary>
@@ -40,8 +43,7 @@ internal sealed class ObjectiveSearch
     {
         var heat = new Heat(margin, Enough, rmsFirst: false);
         heat.Enter(start.Value);
-        double level = Math.Max(Enough, Contest.TieBelow(start.Value.Margin));
-        return search.Best(Families.All, cuts.CutAt(level), heat, cancellation);
+        return Run(heat, Math.Max(Enough, Contest.Below(start.Value.Margin, Heat.Reserve)));
     }
 
     /// <summary>The best of all plans by margin, whether feasible or not; begins with a plan found by climbing, which most plans cannot reach.</summary>
@@ -49,7 +51,7 @@ internal sealed class ObjectiveSearch
     {
         var heat = new Heat(margin, double.NegativeInfinity, rmsFirst: false);
         heat.Enter(start.Value);
-        return search.Best(Families.All, cuts.CutAt(Contest.TieBelow(start.Value.Margin)), heat, cancellation) ?? start.Value;
+        return Run(heat, Contest.Below(start.Value.Margin, Heat.Reserve)) ?? start.Value;
     }
 
     private Contender LeastError()
@@ -59,7 +61,7 @@ internal sealed class ObjectiveSearch
             return best;
         var heat = new Heat(margin, Enough, rmsFirst: true);
         heat.Enter(best);
-        return search.Best(Families.All, cuts.CutAt(Enough), heat, cancellation) ?? best;
+        return Run(heat, Enough) ?? best;
     }
 
     /// <summary>A feasible plan, if climbing finds one; otherwise the best of all by margin, which tells whether there is any.</summary>
@@ -79,16 +81,26 @@ internal sealed class ObjectiveSearch
             {
                 if (BestKnown() is { Margin: < Enough } nearest)
                     return nearest;
-                groups = cuts.CutAt(Enough);
+                groups = cuts.CutAt(Enough, search.Threads);
                 passed = long.MinValue;
             }
 
-            Contender? winner = search.Best(level, groups, new Heat(margin, Enough, rmsFirst: false), cancellation);
+            Contender? winner = Run(level, groups, new Heat(margin, Enough, rmsFirst: false), Enough);
             if (winner is not null || cancellation.IsCancellationRequested)
                 return winner ?? start.Value;
             passed += level.Sum(f => Families.ListsIn(f) * Families.DegreesOf[f.Count].Count);
         }
 
         return passed >= 0 ? BestKnown() : start.Value;
+    }
+
+    /// <summary>A heat of all plans that cuts at a margin leave.</summary>
+    private Contender? Run(Heat heat, double cutAt) => Run(Families.All, cuts.CutAt(cutAt, search.Threads), heat, cutAt);
+
+    private Contender? Run(IReadOnlyList<PlanFamily> families, IReadOnlyList<ListGroup> groups, Heat heat, double cutAt)
+    {
+        Contender? winner = search.Best(families, groups, heat, cancellation);
+        Shortlist = heat.Shortlist(cutAt);
+        return winner;
     }
 }

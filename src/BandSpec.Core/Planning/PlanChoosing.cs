@@ -29,9 +29,10 @@ internal static class PlanChoosing
     {
         Application application = search.Tables.Application;
         List<NodePlace> added = [];
+        SearchAnswer? answer = null;
         for (int round = 1; ; round++)
         {
-            SearchAnswer answer = search.Run(objective, added, cancellation);
+            answer = answer is null ? search.Run(objective, added, cancellation) : search.RunAgain(answer, objective, added, cancellation);
             CompensationPlan plan = search.Tables.PlanOf(answer.Winner.List, answer.Winner.Zero, answer.Winner.Span);
             IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
             List<NodePlace> shortOf = [.. Violated(everywhere, answer.Winner.Margin).Where(p => !added.Contains(p))];

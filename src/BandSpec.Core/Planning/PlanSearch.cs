@@ -15,7 +15,6 @@ public readonly record struct SearchProgress(long Done, long Total);
 internal sealed class PlanSearch
 {
     private readonly IProgress<SearchProgress>? progress;
-    private readonly int threads;
     private readonly Lock gate = new();
     private SearchCount count;
 
@@ -28,8 +27,11 @@ internal sealed class PlanSearch
         Tables = new SearchTables(application);
         Rms = new RmsScore(Tables);
         PlanCount = Tables.Families.PlanCount();
-        (this.progress, this.threads) = (progress, threads);
+        (this.progress, Threads) = (progress, threads);
     }
+
+    /// <summary>How many threads may be used; −1 for one a processor.</summary>
+    public int Threads { get; }
 
     /// <summary>What is known of the application.</summary>
     public SearchTables Tables { get; }
@@ -47,9 +49,20 @@ internal sealed class PlanSearch
     public SearchAnswer Run(PlanObjective objective, IReadOnlyList<NodePlace> added, CancellationToken cancellation = default)
     {
         count = default;
-        Contender winner = new ObjectiveSearch(this, added, cancellation).Best(objective);
-        return new SearchAnswer(winner, count, !cancellation.IsCancellationRequested);
+        var search = new ObjectiveSearch(this, added, cancellation);
+        Contender winner = search.Best(objective);
+        return new SearchAnswer(winner, search.Shortlist, count, !cancellation.IsCancellationRequested);
     }
+
+    /// <summary>The best plan when nodes have joined those of an earlier answer, from its shortlist if that decides.</summary>
+    /// <param name="before">A proven answer by the same objective.</param>
+    /// <param name="objective">The objective.</param>
+    /// <param name="added">All nodes that are judged beside the design nodes, those of the earlier answer among them.</param>
+    /// <param name="cancellation">Ends the search early; the best plan met so far is then returned.</param>
+    public SearchAnswer RunAgain(SearchAnswer before, PlanObjective objective, IReadOnlyList<NodePlace> added, CancellationToken cancellation = default) =>
+        before.Shortlist?.WinnerOver(Tables, new MarginScore(Tables, added)) is { } winner
+            ? before with { Winner = winner }
+            : Run(objective, added, cancellation);
 
     /// <summary>
     /// The best plan of some families in some groups, shared out over the processors by group, family and second temperature; the best of
@@ -67,7 +80,7 @@ internal sealed class PlanSearch
         {
             Parallel.ForEach(
                 shares,
-                new ParallelOptions { CancellationToken = cancellation, MaxDegreeOfParallelism = threads },
+                new ParallelOptions { CancellationToken = cancellation, MaxDegreeOfParallelism = Threads },
                 () => new PlanRunner(Tables, Rms, heat),
                 (share, _, runner) => Take(runner, share.Group, share.Family, share.Second),
                 runner => Report(runner.Finish()));
@@ -97,6 +110,7 @@ internal sealed class PlanSearch
 
 /// <summary>What a search has found.</summary>
 /// <param name="Winner">The best plan.</param>
+/// <param name="Shortlist">The plans from which further nodes may choose another; nothing when a search was not run to its end.</param>
 /// <param name="Count">How many plans were decided and discarded; a plan that was looked at twice counts twice.</param>
 /// <param name="Proven">Whether no candidate plan is better.</param>
-internal sealed record SearchAnswer(Contender Winner, SearchCount Count, bool Proven);
+internal sealed record SearchAnswer(Contender Winner, Shortlist? Shortlist, SearchCount Count, bool Proven);

@@ -2,6 +2,7 @@ using BandSpec.Core.Bands;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using CsCheck;
 using Xunit;
 
 namespace BandSpec.Tests.Planning;
@@ -66,6 +67,28 @@ public sealed class PlanChoosingTests
         Assert.False(choice.Proven);
         Assert.True(choice.PlansDecided < choice.PlansConsidered);
         Assert.True(BandMap.Of(application, choice.Plan).Margin > 1);
+    }
+
+    [Fact]
+    public void Further_rounds_choose_from_the_shortlist_what_a_search_of_all_plans_would_choose()
+    {
+        int fromShortlist = 0;
+        RandomApplications.Small.Sample(
+            application =>
+            {
+                PlanObjective objective = application.Requirement.Compensation.Objective;
+                var search = new PlanSearch(application);
+                SearchAnswer first = search.Run(objective, []);
+                CompensationPlan plan = search.Tables.PlanOf(first.Winner.List, first.Winner.Zero, first.Winner.Span);
+                NodePlace[] added = [.. ContinuousMargin.AllOf(application, plan).Select(r => r.Worst)];
+                SearchAnswer again = search.RunAgain(first, objective, added), afresh = new PlanSearch(application).Run(objective, added);
+                if (first.Shortlist!.WinnerOver(search.Tables, new MarginScore(search.Tables, added)) is not null)
+                    Interlocked.Increment(ref fromShortlist);
+                return again.Winner.List.SequenceEqual(afresh.Winner.List)
+                    && (again.Winner.Zero, again.Winner.Span, again.Winner.Margin) == (afresh.Winner.Zero, afresh.Winner.Span, afresh.Winner.Margin);
+            },
+            iter: 60);
+        Assert.True(fromShortlist > 20, $"{fromShortlist} answers came from a shortlist");
     }
 
     private static IEnumerable<CompensationPlan> PlansOf(Application application)
