@@ -14,9 +14,10 @@ internal sealed class VerificationTest
     private readonly BandMap bands;
     private readonly BandFormulas formulas;
     private readonly Multipliers multipliers;
+    private readonly VerificationRules rules;
 
-    public VerificationTest(Application application, BandMap bands, BandFormulas formulas, Multipliers multipliers) =>
-        (this.application, this.bands, this.formulas, this.multipliers) = (application, bands, formulas, multipliers);
+    public VerificationTest(Application application, BandMap bands, BandFormulas formulas, Multipliers multipliers, VerificationRules rules) =>
+        (this.application, this.bands, this.formulas, this.multipliers, this.rules) = (application, bands, formulas, multipliers, rules);
 
     /// <summary>All points in the order of the test: coldest first, at each temperature rising, then falling.</summary>
     public IReadOnlyList<VerificationPoint> Points()
@@ -60,9 +61,9 @@ internal sealed class VerificationTest
     {
         Requirement requirement = application.Requirement;
         double tolerance = requirement.RegionsAt(temperature).Min(r => ToleranceAt(fraction, temperature, r));
-        double standard = StandardUncertainty(fraction), guardBand = requirement.Test.GuardBand * 2 * standard;
-        (decimal lower, decimal upper) = AcceptanceLimits.Of(requirement, fraction, tolerance - guardBand);
         (double mean, double sigma) = ProcessAt(fraction, temperature, direction);
+        double standard = StandardUncertainty(fraction), guardBand = new PointDecision(mean, sigma, standard, tolerance).GuardBandOf(rules);
+        (decimal lower, decimal upper) = AcceptanceLimits.Of(requirement, fraction, tolerance - guardBand);
         ConformityRisks risks = ConformityRisk.Of(
             mean, sigma, standard, Interval.Symmetric(tolerance), AcceptanceLimits.InPercent(requirement.Output, fraction, lower, upper));
         return new VerificationPoint

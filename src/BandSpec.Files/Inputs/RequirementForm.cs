@@ -35,7 +35,7 @@ internal static class RequirementForm
         "further-terms", ErrorForms.FurtherTerms, [], "Error sources outside the platform.");
     private static readonly Key<CompensationScope> Compensation = new(
         "compensation", DesignForms.Compensation, "Compensation plans to consider, and which of them is best.");
-    private static readonly Key<VerificationRules> Test = new("test", DesignForms.Test, "How the verification test decides.");
+    private static readonly Key<VerificationRules> Test = new("test", TestForm.Form, "How the verification test decides.");
     private static readonly Key<RoundingSteps> Rounding = new(
         "rounding", DesignForms.Rounding, "Steps to which printed and tested values are rounded.");
 
