@@ -47,7 +47,7 @@ internal sealed class VerificationTest
     private IEnumerable<Temperature> Temperatures()
     {
         OperatingTemperature range = application.Requirement.Temperature;
-        return (application.Requirement.Test.Temperatures ?? [range.Lower, range.Reference, range.Upper, WholeDegrees(bands.Worst.Temperature, range)])
+        return (rules.Temperatures ?? [range.Lower, range.Reference, range.Upper, WholeDegrees(bands.Worst.Temperature, range)])
             .Distinct().Order();
     }
 

@@ -1,0 +1,57 @@
+using BandSpec.Core.Numerics;
+using BandSpec.Core.Numerics.RareEvents;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.TestLimits;
+
+namespace BandSpec.Core.Deciding;
+
+/// <summary>
+/// What a unit is worth in the field: how probable it is that it leaves the allowed error anywhere in the operating map, at any pressure and temperature,
+/// new or at the end of life. The closed form's normal law is conditioned on the test readings.
+/// </summary>
+public sealed record FieldWorth
+{
+    /// <summary>For any unit made, tested or not.</summary>
+    public required EstimatedProbability AnyUnit { get; init; }
+
+    /// <summary>For a unit that the verification test accepted; 0 when nothing can be accepted.</summary>
+    public required EstimatedProbability AcceptedUnit { get; init; }
+
+    /// <summary>For a unit that reads exactly on an acceptance limit of one point, for each point its worse limit, in the order of the test.</summary>
+    public required IReadOnlyList<LimitWorth> AtLimits { get; init; }
+
+    /// <summary>The worst of them; <see langword="null"/> when nothing can be accepted.</summary>
+    public LimitWorth? Worst => AtLimits.MaxBy(l => l.Leaving.Value);
+
+    /// <summary>The worth under the limits of a set of verification points.</summary>
+    internal static FieldWorth Of(Application application, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed)
+    {
+        UnitEvents events = new(law, application);
+        HalfSpaces leaving = events.Leaving(allowed);
+        bool canAccept = points.All(p => p.Lower <= p.Upper);
+        EstimatedProbability accepted = new EstimatedProbability(1, 0).Plus(
+            canAccept ? Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2)) : new(1, 0), -1);
+        return new FieldWorth
+        {
+            AnyUnit = Integration.Of(leaving, Readings.None(law.Dimensions)),
+            AcceptedUnit = canAccept ? EstimatedProbability.Quotient(Integration.Of(leaving, events.Readings(points)), accepted) : new(0, 0),
+            AtLimits = canAccept ? [.. points.Select((p, v) => AtLimit(events, law, allowed, p, v))] : [],
+        };
+    }
+
+    private static LimitWorth AtLimit(UnitEvents events, UnitLaw law, IReadOnlyList<double> allowed, VerificationPoint point, int place)
+    {
+        Interval limits = events.AcceptedAt(point);
+        HalfSpaces at(double reading) => events.Leaving(allowed, error => law.Given(error, place, reading));
+        (double Reading, HalfSpaces Events) worse = new[] { limits.Lower, limits.Upper }.Select(reading => (reading, at(reading)))
+            .MaxBy(pair => Integration.SumOf(pair.Item2));
+        return new LimitWorth(
+            point.Id, worse.Reading, Integration.Of(worse.Events, Readings.None(law.Dimensions)));
+    }
+}
+
+/// <summary>A unit that reads exactly on an acceptance limit.</summary>
+/// <param name="Point">Id of the point.</param>
+/// <param name="Reading">The reading as an error, %FS: the limit, with its sign.</param>
+/// <param name="Leaving">How probable it is that it leaves the allowed error anywhere.</param>
+public sealed record LimitWorth(string Point, double Reading, EstimatedProbability Leaving);
