@@ -1,0 +1,138 @@
+using BandSpec.Core.Bands;
+using BandSpec.Core.Deciding;
+using BandSpec.Core.Quantities;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.Specifying;
+using BandSpec.Core.TestLimits;
+using BandSpec.Core.VirtualLots;
+using Xunit;
+
+namespace BandSpec.Tests.Deciding;
+
+/// <summary>Risks of whole units and what accepted ones are worth, against virtual lots, which share no formula with them.</summary>
+public sealed class DecisionComparisonTests
+{
+    private static readonly Lazy<Specification> Narrow = new(() => Drafted(0.3, Given.Station, null));
+
+    /// <summary>A plan held against a part of the allowed error, so that what is rare becomes as frequent as wanted; a continuous output.</summary>
+    private static Specification Drafted(double part, Station station, IReadOnlyList<Temperature>? temperatures) => SpecificationDraft.Draft(
+        Given.Application(
+            Given.Requirement with
+            {
+                AllowedError = [.. Given.Requirement.AllowedError.Select(r => r with { Limit = Given.P(r.Limit.Percent * part), LimitAtEnd = null })],
+                HeldTerms = [],
+                Output = Given.Requirement.Output with { Step = null, Resolution = null },
+                Compensation = Given.Requirement.Compensation with { FewestTemperatures = 3, MostTemperatures = 3, CandidateStep = Given.K(20) },
+                Test = new VerificationRules(1, temperatures),
+                Rounding = new RoundingSteps(Given.P(0.05), Given.P(0.0001)),
+            },
+            station: station),
+        extras: DraftExtras.Decisions);
+
+    /// <summary>The law of a unit has, place by place, the spreads and means of the band and of the verification points.</summary>
+    [Fact]
+    public void The_law_of_a_unit_has_the_band_s_means_and_spreads()
+    {
+        Specification s = Narrow.Value;
+        UnitLaw law = new(s.Application, s.Choice.Plan, [.. s.VerificationPoints.Select(TestPlace.Of)], s.Bands.Nodes);
+        foreach ((VerificationPoint p, int v) in s.VerificationPoints.Select((p, v) => (p, v)))
+        {
+            Assert.Equal(p.ProcessMean.Percent, law.Shown(v).Mean, 1e-9);
+            Assert.Equal(p.ProcessSigma.Percent, law.Shown(v).Sigma, 1e-7);
+            Assert.Equal(p.Uncertainty.Percent, 2 * Math.Sqrt(law.ReadingVariance(v)), 1e-9);
+        }
+
+        foreach ((BandNode node, int n) in s.Bands.Nodes.Select((node, n) => (node, n)))
+        {
+            Assert.Equal(node.SigmaLongRun.Percent, law.Used(n, 1, 1).Sigma, 1e-7);
+            // The band's mean magnitude is the worse of both sides and ages.
+            double worst = (from side in new[] { -1, 1 } from age in new[] { 0, 1 } select law.Used(n, side, age).Mean).Max();
+            Assert.Equal(node.Added.Percent, worst, 1e-9);
+        }
+    }
+
+    /// <summary>With one point the whole unit is that point, for which JCGM 106:2012 has a double integral.</summary>
+    [Fact]
+    public void With_one_point_the_risks_of_the_unit_are_those_of_the_point()
+    {
+        Station station = Given.Station with { TestPoints = new PressureLists([0.5], [0.5]), ReadingNoise = Given.P(0.05) };
+        Specification s = Drafted(0.35, station, [Given.C(25)]);
+        foreach (RuleOutcome rule in s.Decisions!.Rules)
+        {
+            VerificationPoint point = Assert.Single(rule.Points);
+            Same(point.ConsumerRisk, rule.Consumer);
+            Same(point.ProducerRisk, rule.Producer);
+        }
+    }
+
+    [Fact]
+    public void Risks_of_the_unit_lie_between_the_largest_point_s_and_their_sum()
+    {
+        foreach (RuleOutcome rule in Narrow.Value.Decisions!.Rules)
+        {
+            Assert.InRange(rule.Consumer.Value, 0, rule.Points.Sum(p => p.ConsumerRisk) * 1.03);
+            Assert.InRange(rule.Rejected.Value, rule.LargestProducer * 0.97, 1);
+            Assert.Equal(22 * rule.Rejected.Value, rule.RejectCostPerUnit.Amount, 1e-12);
+        }
+    }
+
+    [Fact]
+    public void Units_made_in_the_computer_are_rejected_and_leave_as_often()
+    {
+        Specification s = Narrow.Value;
+        LotReport report = LotReport.Of(s, LotRun.Make(LotSubject.Of(s), LotOrder.For(200_000, 16, 1), 2));
+        DecisionComparison decisions = s.Decisions!;
+        Counted(1 - report.Good.Value, Error(report.Good), decisions.Field.AnyUnit);
+        Counted(report.AcceptedLeaving.Value, Error(report.AcceptedLeaving), decisions.Field.AcceptedUnit);
+        Counted(1 - report.Steps[^3].Through.Value, Error(report.Steps[^3].Through), decisions.Chosen.Rejected);
+        LeavingProbability witness = LeavingProbability.Of(s, 1, 0.01, 2_000_000);
+        Assert.Equal(witness.AnyUnit.Value, decisions.Field.AnyUnit.Value, 0.04 * witness.AnyUnit.Value);
+    }
+
+    /// <summary>Guarding trades risk of the consumer for risk of the producer; the table is the place where that shows.</summary>
+    [Fact]
+    public void Every_rule_stands_in_the_table_and_the_guarded_reject_more()
+    {
+        IReadOnlyList<RuleOutcome> rules = Narrow.Value.Decisions!.Rules;
+        Assert.Equal([DecisionRule.Simple, DecisionRule.Guarded, DecisionRule.SpecificRisk, DecisionRule.GlobalRisk], rules.Select(r => r.Rules.Rule));
+        Assert.Equal(DecisionRule.Guarded, Narrow.Value.Decisions!.Chosen.Rules.Rule);
+        Assert.True(rules[1].Consumer.Value < rules[0].Consumer.Value && rules[1].Rejected.Value > rules[0].Rejected.Value);
+    }
+
+    /// <summary>A unit on its limit is worse than an accepted one taken at random; figures of sampled units near the limit agree with the conditioned law.</summary>
+    [Fact]
+    public void A_unit_on_its_limit_is_worth_what_sampled_units_near_it_are()
+    {
+        Specification s = Narrow.Value;
+        UnitLaw law = new(s.Application, s.Choice.Plan, [.. s.VerificationPoints.Select(TestPlace.Of)], s.Bands.Nodes);
+        Random random = new(5);
+        (int place, int node) = (s.VerificationPoints.Count / 2, s.Bands.Nodes.ToList().IndexOf(s.Bands.Worst));
+        (LinearError shown, LinearError used) = (law.Shown(place), law.Used(node, 1, 1));
+        double reading = shown.Mean + (1.2 * shown.Sigma), width = 0.02 * shown.Sigma, u = Math.Sqrt(law.ReadingVariance(place));
+        LinearError expected = law.Given(used, place, reading);
+        List<double> found = [];
+        for (int unit = 0; unit < 400_000; unit++)
+        {
+            double[] x = [.. Enumerable.Range(0, law.Dimensions).Select(_ => Numerics.Draws.Normal(random))];
+            if (Math.Abs(shown.Mean + Dot(shown.Weights, x) + (u * Numerics.Draws.Normal(random)) - reading) < width)
+                found.Add(used.Mean + Dot(used.Weights, x) + (used.Own * Numerics.Draws.Normal(random)));
+        }
+
+        double mean = found.Average(), sigma = Math.Sqrt(found.Sum(f => (f - mean) * (f - mean)) / (found.Count - 1));
+        Assert.Equal(expected.Mean, mean, 5 * sigma / Math.Sqrt(found.Count));
+        Assert.Equal(expected.Sigma, sigma, 5 * sigma / Math.Sqrt(2 * found.Count));
+        Assert.True(s.Decisions!.Field.Worst!.Leaving.Value > s.Decisions.Field.AcceptedUnit.Value);
+    }
+
+    private static double Dot(double[] a, double[] b) => a.Zip(b, (x, y) => x * y).Sum();
+
+    private static double Error(Rate rate) => Math.Sqrt(rate.DesignEffect * rate.Value * (1 - rate.Value) / rate.Of);
+
+    private static void Same(double exact, EstimatedProbability found) =>
+        Assert.True(Math.Abs(exact - found.Value) <= (4.5 * found.StandardError) + (1e-5 * exact) + 1e-15, $"{exact:G5} exact, {found.Value:G5} ± {found.StandardError:G2}");
+
+    /// <summary>Within 4.5 standard errors and 4 %, for what the closed form takes for normal and a virtual lot does not (METHOD, section 13).</summary>
+    private static void Counted(double counted, double error, EstimatedProbability found) => Assert.True(
+        Math.Abs(counted - found.Value) <= (4.5 * Math.Sqrt((error * error) + (found.StandardError * found.StandardError))) + (0.04 * counted),
+        $"{counted:G4} ± {error:G2} counted, {found.Value:G4} ± {found.StandardError:G2} integrated");
+}
