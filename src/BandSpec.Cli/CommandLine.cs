@@ -22,15 +22,19 @@ internal static class CommandLine
             ParseResult parsed = Build(terminal).Parse(arguments);
             if (parsed.Errors.Count > 0 && parsed.Action is ParseErrorAction)
                 return RefuseArguments(parsed, terminal);
-            return parsed.Invoke(new InvocationConfiguration
+            // Signals are our own matter: a command that was stopped still has to write what it found, however long that takes.
+            InvocationConfiguration configuration = new()
             {
-                Output = terminal.Out, Error = terminal.Error, EnableDefaultExceptionHandler = false,
-            });
+                Output = terminal.Out, Error = terminal.Error, EnableDefaultExceptionHandler = false, ProcessTerminationTimeout = null,
+            };
+            return parsed.Action is AsynchronousCommandLineAction
+                ? parsed.InvokeAsync(configuration, terminal.Interruption()).GetAwaiter().GetResult()
+                : parsed.Invoke(configuration);
         }
         catch (OperationCanceledException)
         {
-            terminal.Error.WriteLine("bandspec: stopped");
-            return (int)ExitCode.Fault;
+            terminal.Error.WriteLine("bandspec: stopped; nothing was written");
+            return (int)ExitCode.AnswerIsNo;
         }
         catch (TemplateException template)
         {
@@ -56,6 +60,7 @@ internal static class CommandLine
             + "which compensation plan keeps it, how the error is shared out, and the limits to test against.");
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
+        root.Add(TradeoffCommand.Create(terminal));
         root.Add(CompareCommand.Create(terminal));
         root.Add(ReleaseCommand.Create(terminal));
         root.Add(VerifyCommand.Create(terminal));

@@ -6,7 +6,7 @@ internal enum ExitCode
     /// <summary>Done.</summary>
     Done = 0,
 
-    /// <summary>Done, and the answer is no: no compensation plan fits.</summary>
+    /// <summary>Done, and the answer is no: no compensation plan fits; or stopped by the user before there was a proof.</summary>
     AnswerIsNo = 1,
 
     /// <summary>Findings in the input, or a command line that makes no sense.</summary>

@@ -24,6 +24,9 @@ internal sealed record Terminal
     /// <summary>The clock.</summary>
     public required TimeProvider Clock { get; init; }
 
+    /// <summary>Called by a command that can be stopped half-way; the token tells it when.</summary>
+    public Func<CancellationToken> Interruption { get; init; } = static () => CancellationToken.None;
+
     /// <summary>The terminal of this process; colour follows NO_COLOR (any text in it means none), TERM=dumb and redirection.</summary>
     public static Terminal OfProcess()
     {
@@ -37,6 +40,7 @@ internal sealed record Terminal
             IsWatched = mayColour && !Console.IsErrorRedirected,
             Folder = Directory.GetCurrentDirectory(),
             Clock = TimeProvider.System,
+            Interruption = Cli.Interruption.Listen,
         };
     }
 

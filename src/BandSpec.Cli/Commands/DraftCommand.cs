@@ -60,6 +60,8 @@ internal static class DraftCommand
             terminal.Out.Write(DraftJson.Of(drafts));
         else
             WriteScreen(drafts, quiet, terminal);
+        foreach (Draft stopped in drafts.Where(draft => draft is { State: DraftState.Drafted, Verdict.Proven: false }))
+            terminal.Error.WriteLine($"bandspec: {ProofWords.Stopped(stopped.Specification!)}");
         foreach (Draft failed in drafts.Where(draft => draft.State == DraftState.Failed))
             terminal.Error.WriteLine($"bandspec: {failed.Note}");
         reports.Write(
@@ -80,7 +82,7 @@ internal static class DraftCommand
             terminal.Out.Write(DraftScreen.Of(specification, package, terminal.Ink));
         else if (drafts[0] is { State: DraftState.UpToDate, Package: { } kept })
             terminal.Out.WriteLine($"{terminal.Ink.Blue(kept.Folder)} is up to date");
-        else if (drafts[0] is { State: DraftState.LeftOut, Note: { } note })
+        else if (drafts[0] is { State: DraftState.LeftOut or DraftState.Stopped, Note: { } note })
             terminal.Out.WriteLine($"{drafts[0].File}: {note}");
     }
 }

@@ -16,6 +16,9 @@ internal enum DraftState
     /// <summary>It was not asked for: not a requirement, or not changed.</summary>
     LeftOut,
 
+    /// <summary>The user stopped the run before it was begun.</summary>
+    Stopped,
+
     /// <summary>There are findings.</summary>
     Refused,
 
@@ -53,14 +56,16 @@ internal sealed record Draft(string File, DraftState State, InputSet? Inputs)
         DraftState.Failed => ExitCode.Fault,
         DraftState.Refused => ExitCode.Findings,
         DraftState.LeftOut => ExitCode.Done,
-        _ => Verdict is { Feasible: true } ? ExitCode.Done : ExitCode.AnswerIsNo,
+        DraftState.Stopped => ExitCode.AnswerIsNo,
+        _ => Verdict is { Feasible: true, Proven: true } ? ExitCode.Done : ExitCode.AnswerIsNo,
     };
 }
 
 /// <summary>The answer of a package in short.</summary>
 /// <param name="Feasible">Whether a plan fits.</param>
 /// <param name="Margin">The margin.</param>
-internal sealed record Verdict(bool Feasible, double Margin);
+/// <param name="Proven">Whether the best plan is proven; not when the search was stopped.</param>
+internal sealed record Verdict(bool Feasible, double Margin, bool Proven);
 
 /// <summary>A package on the disk.</summary>
 /// <param name="Folder">Its folder as the user would name it.</param>

@@ -16,10 +16,12 @@ internal sealed class DraftBatch(Terminal terminal, DraftRun run, int workers, C
 {
     private readonly record struct Prepared(NamedFile File, InputSet? Inputs, ReleaseRecord? Released, Draft? Ended);
 
-    /// <summary>What came of each file, in the order of the files.</summary>
+    /// <summary>
+    /// What came of each file, in the order of the files. Stopped, those at work finish with their best plans so far and no other is begun.
+    /// </summary>
     public IReadOnlyList<Draft> Run(IReadOnlyList<NamedFile> files, CancellationToken cancellation)
     {
-        ParallelOptions options = new() { MaxDegreeOfParallelism = workers, CancellationToken = cancellation };
+        ParallelOptions options = new() { MaxDegreeOfParallelism = workers };
         var prepared = new Prepared[files.Count];
         Parallel.For(0, files.Count, options, i => prepared[i] = Prepare(files[i]));
         RefuseSharedFolders(prepared);
@@ -68,6 +70,8 @@ internal sealed class DraftBatch(Terminal terminal, DraftRun run, int workers, C
     {
         if (one.Ended is { } ended)
             return ended;
+        if (cancellation.IsCancellationRequested)
+            return new Draft(one.File.Name, DraftState.Stopped, one.Inputs) { Note = "stopped before it was begun" };
         return Guarded(one.File, () => run.Run(one.File.Name, one.Inputs!, one.Released, isOnly, cancellation), failed => failed);
     }
 

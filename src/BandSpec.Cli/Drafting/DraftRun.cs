@@ -24,8 +24,12 @@ internal sealed record DraftFolders(string Out, string? Root, string? Templates)
 /// <param name="terminal">The folder that paths are counted from, and the clock.</param>
 /// <param name="folders">Where inputs and templates are, and where packages go.</param>
 /// <param name="look">Paper and language of the documents.</param>
-internal sealed class DraftRun(Terminal terminal, DraftFolders folders, DocumentOptions look)
+/// <param name="isDiagnosed">Whether a diagnosis is asked for even when a plan fits.</param>
+internal sealed class DraftRun(Terminal terminal, DraftFolders folders, DocumentOptions look, bool isDiagnosed)
 {
+    /// <summary>What is worked out beside a specification.</summary>
+    public DraftExtras Extras => isDiagnosed ? DraftExtras.All : DraftExtras.Usual;
+
     /// <summary>Reads a requirement and what was released of it.</summary>
     public (InputSet Inputs, ReleaseRecord? Released) Read(string file)
     {
@@ -53,8 +57,8 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
                 return draft with { Verdict = verdict, Package = new WrittenPackage(ShownFolder(application), stored.Names) };
             Specification specification = isWatched
                 ? SearchBar.Over(
-                    terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation))
-                : SpecificationDraft.Draft(application, null, cancellation: cancellation);
+                    terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, Extras, cancellation))
+                : SpecificationDraft.Draft(application, null, Extras, cancellation);
             IReadOnlyList<PackageFile> files = PackageContents.Of(specification, source);
             folder.Replace(files, terminal.Clock);
             return Written(draft, specification, files);
@@ -69,7 +73,7 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
     public PackageSource SourceOf(string file, InputSet inputs, ReleaseRecord? released)
     {
         HeldTemplates? templates = OwnTemplates(file) is { } own ? HeldTemplates.Of(own, look.Language) : null;
-        return PackageSource.Of(inputs.Application!.Requirement.Identity, inputs.Sources, templates, look, released);
+        return PackageSource.Of(inputs.Application!.Requirement.Identity, inputs.Sources, templates, look, released, isDiagnosed);
     }
 
     /// <summary>The folder of templates that a requirement's documents are drawn with; null for none.</summary>
@@ -84,7 +88,7 @@ internal sealed class DraftRun(Terminal terminal, DraftFolders folders, Document
     {
         State = DraftState.Drafted,
         Specification = specification,
-        Verdict = new Verdict(specification.Feasible, specification.Bands.Margin),
+        Verdict = new Verdict(specification.Feasible, specification.Bands.Margin, specification.IsComplete),
         Package = new WrittenPackage(ShownFolder(specification.Application), [.. files.Select(file => file.Name)]),
     };
 

@@ -12,15 +12,16 @@ namespace BandSpec.Cli.Drafting;
 /// <param name="Inputs">The files it is made from: requirement, platform, station, then the user's templates.</param>
 /// <param name="Look">Paper, language, templates, and who released it.</param>
 /// <param name="Released">The release record up to this revision; null for a draft.</param>
+/// <param name="IsDiagnosed">Whether a diagnosis was asked for.</param>
 internal sealed record PackageSource(
-    SpecificationIdentity Identity, IReadOnlyList<ManifestInput> Inputs, DocumentOptions Look, ReleaseRecord? Released)
+    SpecificationIdentity Identity, IReadOnlyList<ManifestInput> Inputs, DocumentOptions Look, ReleaseRecord? Released, bool IsDiagnosed)
 {
     /// <summary>Names that a PDF gives to what it carries besides inputs.</summary>
     private static readonly string[] Taken =
         ["result.json", PackageNames.Limits, "limits.csv", CarriedInputs.ProvenanceName, ReleaseRecord.FileName];
 
     /// <summary>How the package is made, as its manifest says it.</summary>
-    public PackageMaking Making => new(Look.Program, Look.Paper.ToString(), Look.Language, Look.Release?.Digest);
+    public PackageMaking Making => new(Look.Program, Look.Paper.ToString(), Look.Language, Look.Release?.Digest, IsDiagnosed);
 
     /// <summary>The source of an application's package.</summary>
     /// <param name="identity">The specification.</param>
@@ -28,13 +29,15 @@ internal sealed record PackageSource(
     /// <param name="templates">The user's templates, if there are any.</param>
     /// <param name="look">Paper and language.</param>
     /// <param name="released">The release record up to this revision; null for a draft.</param>
+    /// <param name="isDiagnosed">Whether a diagnosis was asked for.</param>
     public static PackageSource Of(
-        SpecificationIdentity identity, IReadOnlyList<InputSource> inputs, HeldTemplates? templates, DocumentOptions look, ReleaseRecord? released)
+        SpecificationIdentity identity, IReadOnlyList<InputSource> inputs, HeldTemplates? templates, DocumentOptions look, ReleaseRecord? released,
+        bool isDiagnosed)
     {
         ChainedRelease? entry = released?.Entries[^1];
         ReleaseMark? mark = entry is null ? null : new ReleaseMark(entry.Release.By, entry.Release.At, entry.Digest);
         return new PackageSource(
-            identity, [.. Named(inputs), .. templates?.Inputs ?? []], look with { Templates = templates, Release = mark }, released);
+            identity, [.. Named(inputs), .. templates?.Inputs ?? []], look with { Templates = templates, Release = mark }, released, isDiagnosed);
     }
 
     /// <summary>Inputs by their file names; where two files would share one, each input gets what it is before its name.</summary>

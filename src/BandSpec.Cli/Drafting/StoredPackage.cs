@@ -44,8 +44,12 @@ internal sealed class StoredPackage
         {
             using JsonDocument result = JsonDocument.Parse(File.ReadAllBytes(Path.Combine(folder, "result.json")));
             JsonElement margin = result.RootElement.GetProperty("margin");
-            return !result.RootElement.GetProperty("plan").GetProperty("proven").GetBoolean() ? null : new Verdict(
-                result.RootElement.GetProperty("feasible").GetBoolean(), margin.ValueKind == JsonValueKind.Null ? double.PositiveInfinity : margin.GetDouble());
+            // A plan that the requirement pins is not proven best itself: whether the search came to its end stands with what it found instead.
+            JsonElement searched = result.RootElement.TryGetProperty("optimum", out JsonElement optimum) ? optimum : result.RootElement.GetProperty("plan");
+            bool isCut = result.RootElement.TryGetProperty("diagnosis-complete", out JsonElement complete) && !complete.GetBoolean();
+            return isCut || !searched.GetProperty("proven").GetBoolean() ? null : new Verdict(
+                result.RootElement.GetProperty("feasible").GetBoolean(), margin.ValueKind == JsonValueKind.Null ? double.PositiveInfinity : margin.GetDouble(),
+                Proven: true);
         }
         catch (Exception unreadable) when (unreadable is IOException or JsonException or InvalidOperationException or KeyNotFoundException)
         {

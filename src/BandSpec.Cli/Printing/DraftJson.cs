@@ -31,6 +31,7 @@ internal static class DraftJson
             json.WriteBoolean("released", draft.Release is not null);
             json.WriteBoolean("feasible", verdict.Feasible);
             json.Figure("margin", verdict.Margin);
+            json.WriteBoolean("proven", verdict.Proven);
             json.WriteString("folder", package.Folder);
             json.WriteStartArray("package");
             foreach (string file in package.Files)

@@ -26,6 +26,7 @@ internal static class DraftScreen
         AppendVerdict(screen, specification, ink);
         AppendPlan(screen, specification, ink);
         AppendRegions(screen, specification, ink);
+        screen.Append(DiagnosisScreen.Of(specification, ink));
         AppendProfile(screen, specification.Profile, ink);
         screen.Append(Plain, $"{ink.Bold("Package")}   {ink.Blue(package.Folder)}\n");
         foreach (string line in Wrapped(package.Files))
@@ -39,8 +40,8 @@ internal static class DraftScreen
         Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
         string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
         screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red("NOT FEASIBLE"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
-        string proof = specification.Choice.Proven ? "proven over" : "best found so far among";
-        screen.Append(Plain, $"{proof} {specification.Choice.PlansConsidered:N0} plans; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
+        string proof = specification.Optimum.Proven ? ProofWords.Of(specification) : ink.Yellow(ProofWords.Of(specification));
+        screen.Append(Plain, $"{proof}; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
         if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
         {
             string lots = sample.Lots == 1 ? "1 lot" : $"{sample.Lots} lots";
@@ -56,10 +57,25 @@ internal static class DraftScreen
     private static void AppendPlan(StringBuilder screen, Specification specification, Ink ink)
     {
         (CompensationPlan plan, ChamberRun run) = (specification.Choice.Plan, specification.Choice.Run);
-        string temperatures = string.Join(", ", plan.Temperatures.Select(temperature => temperature.Celsius.ToString(Plain)));
         string currency = specification.Application.Station.Chamber.HourlyRate.Currency;
-        screen.Append(Plain, $"{ink.Bold("Plan")}      {temperatures} °C; degrees {plan.ZeroDegree} for zero, {plan.SpanDegree} for span; {plan.Points.Count} readings\n");
-        screen.Append(Plain, $"          {Math.Floor(run.Length.Hours):0} h {run.Length.Minutes % 60:00} min in the chamber, {run.CostPerUnit:0.00} {currency} a unit\n\n");
+        screen.Append(Plain, $"{ink.Bold("Plan")}      {PlanWords.Temperatures(plan)} °C; degrees {plan.ZeroDegree} for zero, {plan.SpanDegree} for span; {plan.Points.Count} readings\n");
+        screen.Append(Plain, $"          {Math.Floor(run.Length.Hours):0} h {run.Length.Minutes % 60:00} min in the chamber, {run.CostPerUnit:0.00} {currency} a unit\n");
+        if (specification.Application.Requirement.Compensation.Pinned is not null)
+            screen.Append(Plain, $"          {Optimum(specification, currency)}\n");
+        screen.Append('\n');
+    }
+
+    /// <summary>What would have been chosen instead of a pinned plan.</summary>
+    private static string Optimum(Specification specification, string currency)
+    {
+        PlanChoice optimum = specification.Optimum;
+        string proof = optimum.Proven ? "the proven optimum" : "the best plan so far";
+        if (optimum.Plan.IsLike(specification.Choice.Plan))
+            return $"pinned, and {proof} as well";
+        double more = specification.Choice.Run.CostPerUnit - optimum.Run.CostPerUnit;
+        string than = Math.Abs(more) < 0.005 ? "at the same cost" : string.Create(Plain, $"for {Math.Abs(more):0.00} {currency} a unit {(more > 0 ? "less" : "more")}");
+        return $"pinned; {proof} would be {PlanWords.Temperatures(optimum.Plan)} °C; degrees {optimum.Plan.ZeroDegree}, {optimum.Plan.SpanDegree}; "
+            + $"margin {Margin(optimum.ContinuousMargin)} {than}";
     }
 
     private static void AppendRegions(StringBuilder screen, Specification specification, Ink ink)

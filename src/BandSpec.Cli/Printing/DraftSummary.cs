@@ -30,7 +30,7 @@ internal static class DraftSummary
     {
         { Verdict: { } verdict, Package: { } package } =>
             $"{(verdict.Feasible ? ink.Green("FEASIBLE    ") : ink.Red("NOT FEASIBLE"))}  margin {DraftScreen.Margin(verdict.Margin)}  {ink.Blue(package.Folder)}"
-            + (draft.State == DraftState.UpToDate ? "  up to date" : "") + (draft.Release is null ? "" : $"  {ink.Green("RELEASED")}"),
+            + (draft.State == DraftState.UpToDate ? "  up to date" : "") + (verdict.Proven ? "" : $"  {ink.Yellow("not proven")}") + (draft.Release is null ? "" : $"  {ink.Green("RELEASED")}"),
         { State: DraftState.Refused } => ink.Red($"{draft.Findings.Count} finding{(draft.Findings.Count == 1 ? "" : "s")}"),
         { State: DraftState.Failed } => ink.Red("failed"),
         _ => ink.Faint(draft.Note ?? ""),

@@ -1,41 +1,62 @@
 using System.Globalization;
 using BandSpec.Core.Planning;
-using Spectre.Console;
 
 namespace BandSpec.Cli.Printing;
 
 /// <summary>
-/// A bar on standard error while plans are searched, taken away when the search ends; nothing at all when nobody watches. It is told from several
-/// threads at once.
+/// While plans are searched: how many of how many are decided or discarded, and the time that the rest would take at the pace so far. A search
+/// may end sooner, with a proof that it needs no more; and it begins anew when its choice falls short between the nodes.
 /// </summary>
-internal sealed class SearchBar : IProgress<SearchProgress>
+internal sealed class SearchBar : IProgress<SearchProgress>, IDisposable
 {
-    private readonly ProgressTask task;
+    /// <summary>A search that is over by then shows nothing.</summary>
+    private static readonly TimeSpan Patience = TimeSpan.FromMilliseconds(500);
 
-    private SearchBar(ProgressTask task) => this.task = task;
+    private readonly Terminal terminal;
+    private readonly string name;
+    private readonly StatusLine line;
+    private readonly long begun;
+    private SearchProgress last;
+    private long lapBegun;
+
+    private SearchBar(Terminal terminal, string name)
+    {
+        (this.terminal, this.name) = (terminal, name);
+        line = new StatusLine(terminal, TimeSpan.FromMilliseconds(100));
+        begun = lapBegun = terminal.Clock.GetTimestamp();
+    }
 
     /// <summary>Runs a search under a bar.</summary>
     /// <param name="terminal">Where the bar is shown.</param>
     /// <param name="name">What is searched for.</param>
     /// <param name="search">The search, told whom to keep informed.</param>
-    public static T Over<T>(Terminal terminal, string name, Func<IProgress<SearchProgress>?, T> search)
+    public static T Over<T>(Terminal terminal, string name, Func<IProgress<SearchProgress>, T> search)
     {
-        if (!terminal.IsWatched)
-            return search(null);
-        IAnsiConsole console = AnsiConsole.Create(new AnsiConsoleSettings
-        {
-            Ansi = AnsiSupport.Yes, Interactive = InteractionSupport.Yes, Out = new AnsiConsoleOutput(terminal.Error),
-        });
-        return console.Progress().AutoClear(true)
-            .Columns(new TaskDescriptionColumn(), new ProgressBarColumn(), new PercentageColumn())
-            .Start(context => search(new SearchBar(context.AddTask(Markup.Escape(name)))));
+        using SearchBar bar = new(terminal, name);
+        return search(bar);
     }
 
     /// <inheritdoc/>
     public void Report(SearchProgress value)
     {
-        task.MaxValue = Math.Max(1, value.Total);
-        task.Value = value.Done;
-        task.Description = string.Create(CultureInfo.InvariantCulture, $"{value.Done:N0} of {value.Total:N0} plans");
+        if (terminal.Clock.GetElapsedTime(begun) >= Patience)
+            line.Show(() => LineOf(value));
+    }
+
+    /// <inheritdoc/>
+    public void Dispose() => line.Dispose();
+
+    /// <summary>Called one at a time.</summary>
+    private string LineOf(SearchProgress value)
+    {
+        if (value.Done < last.Done || value.Total != last.Total)
+            lapBegun = last.Total == 0 ? begun : terminal.Clock.GetTimestamp();
+        last = value;
+        double part = Math.Clamp((double)value.Done / Math.Max(1, value.Total), 0, 1);
+        if (value.OfChanges)
+            return $"{name} {StatusLine.Bar(part)} no plan fits; {value.Done} of {value.Total} kinds of change looked at that would make one fit";
+        return string.Create(
+            CultureInfo.InvariantCulture,
+            $"{name} {StatusLine.Bar(part)} {value.Done:N0} of {value.Total:N0} plans, {StatusLine.Left(terminal.Clock.GetElapsedTime(lapBegun), part)} left at this pace; Ctrl-C keeps the best so far");
     }
 }

@@ -51,7 +51,7 @@ internal sealed class ReleaseRun(Terminal terminal, DraftRun run, string by)
     private Specification Solve(Application application, CancellationToken cancellation)
     {
         Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation));
+            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, run.Extras, cancellation));
         // A search that was ended early has an answer too, but not one to be frozen.
         cancellation.ThrowIfCancellationRequested();
         return specification;

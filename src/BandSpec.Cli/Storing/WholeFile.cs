@@ -14,6 +14,9 @@ internal static class WholeFile
         {
             using (FileStream stream = new(fresh, FileMode.Create))
             {
+                // Who may read the file is not changed by writing it anew.
+                if (!OperatingSystem.IsWindows() && File.Exists(path))
+                    File.SetUnixFileMode(stream.SafeFileHandle, File.GetUnixFileMode(path));
                 stream.Write(bytes.Span);
                 // On the disk before it gets its name, so that not even a loss of power leaves an empty file under it.
                 stream.Flush(flushToDisk: true);
@@ -26,6 +29,22 @@ internal static class WholeFile
             TryDelete(fresh);
             throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
         }
+    }
+
+    /// <summary>The same, in a folder that is made if it is not there.</summary>
+    /// <exception cref="RefusalException">The disk or the rights keep it from being written.</exception>
+    public static void WriteInFolder(string path, ReadOnlyMemory<byte> bytes)
+    {
+        try
+        {
+            Directory.CreateDirectory(Path.GetDirectoryName(path)!);
+        }
+        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        {
+            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
+        }
+
+        Write(path, bytes);
     }
 
     /// <summary>Deletes a file that may be gone, or not to be deleted: then it does no harm where it is.</summary>

@@ -60,9 +60,10 @@ internal sealed class CarriedPackage
         return null;
     }
 
-    private static Specification Solve(Application application, CancellationToken cancellation)
+    private Specification Solve(Application application, CancellationToken cancellation)
     {
-        Specification specification = SpecificationDraft.Draft(application, null, cancellation: cancellation);
+        DraftExtras extras = Provenance.Making.Diagnosed ? DraftExtras.All : DraftExtras.Usual;
+        Specification specification = SpecificationDraft.Draft(application, null, extras, cancellation);
         cancellation.ThrowIfCancellationRequested();
         return specification;
     }
@@ -77,7 +78,7 @@ internal sealed class CarriedPackage
             IReadOnlyDictionary<string, ReadOnlyMemory<byte>> carried = inputs.Templates();
             HeldTemplates? templates = carried.Count == 0 ? null : HeldTemplates.Of(name, carried);
             return PackageContents.Of(
-                specification, PackageSource.Of(specification.Application.Requirement.Identity, set.Sources, templates, look, released));
+                specification, PackageSource.Of(specification.Application.Requirement.Identity, set.Sources, templates, look, released, Provenance.Making.Diagnosed));
         }
         catch (Exception refused) when (refused is TemplateException or MissingLetterException)
         {

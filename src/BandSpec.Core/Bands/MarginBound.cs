@@ -12,6 +12,9 @@ namespace BandSpec.Core.Bands;
 /// <param name="Worst">The node where the bound is lowest, which need not be the node of least margin.</param>
 public sealed record MarginBound(double Confidence, double Lower, BandNode Worst)
 {
+    /// <summary>The confidence of the bound that is shown beside a margin when none is asked for.</summary>
+    public const double UsualConfidence = 0.95;
+
     /// <summary>
     /// How many nodes are worked out in full: those that a first guess by normal quantiles ranks lowest. The guess errs by a few percent, but
     /// alike at nodes that are close to each other.

@@ -9,7 +9,7 @@ namespace BandSpec.Core.Bands;
 /// <param name="LongRunVarianceError">Standard error of the estimate of <c>σ_t²</c>, (%FS)².</param>
 internal readonly record struct NodeAccuracy(double MeanVariance, double SampleVarianceError, double LongRunVarianceError)
 {
-    /// <summary>Readings or degrees of freedom beyond this number move a bound by less than a thousandth, and only cost time.</summary>
+    /// <summary>What readings or degrees of freedom beyond this number add is told by normal quantiles; the exact law would only cost time.</summary>
     private const double Plenty = 1e4;
 
     /// <summary>The lower bound on a node's margin at a one-sided confidence.</summary>
@@ -43,7 +43,9 @@ internal readonly record struct NodeAccuracy(double MeanVariance, double SampleV
         if (!double.IsFinite(index))
             return index;
         (double readings, double freedom) = Counts(sigma, meanVariance, varianceError);
-        return CapabilityLaw.OneSidedLimit(index, readings, freedom, confidence);
+        (double few, double fewFree) = (Math.Min(Plenty, readings), Math.Min(Plenty, freedom));
+        double quantile = NormalDistribution.Quantile(confidence);
+        return CapabilityLaw.OneSidedLimit(index, few, fewFree, confidence) + HalfWidth(index, few, fewFree, quantile) - HalfWidth(index, readings, freedom, quantile);
     }
 
     private (double Sample, double LongRun) RoughMargins(BandNode node, CapabilityTarget target, double quantile) => (
@@ -55,14 +57,15 @@ internal readonly record struct NodeAccuracy(double MeanVariance, double SampleV
         if (!double.IsFinite(index))
             return index;
         (double readings, double freedom) = Counts(sigma, MeanVariance, varianceError);
-        return index - (quantile * Math.Sqrt((1 / (9 * readings)) + (index * index / (2 * freedom))));
+        return index - HalfWidth(index, readings, freedom, quantile);
     }
+
+    private static double HalfWidth(double index, double readings, double freedom, double quantile) =>
+        quantile * Math.Sqrt((1 / (9 * readings)) + (index * index / (2 * freedom)));
 
     private static (double Readings, double Freedom) Counts(double sigma, double meanVariance, double varianceError)
     {
         double variance = sigma * sigma;
-        return (
-            Math.Min(Plenty, variance / meanVariance),
-            Math.Clamp(2 * variance * variance / (varianceError * varianceError), 1, Plenty));
+        return (variance / meanVariance, Math.Max(1, 2 * variance * variance / (varianceError * varianceError)));
     }
 }

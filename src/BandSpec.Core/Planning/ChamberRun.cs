@@ -49,7 +49,7 @@ public sealed record ChamberRun(IReadOnlyList<ChamberStep> Steps, Duration Lengt
 
         Add(steps, ChamberAction.Ramp, RampMinutes(now, chamber.Ambient, chamber), now, chamber.Ambient);
         Duration length = steps.Count > 0 ? steps[^1].End : default;
-        return new ChamberRun(steps, length, length.Hours * chamber.HourlyRate.Amount / chamber.Batch);
+        return new ChamberRun(steps, length, Cost(length, chamber));
     }
 
     /// <summary>
@@ -58,6 +58,9 @@ public sealed record ChamberRun(IReadOnlyList<ChamberStep> Steps, Duration Lengt
     internal static double Minutes(Temperature coldest, Temperature hottest, int soaks, int points, Chamber chamber) =>
         RampMinutes(chamber.Ambient, coldest, chamber) + RampMinutes(coldest, hottest, chamber) + RampMinutes(hottest, chamber.Ambient, chamber)
         + (soaks * chamber.Soak.Minutes) + (points * chamber.PressurePoint.Minutes);
+
+    /// <summary>Cost of a run of some length for one unit of the batch.</summary>
+    internal static double Cost(Duration length, Chamber chamber) => length.Hours * chamber.HourlyRate.Amount / chamber.Batch;
 
     private static double RampMinutes(Temperature from, Temperature to, Chamber chamber)
     {

@@ -4,30 +4,52 @@ using BandSpec.Core.Requirements;
 namespace BandSpec.Core.Planning;
 
 /// <summary>
-/// Finds the smallest change of one figure that makes a requirement feasible. Plans met on the way tell cheaply how far they need the change;
-/// that no candidate plan does with one step less is proven by a search of all of them.
+/// Finds the smallest change of one figure that makes a requirement feasible. What no correction can beat says cheaply where there is no hope;
+/// plans met on the way tell how far they need the change; that no candidate plan does with one step less is proven by a search of all of them.
 /// </summary>
 internal sealed class ChangeSearch
 {
     private readonly PossibleChange change;
     private readonly List<CompensationPlan> known;
 
-    private ChangeSearch(PossibleChange change, IEnumerable<CompensationPlan> known) => (this.change, this.known) = (change, [.. known]);
+    private readonly CancellationToken cancellation;
 
-    /// <summary>The smallest change of every kind.</summary>
-    public static IReadOnlyList<SingleChange> AllOf(Application application, BandMap bands, PlanChoice optimum) =>
-    [
-        .. new PossibleChanges(application).All(bands.Worst.Temperature).Select(c => new ChangeSearch(c, [optimum.Plan]).Find()),
-    ];
+    private ChangeSearch(PossibleChange change, CompensationPlan known, CancellationToken cancellation) =>
+        (this.change, this.known, this.cancellation) = (change, [known], cancellation);
 
-    private SingleChange Find()
+    /// <summary>The smallest change of every kind, side by side; only those that were found when the search is ended early.</summary>
+    public static (IReadOnlyList<SingleChange> Found, bool IsComplete) AllOf(
+        Application application, BandMap bands, PlanChoice optimum, IProgress<SearchProgress>? progress, CancellationToken cancellation)
     {
-        int fails = 0, suffices = LeastForKnown(change.Steps);
-        if (suffices > change.Steps && (change.Steps == 0 || !IsFeasibleAfter(change.Steps)))
+        PossibleChange[] possible = [.. new PossibleChanges(application).All(bands.Worst.Temperature)];
+        var found = new SingleChange?[possible.Length];
+        int done = 0;
+        Parallel.For(0, possible.Length, i =>
+        {
+            found[i] = new ChangeSearch(possible[i], optimum.Plan, cancellation).Find();
+            progress?.Report(new SearchProgress(Interlocked.Increment(ref done), possible.Length, OfChanges: true));
+        });
+        return ([.. found.OfType<SingleChange>()], found.All(change => change is not null));
+    }
+
+    /// <summary>The change; nothing when the search is ended early.</summary>
+    private SingleChange? Find()
+    {
+        SingleChange found = Search();
+        return cancellation.IsCancellationRequested ? null : found;
+    }
+
+    private SingleChange Search()
+    {
+        if (change.Steps == 0 || !MayFit(change.Steps))
             return Answer(null);
+        int suffices = LeastForKnown(change.Steps);
+        if (suffices > change.Steps && !IsFeasibleAfter(change.Steps))
+            return Answer(null);
+        int fails = LastWithoutHope();
         suffices = Math.Min(LeastForKnown(change.Steps), change.Steps);
         bool isClose = true;
-        while (suffices - fails > 1)
+        while (suffices - fails > 1 && !cancellation.IsCancellationRequested)
         {
             // The step just short of what the known plans need decides most often; where it does not, halving is quicker.
             int next = isClose ? suffices - 1 : (fails + suffices) / 2;
@@ -39,6 +61,18 @@ internal sealed class ChangeSearch
         }
 
         return Answer(suffices);
+    }
+
+    /// <summary>Whether what no correction can beat leaves a chance after some steps.</summary>
+    private bool MayFit(int steps) => change.After(steps) is { } changed && BandFloor.Of(changed).Bound >= 1 - PlanChoosing.Shortfall;
+
+    /// <summary>The most steps after which there is no chance for any plan; 0 when there is a chance after one, since nothing fits without a change.</summary>
+    private int LastWithoutHope()
+    {
+        int hopeless = 0, hope = change.Steps;
+        while (hope - hopeless > 1)
+            (hopeless, hope) = MayFit((hopeless + hope) / 2) ? (hopeless, (hopeless + hope) / 2) : ((hopeless + hope) / 2, hope);
+        return hopeless;
     }
 
     private SingleChange Answer(int? steps) => new(
@@ -73,7 +107,13 @@ internal sealed class ChangeSearch
     {
         if (known.Any(p => Fits(p, steps)))
             return true;
-        if (change.After(steps) is not { } changed || PlanChoosing.Feasible(new PlanSearch(changed)) is not { } plan)
+        if (change.After(steps) is not { } changed)
+            return false;
+        var search = new PlanSearch(changed);
+        known.Add(PlanChoosing.Climbed(search));
+        if (Fits(known[^1], steps))
+            return true;
+        if (PlanChoosing.Feasible(search, cancellation) is not { } plan)
             return false;
         known.Add(plan);
         return true;

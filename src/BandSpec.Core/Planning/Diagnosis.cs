@@ -10,23 +10,28 @@ namespace BandSpec.Core.Planning;
 /// <param name="Binding">The chosen plan's node of least margin.</param>
 /// <param name="BindingTerms">What makes it up, the largest part first.</param>
 /// <param name="Changes">The smallest single change of each kind that makes the requirement feasible; empty when it is.</param>
+/// <param name="IsComplete">Whether every change was looked for to the end; not when the search was ended early.</param>
 public sealed record Diagnosis(
-    BandFloor Floor, IReadOnlyList<TermPart> FloorTerms, BandNode Binding, IReadOnlyList<TermPart> BindingTerms, IReadOnlyList<SingleChange> Changes)
+    BandFloor Floor, IReadOnlyList<TermPart> FloorTerms, BandNode Binding, IReadOnlyList<TermPart> BindingTerms, IReadOnlyList<SingleChange> Changes,
+    bool IsComplete)
 {
     /// <summary>The diagnosis of an application with its chosen plan. Every change is verified by searching all candidate plans again.</summary>
     /// <param name="application">The application.</param>
     /// <param name="bands">The band of the chosen plan.</param>
     /// <param name="optimum">What the search chose.</param>
-    public static Diagnosis Of(Application application, BandMap bands, PlanChoice optimum)
+    /// <param name="progress">Is told how many changes are found; may be <see langword="null"/>.</param>
+    /// <param name="cancellation">Ends the search for changes early.</param>
+    public static Diagnosis Of(
+        Application application, BandMap bands, PlanChoice optimum, IProgress<SearchProgress>? progress = null, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
         ArgumentNullException.ThrowIfNull(bands);
         ArgumentNullException.ThrowIfNull(optimum);
         CapabilityTarget target = application.Requirement.Capability;
         BandFloor floor = BandFloor.Of(application);
-        return new Diagnosis(
-            floor, TermPart.AllOf(floor.Worst, target), bands.Worst, TermPart.AllOf(bands.Worst, target),
-            optimum.ContinuousMargin >= 1 - PlanChoosing.Shortfall ? [] : ChangeSearch.AllOf(application, bands, optimum));
+        (IReadOnlyList<SingleChange> changes, bool isComplete) =
+            optimum.HoldsEverywhere ? ([], true) : ChangeSearch.AllOf(application, bands, optimum, progress, cancellation);
+        return new Diagnosis(floor, TermPart.AllOf(floor.Worst, target), bands.Worst, TermPart.AllOf(bands.Worst, target), changes, isComplete);
     }
 }
 

@@ -1,4 +1,5 @@
 using BandSpec.Core.Bands;
+using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 
 namespace BandSpec.Core.Planning;
@@ -7,7 +8,7 @@ namespace BandSpec.Core.Planning;
 /// Walks up the cost levels and keeps the best plan of each that beats all cheaper ones. A plan that falls short between the nodes adds nodes,
 /// which hold for all later levels too: nodes only lower margins, so what was beaten stays beaten.
 /// </summary>
-internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellation)
+internal sealed class FrontSearch(PlanSearch search, IProgress<SearchProgress>? progress, CancellationToken cancellation)
 {
     /// <summary>Cuts are made anew when the margin to beat has risen by this much; older ones hold as well, but discard less.</summary>
     private const double NewCuts = 1.02;
@@ -15,40 +16,56 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
     private readonly List<NodePlace> added = [];
     private IReadOnlyList<ListGroup> groups = new CutMaking(search.Tables, []).Uncut();
     private double cutAt;
+    private long passed;
 
     /// <summary>The front of cost against margin.</summary>
-    public IReadOnlyList<TradeoffPoint> ByMargin()
+    public Front ByMargin()
     {
-        List<TradeoffPoint> front = [];
         double toBeat = double.NegativeInfinity;
-        foreach (IReadOnlyList<PlanFamily> level in search.Tables.Families.CostLevels())
+        return Walk(level =>
         {
             CutFor(toBeat);
-            if (BestOf(level, m => new Heat(m, Above(toBeat), rmsFirst: false), everywhere => everywhere >= Above(toBeat)) is not { } point)
-                continue;
-            front.Add(point);
-            toBeat = point.Margin;
-        }
-
-        return front;
+            TradeoffPoint? point = BestOf(level, m => new Heat(m, Above(toBeat), rmsFirst: false), everywhere => everywhere >= Above(toBeat));
+            toBeat = point?.Margin ?? toBeat;
+            return point;
+        });
     }
 
     /// <summary>The front of cost against rms error, over feasible plans.</summary>
-    public IReadOnlyList<TradeoffPoint> ByRmsError()
+    public Front ByRmsError()
     {
-        (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(1, search.Threads), 1);
-        List<TradeoffPoint> front = [];
+        if (!cancellation.IsCancellationRequested)
+            (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(1, search.Threads), 1);
         double toBeat = double.PositiveInfinity;
-        foreach (IReadOnlyList<PlanFamily> level in search.Tables.Families.CostLevels())
+        return Walk(level =>
         {
             double most = toBeat * (1 - Tie);
-            if (BestOf(level, m => new Heat(m, 1, rmsFirst: true, most), everywhere => everywhere >= 1 - PlanChoosing.Shortfall) is not { } point)
-                continue;
-            front.Add(point);
-            toBeat = point.RmsError;
+            TradeoffPoint? point = BestOf(
+                level, m => new Heat(m, 1, rmsFirst: true, most), everywhere => everywhere >= 1 - PlanChoosing.Shortfall);
+            toBeat = point?.RmsError ?? toBeat;
+            return point;
+        });
+    }
+
+    /// <summary>Up the cost levels; a level that the search was ended in does not count.</summary>
+    private Front Walk(Func<IReadOnlyList<PlanFamily>, TradeoffPoint?> bestOf)
+    {
+        List<TradeoffPoint> points = [];
+        PlanFamilies families = search.Tables.Families;
+        double? completeTo = null;
+        foreach (IReadOnlyList<PlanFamily> level in families.CostLevels())
+        {
+            TradeoffPoint? point = bestOf(level);
+            if (cancellation.IsCancellationRequested)
+                return new Front(points, completeTo, IsComplete: false);
+            if (point is not null)
+                points.Add(point);
+            completeTo = ChamberRun.Cost(Duration.FromMinutes(level[0].Minutes), search.Tables.Application.Station.Chamber);
+            passed += level.Sum(f => families.ListsIn(f) * families.DegreesOf[f.Count].Count);
+            progress?.Report(new SearchProgress(passed, 2 * search.PlanCount));
         }
 
-        return front;
+        return new Front(points, completeTo, IsComplete: true);
     }
 
     private const double Tie = 1e-9;
@@ -80,7 +97,8 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
                 .. everywhere.Where(r => winner.Margin > 0 && r.Margin < winner.Margin * (1 - PlanChoosing.Shortfall)).Select(r => r.Worst).Where(p => !added.Contains(p)),
             ];
             if (shortOf.Count == 0 || (winner.Margin > 0 && isEnough(least) && heat(margin).RmsFirst))
-                return new TradeoffPoint(plan, ChamberRun.Of(plan, search.Tables.Application.Station.Chamber).CostPerUnit, least, winner.Rms);
+                return new TradeoffPoint(
+                    plan, ChamberRun.Of(plan, search.Tables.Application.Station.Chamber).CostPerUnit, least, winner.Rms, Proven: winner.Margin > 0);
             added.AddRange(shortOf);
         }
 
@@ -94,3 +112,9 @@ internal sealed class FrontSearch(PlanSearch search, CancellationToken cancellat
         (groups, cutAt) = (new CutMaking(search.Tables, added).CutAt(toBeat, search.Threads), toBeat);
     }
 }
+
+/// <summary>A front as far as it is known.</summary>
+/// <param name="Points">Its points, by rising cost.</param>
+/// <param name="CompleteTo">The cost per unit up to which none is missing; nothing when not even the cheapest plans were looked at.</param>
+/// <param name="IsComplete">Whether none is missing at all.</param>
+internal sealed record Front(IReadOnlyList<TradeoffPoint> Points, double? CompleteTo, bool IsComplete);

@@ -12,6 +12,9 @@ namespace BandSpec.Core.Planning;
 /// </param>
 public sealed record PlanChoice(CompensationPlan Plan, ChamberRun Run, long PlansConsidered, bool Proven)
 {
+    /// <summary>How far below its margin at the nodes, relative, a choice may fall between them.</summary>
+    public const double Shortfall = 1e-8;
+
     /// <summary>How many plans were decided one by one before the answer was there, in the last exchange round.</summary>
     public required long PlansDecided { get; init; }
 
@@ -36,5 +39,5 @@ public sealed record PlanChoice(CompensationPlan Plan, ChamberRun Run, long Plan
     /// <summary>
     /// Whether the plan keeps the allowed error between the nodes as well, but for the part in 10⁸ that a choice may fall short of its nodes.
     /// </summary>
-    public bool HoldsEverywhere => ContinuousMargin >= 1 - PlanChoosing.Shortfall;
+    public bool HoldsEverywhere => ContinuousMargin >= 1 - Shortfall;
 }

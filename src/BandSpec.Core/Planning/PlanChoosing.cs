@@ -11,8 +11,8 @@ namespace BandSpec.Core.Planning;
 /// </summary>
 internal static class PlanChoosing
 {
-    /// <summary>How far below its margin at the nodes, relative, a choice may fall between them.</summary>
-    internal const double Shortfall = 1e-8;
+    /// <inheritdoc cref="PlanChoice.Shortfall"/>
+    internal const double Shortfall = PlanChoice.Shortfall;
 
     /// <summary>A choice that still falls short after this many rounds is given as not proven; three or four are usual.</summary>
     private const int MostRounds = 60;
@@ -50,11 +50,21 @@ internal static class PlanChoosing
         }
     }
 
-    /// <summary>A plan that is feasible at every pressure and temperature; nothing when no candidate plan is, which is then proven.</summary>
-    public static CompensationPlan? Feasible(PlanSearch search)
+    /// <summary>A good plan, found quickly and without proof.</summary>
+    public static CompensationPlan Climbed(PlanSearch search)
+    {
+        Contender top = new PlanAscent(search.Tables, new MarginScore(search.Tables, []), search.Rms).Climb();
+        return search.Tables.PlanOf(top.List, top.Zero, top.Span);
+    }
+
+    /// <summary>
+    /// A plan that is feasible at every pressure and temperature; nothing when no candidate plan is, which is then proven, or when the search is
+    /// ended early.
+    /// </summary>
+    public static CompensationPlan? Feasible(PlanSearch search, CancellationToken cancellation = default)
     {
         List<NodePlace> added = [];
-        while (new ObjectiveSearch(search, added, CancellationToken.None).Feasible() is { } winner)
+        while (new ObjectiveSearch(search, added, cancellation).Feasible() is { } winner && !cancellation.IsCancellationRequested)
         {
             CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
             List<NodePlace> shortOf =
@@ -78,8 +88,7 @@ internal static class PlanChoosing
             return null;
         CompensationPlan plan = pinned.Complete(application.Requirement.Temperature.Reference, application.Platform, application.Station);
         IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
-        bool isOptimum = plan.Temperatures.SequenceEqual(optimum.Plan.Temperatures)
-            && (plan.ZeroDegree, plan.SpanDegree) == (optimum.Plan.ZeroDegree, optimum.Plan.SpanDegree);
+        bool isOptimum = plan.IsLike(optimum.Plan);
         return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), optimum.PlansConsidered, optimum.Proven && isOptimum)
         {
             PlansDecided = optimum.PlansDecided,

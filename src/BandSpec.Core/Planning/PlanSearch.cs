@@ -4,9 +4,10 @@ using BandSpec.Core.Requirements;
 namespace BandSpec.Core.Planning;
 
 /// <summary>How far a search has come.</summary>
-/// <param name="Done">Plans decided or discarded so far.</param>
-/// <param name="Total">Plans there are; a search may end early with a proof.</param>
-public readonly record struct SearchProgress(long Done, long Total);
+/// <param name="Done">Plans decided or discarded so far; changes found so far.</param>
+/// <param name="Total">Plans or changes there are; a search of plans may end early with a proof.</param>
+/// <param name="OfChanges">Whether changes are counted that would make a requirement feasible.</param>
+public readonly record struct SearchProgress(long Done, long Total, bool OfChanges = false);
 
 /// <summary>
 /// The searches of one application. Each finds the best plan of some families and proves it: every plan is looked at, or discarded by a cut

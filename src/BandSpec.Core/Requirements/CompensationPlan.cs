@@ -27,6 +27,14 @@ public sealed record CompensationPlan(
         return new CompensationPlan(temperatures, zeroDegree, spanDegree, PointsAt(temperatures, reference, pressures));
     }
 
+    /// <summary>Whether another plan has the same temperatures and degrees.</summary>
+    /// <param name="other">The other plan.</param>
+    public bool IsLike(CompensationPlan other)
+    {
+        ArgumentNullException.ThrowIfNull(other);
+        return (ZeroDegree, SpanDegree) == (other.ZeroDegree, other.SpanDegree) && Temperatures.SequenceEqual(other.Temperatures);
+    }
+
     /// <summary>The temperature of a list that is nearest the reference temperature, the colder one on a tie.</summary>
     public static Temperature NearestTo(Temperature reference, IEnumerable<Temperature> temperatures) =>
         temperatures.Order().MinBy(t => Math.Abs((t - reference).Kelvin));

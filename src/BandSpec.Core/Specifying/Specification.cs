@@ -56,6 +56,9 @@ public sealed record Specification
     /// <summary>What each input's small change does to the plan's margin; <see langword="null"/> unless it was asked for.</summary>
     public IReadOnlyList<MarginGain>? Gains { get; init; }
 
+    /// <summary>Whether everything was searched to its end; not when the draft was stopped.</summary>
+    public bool IsComplete => Optimum.Proven && Diagnosis is not { IsComplete: false };
+
     /// <summary>
     /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.
     /// </summary>

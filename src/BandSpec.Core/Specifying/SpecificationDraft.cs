@@ -10,9 +10,6 @@ namespace BandSpec.Core.Specifying;
 /// <summary>The main story: from an application to its finished specification.</summary>
 public static class SpecificationDraft
 {
-    /// <summary>The confidence of the bound that is shown beside the margin when none is asked for.</summary>
-    private const double UsualConfidence = 0.95;
-
     /// <summary>
     /// Chooses the compensation plan, works out its band, shares out the allowed error and derives the test limits. That no plan fits is an
     /// answer like any other: see <see cref="Specification.Feasible"/>. A plan that the requirement pins is judged as given.
@@ -34,7 +31,7 @@ public static class SpecificationDraft
         bool fits = bands.Margin >= 1 && choice.HoldsEverywhere;
         bool isDiagnosed = optimum.Proven && (extras.HasFlag(DraftExtras.Diagnosis) || (!fits && extras.HasFlag(DraftExtras.DiagnosisOfNo)));
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
-        double confidence = application.Requirement.Capability.Confidence ?? UsualConfidence;
+        double confidence = application.Requirement.Capability.Confidence ?? MarginBound.UsualConfidence;
         MarginBound? bound = MarginBound.Of(application, choice.Plan, bands, confidence);
         return new Specification
         {
@@ -49,7 +46,7 @@ public static class SpecificationDraft
             Allocation = allocation,
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
-            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum) : null,
+            Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum, progress, cancellation) : null,
             Decisions = extras.HasFlag(DraftExtras.Decisions) ? DecisionComparison.Of(application, choice.Plan, bands, allocation) : null,
             Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
@@ -74,4 +71,10 @@ public enum DraftExtras
 
     /// <summary>Every decision rule beside the others, and what accepted units are worth in the field.</summary>
     Decisions = 8,
+
+    /// <summary>What a package has unless more is asked for.</summary>
+    Usual = DiagnosisOfNo | Decisions,
+
+    /// <summary>Everything there is.</summary>
+    All = Diagnosis | DiagnosisOfNo | Gains | Decisions,
 }

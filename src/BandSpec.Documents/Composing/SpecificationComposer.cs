@@ -6,6 +6,9 @@ namespace BandSpec.Documents.Composing;
 /// <summary>The whole specification as blocks: page one, then the chapters that carry the detail.</summary>
 internal static class SpecificationComposer
 {
+    /// <summary>The number of the chapter that says why the answer is what it is; later ones move up where there is none.</summary>
+    private const int Diagnosis = 6;
+
     public static Document Compose(Composition c, DateOnly date, DocumentOptions options, Standing standing, bool attached) => new(
         Frame(c, date, options, standing),
         [
@@ -16,8 +19,9 @@ internal static class SpecificationComposer
             .. BudgetChapter.Compose(c, 3),
             .. PlanChapter.Compose(c, 4),
             .. TestChapter.Compose(c, 5),
-            .. ClosingChapters.Cautions(c, 6),
-            .. ClosingChapters.Method(c, 7, attached, options.Release),
+            .. c.View.Diagnosis is { } found ? DiagnosisChapter.Compose(c, Diagnosis, found) : [],
+            .. ClosingChapters.Cautions(c, c.View.Diagnosis is null ? Diagnosis : Diagnosis + 1),
+            .. ClosingChapters.Method(c, c.View.Diagnosis is null ? Diagnosis + 1 : Diagnosis + 2, attached, options.Release),
         ]);
 
     private static Frame Frame(Composition c, DateOnly date, DocumentOptions options, Standing standing)

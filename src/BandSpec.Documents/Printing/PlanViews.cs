@@ -24,9 +24,16 @@ internal sealed class PlanViews(Specification specification, string sign)
                 Whole(choice.Plan.ZeroDegree), Whole(choice.Plan.SpanDegree),
                 Rounded.Nearest(choice.Run.Length.Minutes, 0).Shown(sign), Rounded.Nearest(choice.Run.CostPerUnit, 2).Shown(sign),
                 chamber.HourlyRate.Currency,
-                Whole(chamber.Batch), Whole(choice.PlansConsidered), choice.Proven, objective);
+                Whole(chamber.Batch), Whole(choice.PlansConsidered), specification.Optimum.Proven, objective);
         }
     }
+
+    public OptimumView? Optimum => _requirement.Compensation.Pinned is null
+        ? null
+        : new OptimumView(
+            string.Join("; ", specification.Optimum.Plan.Temperatures.Select(t => Rounded.Given(t.Celsius).Shown(sign))),
+            Rounded.Down(specification.Optimum.ContinuousMargin, 0.001).Shown(sign), Rounded.Nearest(specification.Optimum.Run.CostPerUnit, 2).Shown(sign),
+            specification.Optimum.Plan.IsLike(specification.Choice.Plan), specification.Optimum.HoldsEverywhere);
 
     private StayView Stay(Temperature temperature)
     {

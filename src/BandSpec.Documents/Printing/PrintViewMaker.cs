@@ -37,6 +37,8 @@ internal sealed class PrintViewMaker
             platform.Name, platform.Revision, _specification.Application.Station.Name, inputs, program, standing, _sign)
         {
             Sample = Sample(platform.Sample),
+            Optimum = new PlanViews(_specification, _sign).Optimum,
+            Diagnosis = new DiagnosisViews(_specification, Regions, _sign).Diagnosis,
         };
     }
 

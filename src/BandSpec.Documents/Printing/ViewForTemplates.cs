@@ -10,12 +10,18 @@ internal static class ViewForTemplates
         ("platform", Script(("name", view.Platform), ("revision", view.PlatformRevision))), ("station", Script(("name", view.Station))),
         ("pressure", Of(view.Range)), ("output", Of(view.Output)), ("temperature", Of(view.Temperature)), ("profile", Of(view.Profile)),
         ("has_sample", view.Sample is not null), ("sample", Of(view.Sample)),
+        ("has_diagnosis", view.Diagnosis is not null), ("has_remedies", view.Diagnosis is { Remedies.Count: > 0 }),
+        ("is_pinned", view.Optimum is not null), ("optimum", Of(view.Optimum)),
         ("regions", List(view.Regions.Select(Of))),
         ("margin", view.Verdict.Margin), ("floor_margin", view.Verdict.FloorMargin), ("floor_holds", view.Verdict.FloorHolds),
         ("worst", Of(view.Verdict.Worst)), ("tightest", Of(view.Verdict.Tightest)), ("plan", Of(view.Plan)), ("test", Of(view.Test)));
 
     private static ScriptObject Of(SampleView? s) => Script(
         ("units", s?.Units ?? ""), ("lots", s?.Lots ?? ""), ("readings", s?.Readings ?? ""), ("confidence", s?.Confidence ?? ""), ("margin", s?.Margin ?? ""));
+
+    private static ScriptObject Of(OptimumView? o) => Script(
+        ("temperatures", o?.Temperatures ?? ""), ("margin", o?.Margin ?? ""), ("cost", o?.Cost ?? ""), ("is_taken", o?.IsTaken ?? false),
+        ("fits", o?.Fits ?? false));
 
     public static ScriptObject Of(RegionView r) => Script(
         ("from", r.From), ("to", r.To), ("allowed", r.Allowed), ("allowed_at_start", r.AllowedAtStart), ("allowed_at_end", r.AllowedAtEnd),

@@ -88,9 +88,42 @@ internal sealed record PrintView(
     TestView Test, string Platform, string PlatformRevision, string Station, IReadOnlyList<DigestView> Inputs, string Program,
     string Standing, string DecimalSign)
 {
+    /// <summary>What the search would have chosen instead of a plan that the requirement pins; nothing when it pins none.</summary>
+    public OptimumView? Optimum { get; init; }
+
+    /// <summary>Why the answer is what it is; nothing when it was not worked out.</summary>
+    public DiagnosisView? Diagnosis { get; init; }
+
     /// <summary>What the platform's statistics rest on; nothing when the platform does not say.</summary>
     public SampleView? Sample { get; init; }
 }
 
 /// <summary>The sample behind the statistics, and the margin that can be claimed from it.</summary>
 internal sealed record SampleView(string Units, string Lots, string Readings, string Confidence, string Margin);
+
+/// <summary>What the search would have chosen: temperatures in °C, cost per unit; whether it is what was pinned, and whether it fits.</summary>
+internal sealed record OptimumView(string Temperatures, string Margin, string Cost, bool IsTaken, bool Fits);
+
+/// <summary>
+/// Why the answer is what it is: the parts of the band where the margin is least, the single changes that would make a plan fit (none when one
+/// does), and what a step of an input does to the margin (none unless asked for). Hopeless is what no correction at all can make fit.
+/// </summary>
+internal sealed record DiagnosisView(
+    IReadOnlyList<PartView> Parts, IReadOnlyList<RemedyView> Remedies, IReadOnlyList<GainView> Gains, bool IsHopeless, bool AnySuffices,
+    bool IsComplete);
+
+/// <summary>
+/// A term's part of the band in %FS and its share of the design band in percent, with the plan and with a perfect correction; empty where it has
+/// none. The name only for further terms.
+/// </summary>
+internal sealed record PartView(string Key, string Name, string Plan, string PlanShare, string Floor, string FloorShare);
+
+/// <summary>
+/// A single change: the figure with its unit as it is, as it would suffice, and the furthest that was looked at; the temperatures in °C of a plan
+/// that fits with it.
+/// </summary>
+internal sealed record RemedyView(
+    string Key, RegionView? Region, string Before, string After, string Furthest, bool Suffices, bool IsAtEnd, string Plan);
+
+/// <summary>What a step of an input, named by its path in the files, does to the margin.</summary>
+internal sealed record GainView(string Input, string Step, string Gain);

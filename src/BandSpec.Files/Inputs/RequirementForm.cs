@@ -20,6 +20,10 @@ internal static class RequirementForm
     /// <summary>The pressure range, which is read first: the errors need its span.</summary>
     internal static Key<PressureRange> Pressure { get; } = new("pressure", PressureForm.Form, "Calibrated pressure range.");
 
+    /// <summary>The compensation plans to consider, or the plan that is pinned.</summary>
+    internal static Key<CompensationScope> Compensation { get; } = new(
+        "compensation", DesignForms.Compensation, "Compensation plans to consider, and which of them is best.");
+
     private static readonly Key<OutputSignal> Output = new("output", OutputForm.Form, "Output signal over the pressure range.");
     private static readonly Key<TemperatureSection> Temperature = new(
         "temperature", TemperatureForm.Form, "Operating temperatures and the time spent at them.");
@@ -33,8 +37,6 @@ internal static class RequirementForm
         "held-terms", ErrorForms.Held, [], "Terms whose limit the customer has fixed.");
     private static readonly Key<IReadOnlyList<FurtherTerm>> FurtherTerms = Key.Optional<IReadOnlyList<FurtherTerm>>(
         "further-terms", ErrorForms.FurtherTerms, [], "Error sources outside the platform.");
-    private static readonly Key<CompensationScope> Compensation = new(
-        "compensation", DesignForms.Compensation, "Compensation plans to consider, and which of them is best.");
     private static readonly Key<VerificationRules> Test = new("test", TestForm.Form, "How the verification test decides.");
     private static readonly Key<RoundingSteps> Rounding = new(
         "rounding", DesignForms.Rounding, "Steps to which printed and tested values are rounded.");

@@ -36,7 +36,8 @@ public sealed record Manifest
     {
         FolderName = $"{Text(root.GetProperty("specification"), "number")}-{Text(root.GetProperty("specification"), "revision")}",
         Making = new PackageMaking(
-            Text(root, "program"), Text(root, "paper"), Text(root, "language"), root.TryGetProperty("release", out JsonElement digest) ? digest.GetString() : null),
+            Text(root, "program"), Text(root, "paper"), Text(root, "language"), root.TryGetProperty("release", out JsonElement digest) ? digest.GetString() : null,
+            root.TryGetProperty("diagnosed", out JsonElement diagnosed) && diagnosed.GetBoolean()),
         Inputs = [.. root.GetProperty("inputs").EnumerateArray().Select(
             i => new ListedInput(Text(i, "kind"), Text(i, "name"), Text(i, "attached-as"), Text(i, "sha256")))],
         Outputs = root.TryGetProperty("outputs", out JsonElement outputs)

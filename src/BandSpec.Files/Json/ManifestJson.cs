@@ -47,6 +47,8 @@ public static class ManifestJson
         json.WriteString("program", making.Program);
         json.WriteString("paper", making.Paper);
         json.WriteString("language", making.Language);
+        if (making.Diagnosed)
+            json.WriteBoolean("diagnosed", true);
         if (making.ReleaseDigest is { } release)
             json.WriteString("release", release);
         json.Identity(identity);
@@ -78,7 +80,8 @@ public sealed record ManifestInput(string Kind, string Name, string AttachedAs, 
 /// <param name="Paper">The paper of the PDF.</param>
 /// <param name="Language">The language of the documents.</param>
 /// <param name="ReleaseDigest">The digest of its line in the release record; <see langword="null"/> for a draft.</param>
-public sealed record PackageMaking(string Program, string Paper, string Language, string? ReleaseDigest);
+/// <param name="Diagnosed">Whether a diagnosis was asked for; without being asked for it is there only when no plan fits.</param>
+public sealed record PackageMaking(string Program, string Paper, string Language, string? ReleaseDigest, bool Diagnosed = false);
 
 /// <summary>A file of a package before it is written.</summary>
 /// <param name="Name">Its name in the package's folder.</param>

@@ -27,16 +27,22 @@ public static class ResultJson
             json.Identity(specification.Application.Requirement.Identity);
             json.WriteBoolean("feasible", specification.Feasible);
             json.Figure("margin", specification.Bands.Margin);
+            json.Figure("margin-continuous", specification.Choice.ContinuousMargin);
             json.Figure("floor-margin", specification.Floor.Margin);
             json.Figure("margin-bound", specification.Floor.Bound);
             if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
                 json.Object("claim", claim => WriteClaim(claim, bound, sample));
             json.Object("worst", worst => WritePlace(worst, specification.Bands.Worst));
             json.Object("plan", plan => WritePlan(plan, specification.Choice));
+            if (specification.Application.Requirement.Compensation.Pinned is not null)
+                json.Object("optimum", optimum => WriteOptimum(optimum, specification.Optimum));
+            json.WriteNumber("exchange-rounds", specification.Optimum.ExchangeRounds);
+            json.Objects("added-nodes", specification.Choice.AddedNodes, WritePlace);
             json.Objects("regions", specification.Bands.Regions, WriteRegion);
             json.Objects("allocation", specification.Allocation.Terms, WriteShare);
             json.Objects("derived-limits", specification.DerivedLimits, WriteLimit);
             json.Object("profile", profile => WriteProfile(profile, specification.Profile));
+            json.Diagnosis(specification);
             json.Objects("nodes", specification.Bands.Nodes, WriteNode);
         });
     }
@@ -71,6 +77,24 @@ public static class ResultJson
         json.Figure("cost-per-unit", choice.Run.CostPerUnit);
         json.WriteNumber("plans-considered", choice.PlansConsidered);
         json.WriteBoolean("proven", choice.Proven);
+    }
+
+    private static void WriteOptimum(Utf8JsonWriter json, PlanChoice optimum)
+    {
+        json.Figures("temperatures", optimum.Plan.Temperatures.Select(temperature => temperature.Celsius));
+        json.WriteNumber("zero-degree", optimum.Plan.ZeroDegree);
+        json.WriteNumber("span-degree", optimum.Plan.SpanDegree);
+        json.Figure("chamber-minutes", optimum.Run.Length.Minutes);
+        json.Figure("cost-per-unit", optimum.Run.CostPerUnit);
+        json.Figure("margin-continuous", optimum.ContinuousMargin);
+        json.WriteBoolean("proven", optimum.Proven);
+    }
+
+    private static void WritePlace(Utf8JsonWriter json, NodePlace place)
+    {
+        json.Figure("pressure-fraction", place.PressureFraction);
+        json.Figure("temperature", place.Temperature.Celsius);
+        json.WriteNumber("region", place.Region);
     }
 
     private static void WriteRegion(Utf8JsonWriter json, RegionBand region)

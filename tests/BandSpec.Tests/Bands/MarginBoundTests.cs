@@ -84,6 +84,18 @@ public sealed class MarginBoundTests
         Assert.True(At(further - 1) < 1);
     }
 
+    /// <summary>A bound comes as near to its margin as the sample allows, however large that is: here with 40 million units.</summary>
+    [Fact]
+    public void A_bound_has_no_floor_of_its_own()
+    {
+        Application application = OneTerm(0.2, 0.1, 0.5, 1, 40_000_000);
+        CompensationPlan plan = PlanOf(application);
+        BandMap bands = BandMap.Of(application, plan);
+        double lower = MarginBound.Of(application, plan, bands, 0.95)!.Lower;
+        // Cpk 1, n readings: 1 - z·√(1/(9n) + 1/(2n)), Bissell 1990.
+        Assert.Equal(bands.Margin - (1.6448536 * Math.Sqrt(((1 / 9.0) + 0.5) / 40_000_000)), lower, 3e-4);
+    }
+
     private static Application OneTerm(double mean, double sigma, double limit, double criterion, int units)
     {
         double variance = sigma * sigma;

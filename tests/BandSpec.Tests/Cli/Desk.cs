@@ -34,12 +34,17 @@ internal sealed class Desk : IDisposable
         Write(path, File.ReadAllText(At(path)).Replace(old, replacement, StringComparison.Ordinal));
 
     /// <summary>What a run printed and ended with; the folder's own path is shown as <c>DESK</c>.</summary>
-    public (int ExitCode, string Out, string Error) Run(params string[] arguments)
+    public (int ExitCode, string Out, string Error) Run(params string[] arguments) => Run(CancellationToken.None, arguments);
+
+    /// <summary>The same when the user has pressed Ctrl-C at once.</summary>
+    public (int ExitCode, string Out, string Error) RunStopped(params string[] arguments) => Run(new CancellationToken(canceled: true), arguments);
+
+    private (int ExitCode, string Out, string Error) Run(CancellationToken interruption, string[] arguments)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
         int code = CommandLine.Run(arguments, new Terminal
         {
-            Out = output, Error = error, Ink = Ink.None, IsWatched = false, Folder = Folder, Clock = TimeProvider.System,
+            Out = output, Error = error, Ink = Ink.None, IsWatched = false, Folder = Folder, Clock = TimeProvider.System, Interruption = () => interruption,
         });
         return (code, Shown(output), Shown(error));
     }

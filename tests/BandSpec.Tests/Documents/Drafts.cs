@@ -9,7 +9,7 @@ namespace BandSpec.Tests.Documents;
 internal static class Drafts
 {
     private static readonly Lazy<Specification> Done = new(() => SpecificationDraft.Draft(Given.Application(Quick(Given.Requirement))));
-    private static readonly Lazy<Specification> Impossible = new(() => SpecificationDraft.Draft(Given.Application(Quick(Given.Requirement) with { SafetyFactor = 3 })));
+    private static readonly Lazy<Specification> Impossible = new(() => SpecificationDraft.Draft(Given.Application(Quick(Given.Requirement) with { SafetyFactor = 3 }), extras: DraftExtras.All));
     private static readonly Lazy<Specification> Large = new(() => SpecificationDraft.Draft(Given.Application(Crowded())));
 
     public static Specification Feasible => Done.Value;

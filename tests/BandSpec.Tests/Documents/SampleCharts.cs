@@ -25,7 +25,14 @@ internal static class SampleCharts
         new("Figure 3", "Shares of the design band", "Stacked bars of each term's share by region.", Share, "share.svg"),
         new("Figure 4", "Chamber temperature over time", "Chamber temperature with four stays.", Chamber, "chamber.svg"),
         new("Figure 5", "Dwell profile", "Bars of the dwell profile.", new DwellChart("Temperature, °C", "Dwell, %", Dwell), "dwell.svg"),
+        new("Figure 6", "Cost against margin and rms error", "Stairs of margin and rms error over cost.", Front, "front.svg"),
+        new("Figure 7", "Cost against margin", "Stairs of margin over cost.", Front with { Errors = [] }, "front-margin.svg"),
     ];
+
+    private static FrontChart Front => new(
+        new("Cost, EUR a unit", "Margin", "Rms error, %FS", "Best for the money", "Fits", "Falls short", "Taken by the draft", "Needed"),
+        [new(7.7, 0.92, false, "1"), new(7.8, 0.93, false, "2"), new(9.5, 1.003, true, "3"), new(9.7, 1.01, true, "4")],
+        [new(9.5, 0.14, true, "5"), new(11, 0.138, true, "6")], new(9.5, 1.003));
 
     private static PressureChart Pressure => new(
         new("Pressure, bar", "Error, %FS", "Allowed", "", "Maximum", "Typical"),

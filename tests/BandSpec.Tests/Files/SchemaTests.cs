@@ -2,7 +2,9 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using BandSpec.Core.Findings;
+using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using BandSpec.Files.Inputs;
 using BandSpec.Files.Json;
 using BandSpec.Files.Schemas;
 using BandSpec.Files.Yaml;
@@ -64,8 +66,56 @@ public sealed class SchemaTests
     {
         Specification specification = SpecificationDraft.Draft(Given.Application());
 
-        Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Result.Span)), ResultJson.Write(specification)));
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(specification)));
         Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Limits.Span)), LimitsJson.Write(specification)));
+    }
+
+    [Fact]
+    public void The_result_of_a_pinned_plan_tells_the_optimum_by_its_schema()
+    {
+        Specification free = SpecificationDraft.Draft(Given.Application());
+        Specification pinned = SpecificationDraft.Draft(Given.Application(Given.Requirement with
+        {
+            Compensation = Given.Requirement.Compensation with { Pinned = new PinnedPlan([Given.C(-20), Given.C(25), Given.C(150)], 2, 2) },
+        }));
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(pinned)).RootElement, optimum = result.GetProperty("optimum");
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(pinned)));
+        Assert.Equal([-20, 25, 150], result.GetProperty("plan").GetProperty("temperatures").EnumerateArray().Select(t => t.GetDouble()));
+        Assert.Equal(free.Choice.Plan.Temperatures.Select(t => t.Celsius), optimum.GetProperty("temperatures").EnumerateArray().Select(t => t.GetDouble()));
+        Assert.Equal(free.Choice.ContinuousMargin, optimum.GetProperty("margin-continuous").GetDouble());
+        Assert.True(optimum.GetProperty("proven").GetBoolean());
+        Assert.False(JsonDocument.Parse(ResultJson.Write(free)).RootElement.TryGetProperty("optimum", out _));
+    }
+
+    [Fact]
+    public void A_result_with_its_diagnosis_follows_its_schema()
+    {
+        Specification refused = Documents.Drafts.Refused;
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(refused)).RootElement;
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(refused)));
+        Assert.Equal(refused.Diagnosis!.Changes.Count, result.GetProperty("diagnosis").GetArrayLength());
+        Assert.All(result.GetProperty("diagnosis").EnumerateArray(), change => Assert.Equal(
+            change.GetProperty("suffices").GetBoolean(), change.GetProperty("after").ValueKind == JsonValueKind.Number));
+        Assert.Equal(refused.Gains!.Count, result.GetProperty("gains").GetArrayLength());
+        Assert.Equal("ageing", result.GetProperty("held-by").GetProperty("perfect-correction").GetProperty("terms")[0].GetProperty("term").GetString());
+    }
+
+    [Theory]
+    [InlineData("brine-reinjection.yaml")]
+    [InlineData("cold-store-suction.yaml")]
+    [InlineData("hydrogen-dryer.yaml")]
+    public void The_results_of_the_demos_follow_the_schema(string file)
+    {
+        InputContent Content(string name) => InputContent.Of(name, File.ReadAllBytes(Path.Combine(DemoFolder, name)));
+        Specification specification = SpecificationDraft.Draft(InputReading.Read(Content(file), Content).Application!, extras: DraftExtras.Usual);
+        JsonElement result = JsonDocument.Parse(ResultJson.Write(specification)).RootElement;
+
+        Assert.Empty(Faults(ResultSchema, ResultJson.Write(specification)));
+        Assert.Equal(!specification.Feasible, result.TryGetProperty("diagnosis", out _));
+        Assert.InRange(result.GetProperty("margin-continuous").GetDouble(), 0, result.GetProperty("margin").GetDouble() * (1 + 1e-9));
+        Assert.Equal(result.GetProperty("exchange-rounds").GetInt32() > 1, result.GetProperty("added-nodes").GetArrayLength() > 0);
     }
 
     private static InputFile KindOf(string file) =>
@@ -73,6 +123,8 @@ public sealed class SchemaTests
         : file.StartsWith("stations", StringComparison.Ordinal) ? InputFile.Station : InputFile.Requirement;
 
     private static JsonSchema SchemaOf(InputFile kind) => Schemas[kind];
+
+    private static readonly JsonSchema ResultSchema = JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Result.Span));
 
     // A schema registers itself by its identifier, which may be done once only.
     private static readonly Dictionary<InputFile, JsonSchema> Schemas = Enum.GetValues<InputFile>()
