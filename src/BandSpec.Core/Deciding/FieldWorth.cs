@@ -17,11 +17,11 @@ public sealed record FieldWorth
     /// <summary>For a unit that the verification test accepted; 0 when nothing can be accepted.</summary>
     public required EstimatedProbability AcceptedUnit { get; init; }
 
-    /// <summary>For a unit that reads exactly on an acceptance limit of one point, for each point its worse limit, in the order of the test.</summary>
-    public required IReadOnlyList<LimitWorth> AtLimits { get; init; }
-
-    /// <summary>The worst of them; <see langword="null"/> when nothing can be accepted.</summary>
-    public LimitWorth? Worst => AtLimits.MaxBy(l => l.Leaving.Value);
+    /// <summary>
+    /// For a unit that reads exactly on an acceptance limit of one point: the limit of all points where that is worst, by the sum over places, sides and
+    /// ages; <see langword="null"/> when nothing can be accepted.
+    /// </summary>
+    public LimitWorth? AtLimit { get; init; }
 
     /// <summary>The worth under the limits of a set of verification points.</summary>
     internal static FieldWorth Of(Application application, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed)
@@ -35,18 +35,18 @@ public sealed record FieldWorth
         {
             AnyUnit = Integration.Of(leaving, Readings.None(law.Dimensions)),
             AcceptedUnit = canAccept ? EstimatedProbability.Quotient(Integration.Of(leaving, events.Readings(points)), accepted) : new(0, 0),
-            AtLimits = canAccept ? [.. points.Select((p, v) => AtLimit(events, law, allowed, p, v))] : [],
+            AtLimit = canAccept ? WorstLimit(events, law, points, allowed) : null,
         };
     }
 
-    private static LimitWorth AtLimit(UnitEvents events, UnitLaw law, IReadOnlyList<double> allowed, VerificationPoint point, int place)
+    private static LimitWorth WorstLimit(UnitEvents events, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed)
     {
-        Interval limits = events.AcceptedAt(point);
-        HalfSpaces at(double reading) => events.Leaving(allowed, error => law.Given(error, place, reading));
-        (double Reading, HalfSpaces Events) worse = new[] { limits.Lower, limits.Upper }.Select(reading => (reading, at(reading)))
-            .MaxBy(pair => Integration.SumOf(pair.Item2));
-        return new LimitWorth(
-            point.Id, worse.Reading, Integration.Of(worse.Events, Readings.None(law.Dimensions)));
+        (int place, double reading) = (from v in Enumerable.Range(0, points.Count)
+                                       let limits = events.AcceptedAt(points[v])
+                                       from at in new[] { limits.Lower, limits.Upper }
+                                       select (v, at)).MaxBy(limit => law.SumGiven(limit.v, limit.at, allowed));
+        HalfSpaces leaving = events.Leaving(allowed, error => law.Given(error, place, reading));
+        return new(points[place].Id, reading, Integration.Of(leaving, Readings.None(law.Dimensions)));
     }
 }
 

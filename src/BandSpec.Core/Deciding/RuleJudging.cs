@@ -22,7 +22,7 @@ internal sealed class RuleJudging
         (this.application, this.law) = (application, law);
         events = new UnitEvents(law, application);
         beyond = events.BeyondTolerance(points);
-        beyondTolerance = Integration.Of(beyond, Readings.None(law.Dimensions));
+        beyondTolerance = Integration.Of(beyond, Readings.None(beyond.Dimensions));
     }
 
     /// <summary>The outcome of a rule.</summary>
@@ -31,7 +31,7 @@ internal sealed class RuleJudging
         int[] impossible = [.. Enumerable.Range(0, points.Count).Where(v => points[v].Upper < points[v].Lower)];
         (EstimatedProbability rejected, EstimatedProbability consumer) = impossible.Length > 0
             ? (new(1, 0), new(0, 0))
-            : (Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2)), Integration.Of(beyond, events.Readings(points)));
+            : (Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2)), Integration.Of(beyond, events.ReadingsWithSteps(points)));
         // Rejected although within = rejected, less rejected and beyond; and the latter is beyond, less beyond and accepted.
         EstimatedProbability producer = rejected.Plus(beyondTolerance, -1).Plus(consumer, 1);
         Money reject = application.Station.RejectCost;

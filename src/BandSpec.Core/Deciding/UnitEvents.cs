@@ -11,13 +11,16 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
     /// <summary>The two numbers of the standard follow those of the unit where readings are events themselves.</summary>
     private const int Standards = 2;
 
-    /// <summary>That what a unit truly shows is beyond the tolerance at some test place.</summary>
+    /// <summary>
+    /// That what a unit truly shows is beyond the tolerance at some test place. The output's step at each place enters what is shown and what is read
+    /// there, so each is a number of its own behind those of the unit.
+    /// </summary>
     public HalfSpaces BeyondTolerance(IReadOnlyList<VerificationPoint> points)
     {
-        HalfSpaces events = new(law.Dimensions, 0);
+        HalfSpaces events = new(law.Dimensions + points.Count, 0);
         for (int v = 0; v < points.Count; v++)
             foreach (int side in new[] { -1, 1 })
-                Add(events, law.Shown(v), side, points[v].Tolerance.Percent, -1);
+                Add(events, WithStep(v, points.Count), side, points[v].Tolerance.Percent, -1);
         return events;
     }
 
@@ -30,7 +33,7 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
             LinearError shown = law.Shown(v);
             (double own, double zero, double common) = law.ReadingErrors(v);
             Interval accepted = AcceptedAt(points[v]);
-            LinearError read = new(shown.Mean, [.. shown.Weights, zero, common], own);
+            LinearError read = new(shown.Mean, [.. shown.Weights, zero, common], Math.Sqrt((own * own) + (shown.Own * shown.Own)));
             Add(events, read, 1, accepted.Upper, v);
             Add(events, read, -1, -accepted.Lower, v);
         }
@@ -45,28 +48,43 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
     {
         HalfSpaces events = new(law.Dimensions, nodes.Count);
         for (int node = 0; node < nodes.Count; node++)
-            foreach (int age in new[] { 0, 1 })
-                foreach (int side in new[] { -1, 1 })
-                {
-                    LinearError error = law.Used(node, side, age);
-                    Add(events, given is null ? error : given(error), 1, nodes[node], node);
-                }
+            foreach ((int side, int age) in UnitLaw.Sides)
+            {
+                LinearError error = law.Used(node, side, age);
+                Add(events, given is null ? error : given(error), 1, nodes[node], node);
+            }
+
         return events;
     }
 
-    /// <summary>The test readings that a unit is accepted by.</summary>
-    public Readings Readings(IReadOnlyList<VerificationPoint> points)
+    /// <summary>The test readings by which a unit is accepted, about the numbers of the unit alone: the output's steps are noise then.</summary>
+    public Readings Readings(IReadOnlyList<VerificationPoint> points) => ReadingsOf(points, law.Dimensions, v => law.Shown(v));
+
+    /// <summary>The same readings about the numbers of <see cref="BeyondTolerance"/>.</summary>
+    public Readings ReadingsWithSteps(IReadOnlyList<VerificationPoint> points) =>
+        ReadingsOf(points, law.Dimensions + points.Count, v => WithStep(v, points.Count));
+
+    private Readings ReadingsOf(IReadOnlyList<VerificationPoint> points, int dimensions, Func<int, LinearError> shownAt)
     {
-        Readings readings = new(law.Dimensions, law.ReadingErrors(0).CommonZero);
+        Readings readings = new(dimensions, law.ReadingErrors(0).CommonZero);
         for (int v = 0; v < points.Count; v++)
         {
-            LinearError shown = law.Shown(v);
+            LinearError shown = shownAt(v);
             (double own, _, double common) = law.ReadingErrors(v);
             Interval accepted = AcceptedAt(points[v]);
-            readings.Add(shown.Weights, new Reading(shown.Mean, accepted.Lower, accepted.Upper, own, common));
+            readings.Add(
+                shown.Weights, new Reading(shown.Mean, accepted.Lower, accepted.Upper, Math.Sqrt((own * own) + (shown.Own * shown.Own)), common));
         }
 
         return readings;
+    }
+
+    private LinearError WithStep(int place, int places)
+    {
+        LinearError shown = law.Shown(place);
+        double[] weights = [.. shown.Weights, .. new double[places]];
+        weights[law.Dimensions + place] = shown.Own;
+        return new(shown.Mean, weights, 0);
     }
 
     /// <summary>The acceptance limits of a point as errors, %FS.</summary>

@@ -9,12 +9,14 @@ namespace BandSpec.Core.TestLimits;
 /// <summary>
 /// Everything about one unit as linear functions of independent standard normal numbers, over all lots: what it shows at each test place and what
 /// error it has anywhere in use, so that dependence is told exactly. First come the numbers behind the residue, as many as its covariance over all
-/// places has rank; then pressure hysteresis, thermal hysteresis, drift of zero, drift of span, the further terms; last the output's step at each test
-/// place. Errors in %FS.
+/// places has rank; then pressure hysteresis, thermal hysteresis, drift of zero, drift of span and the further terms. Errors in %FS.
 /// </summary>
 internal sealed class UnitLaw
 {
     private const int PressureHysteresis = 0, ThermalHysteresis = 1, ZeroDrift = 2, SpanDrift = 3, Further = 4;
+
+    /// <summary>Both sides, new and at the end of life.</summary>
+    public static readonly (int Side, int Age)[] Sides = [(-1, 0), (1, 0), (-1, 1), (1, 1)];
 
     private readonly Application application;
     private readonly IReadOnlyList<TestPlace> places;
@@ -35,7 +37,7 @@ internal sealed class UnitLaw
         ];
         means = [.. residues.Select(r => Vectors.Dot(r.Coefficients, raw.Mean))];
         rows = SemidefiniteFactor.RowsOf(Covariance(residues, raw, correction, application.Station));
-        Dimensions = rows.Length + Further + application.Requirement.FurtherTerms.Count + places.Count;
+        Dimensions = rows.Length + Further + application.Requirement.FurtherTerms.Count;
     }
 
     /// <summary>How many independent numbers there are.</summary>
@@ -47,7 +49,9 @@ internal sealed class UnitLaw
     /// <summary>How many places of use there are.</summary>
     public int Nodes => nodes.Count;
 
-    /// <summary>What a unit truly shows at a test place: half its hysteresis behind, in the output's steps, without repeatability.</summary>
+    /// <summary>
+    /// What a unit truly shows at a test place: half its hysteresis behind, without repeatability; the output's step is the place's own number.
+    /// </summary>
     public LinearError Shown(int place)
     {
         (double x, double side) = (places[place].Fraction, places[place].Direction == PressureDirection.Rising ? -1 : 1);
@@ -55,8 +59,7 @@ internal sealed class UnitLaw
         Spread hysteresis = application.Platform.PressureHysteresis;
         double[] weights = ResidueWeights(place, 1);
         weights[rows.Length + PressureHysteresis] = half * hysteresis.Sigma.Percent;
-        weights[Dimensions - places.Count + place] = application.Requirement.Output.StepInPercent / Math.Sqrt(12);
-        return new(means[place] + (half * hysteresis.Mean.Percent), weights, 0);
+        return new(means[place] + (half * hysteresis.Mean.Percent), weights, application.Requirement.Output.StepInPercent / Math.Sqrt(12));
     }
 
     /// <summary>
@@ -98,20 +101,40 @@ internal sealed class UnitLaw
             station.StandardProportional.Percent * places[place].Fraction);
     }
 
-    /// <summary>The errors in use given that the test reading at a place is known: mean and weights change, the own number does not.</summary>
+    /// <summary>An error in use given that the test reading at a place is known: mean and weights change, the own number does not.</summary>
     /// <param name="error">An error in use.</param>
     /// <param name="place">The test place.</param>
     /// <param name="reading">The reading, as an error in %FS.</param>
     public LinearError Given(LinearError error, int place, double reading)
     {
         LinearError shown = Shown(place);
-        double squared = Vectors.Dot(shown.Weights, shown.Weights), total = squared + ReadingVariance(place);
+        double squared = Vectors.Dot(shown.Weights, shown.Weights), total = (shown.Sigma * shown.Sigma) + ReadingVariance(place);
         if (squared == 0)
             return error;
         double along = Vectors.Dot(error.Weights, shown.Weights);
         double shrink = (1 - Math.Sqrt(1 - (squared / total))) / squared;
         double[] weights = [.. error.Weights.Zip(shown.Weights, (w, a) => w - (shrink * along * a))];
         return new(error.Mean + (along / total * (reading - shown.Mean)), weights, error.Own);
+    }
+
+    /// <summary>
+    /// The sum over places of use, sides and ages of the probability of being beyond what is allowed, given the test reading at a place: no less than the
+    /// probability of leaving anywhere. Quicker than conditioning each error, for only its mean and spread are needed.
+    /// </summary>
+    public double SumGiven(int place, double reading, IReadOnlyList<double> allowed)
+    {
+        LinearError shown = Shown(place);
+        double total = (shown.Sigma * shown.Sigma) + ReadingVariance(place), sum = 0;
+        for (int node = 0; node < nodes.Count; node++)
+            foreach ((int side, int age) in Sides)
+            {
+                LinearError error = Used(node, side, age);
+                double along = Vectors.Dot(error.Weights, shown.Weights);
+                double mean = error.Mean + (along / total * (reading - shown.Mean));
+                double variance = (error.Sigma * error.Sigma) - (along * along / total);
+                sum += variance > 0 ? NormalDistribution.UpperTail((allowed[node] - mean) / Math.Sqrt(variance)) : mean > allowed[node] ? 1 : 0;
+            }
+        return sum;
     }
 
     /// <summary><c>u_v²</c>.</summary>

@@ -114,14 +114,14 @@ public sealed class DecisionComparisonTests
         for (int unit = 0; unit < 400_000; unit++)
         {
             double[] x = [.. Enumerable.Range(0, law.Dimensions).Select(_ => Numerics.Draws.Normal(random))];
-            if (Math.Abs(shown.Mean + Dot(shown.Weights, x) + (u * Numerics.Draws.Normal(random)) - reading) < width)
+            if (Math.Abs(shown.Mean + Dot(shown.Weights, x) + (Math.Sqrt((u * u) + (shown.Own * shown.Own)) * Numerics.Draws.Normal(random)) - reading) < width)
                 found.Add(used.Mean + Dot(used.Weights, x) + (used.Own * Numerics.Draws.Normal(random)));
         }
 
         double mean = found.Average(), sigma = Math.Sqrt(found.Sum(f => (f - mean) * (f - mean)) / (found.Count - 1));
         Assert.Equal(expected.Mean, mean, 5 * sigma / Math.Sqrt(found.Count));
         Assert.Equal(expected.Sigma, sigma, 5 * sigma / Math.Sqrt(2 * found.Count));
-        Assert.True(s.Decisions!.Field.Worst!.Leaving.Value > s.Decisions.Field.AcceptedUnit.Value);
+        Assert.True(s.Decisions!.Field.AtLimit!.Leaving.Value > s.Decisions.Field.AcceptedUnit.Value);
     }
 
     private static double Dot(double[] a, double[] b) => a.Zip(b, (x, y) => x * y).Sum();
