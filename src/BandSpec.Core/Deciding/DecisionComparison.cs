@@ -40,6 +40,6 @@ public sealed record DecisionComparison(IReadOnlyList<RuleOutcome> Rules, FieldW
         RuleOutcome[] rules = [.. Usual.Select(usual => usual.Rule == kind
             ? judging.Judge(chosen, true, points)
             : judging.Judge(usual, false, VerificationPoint.AllOf(application, plan, bands, allocation, usual with { Temperatures = chosen.Temperatures })))];
-        return new(rules, FieldWorth.Of(application, law, points, [.. bands.Nodes.Select(n => n.Allowed.Percent)]));
+        return new(rules, FieldWorth.Of(application, law, rules.Single(rule => rule.IsChosen), [.. bands.Nodes.Select(n => n.Allowed.Percent)]));
     }
 }

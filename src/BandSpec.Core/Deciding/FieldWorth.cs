@@ -24,13 +24,13 @@ public sealed record FieldWorth
     public LimitWorth? AtLimit { get; init; }
 
     /// <summary>The worth under the limits of a set of verification points.</summary>
-    internal static FieldWorth Of(Application application, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed)
+    internal static FieldWorth Of(Application application, UnitLaw law, RuleOutcome rule, IReadOnlyList<double> allowed)
     {
+        IReadOnlyList<VerificationPoint> points = rule.Points;
         UnitEvents events = new(law, application);
         HalfSpaces leaving = events.Leaving(allowed);
-        bool canAccept = points.All(p => p.Lower <= p.Upper);
-        EstimatedProbability accepted = new EstimatedProbability(1, 0).Plus(
-            canAccept ? Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2)) : new(1, 0), -1);
+        bool canAccept = rule.Impossible.Count == 0;
+        EstimatedProbability accepted = new EstimatedProbability(1, 0).Plus(rule.Rejected, -1);
         return new FieldWorth
         {
             AnyUnit = Integration.Of(leaving, Readings.None(law.Dimensions)),

@@ -2,11 +2,11 @@ using BandSpec.Core.Numerics.RareEvents;
 
 namespace BandSpec.Core.Deciding;
 
-/// <summary>How carefully probabilities of whole units are integrated: to two percent of themselves, or until the points are used up.</summary>
+/// <summary>How carefully probabilities of whole units are integrated: to three percent of themselves, or until the points are used up.</summary>
 internal static class Integration
 {
     private const ulong Seed = 106;
-    private const double RelativeError = 0.02;
+    private const double RelativeError = 0.03;
     private const long MostDraws = 1 << 16;
 
     /// <summary>Tilts between which accepted units with rare events are looked for, from none to three limits' worth.</summary>

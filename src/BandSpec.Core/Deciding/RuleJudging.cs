@@ -13,6 +13,7 @@ internal sealed class RuleJudging
     private readonly UnitLaw law;
     private readonly HalfSpaces beyond;
     private readonly EstimatedProbability beyondTolerance;
+    private readonly List<(double[] Limits, EstimatedProbability Rejected, EstimatedProbability Consumer)> known = [];
 
     /// <param name="application">The application.</param>
     /// <param name="law">The law of its units.</param>
@@ -31,7 +32,7 @@ internal sealed class RuleJudging
         int[] impossible = [.. Enumerable.Range(0, points.Count).Where(v => points[v].Upper < points[v].Lower)];
         (EstimatedProbability rejected, EstimatedProbability consumer) = impossible.Length > 0
             ? (new(1, 0), new(0, 0))
-            : (Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2)), Integration.Of(beyond, events.ReadingsWithSteps(points)));
+            : RisksOf(points);
         // Rejected although within = rejected, less rejected and beyond; and the latter is beyond, less beyond and accepted.
         EstimatedProbability producer = rejected.Plus(beyondTolerance, -1).Plus(consumer, 1);
         Money reject = application.Station.RejectCost;
@@ -47,6 +48,18 @@ internal sealed class RuleJudging
             Impossible = [.. impossible.Select(v => points[v].Id)],
             UncertaintyNeeded = impossible.Length > 0 ? Needed(rules, [.. impossible.Select(v => points[v])]) : null,
         };
+    }
+
+    /// <summary>Rules often end at the same limits once these are rounded; they are then the same test.</summary>
+    private (EstimatedProbability Rejected, EstimatedProbability Consumer) RisksOf(IReadOnlyList<VerificationPoint> points)
+    {
+        double[] limits = [.. points.SelectMany(p => new[] { p.Lower, p.Upper })];
+        if (known.Find(test => test.Limits.AsSpan().SequenceEqual(limits)) is { Limits: not null } same)
+            return (same.Rejected, same.Consumer);
+        EstimatedProbability rejected = Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2));
+        EstimatedProbability consumer = Integration.Of(beyond, events.ReadingsWithSteps(points));
+        known.Add((limits, rejected, consumer));
+        return (rejected, consumer);
     }
 
     private PercentOfSpan? Needed(VerificationRules rules, IReadOnlyList<VerificationPoint> points)
