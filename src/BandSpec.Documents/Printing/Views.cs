@@ -94,6 +94,9 @@ internal sealed record PrintView(
     /// <summary>Why the answer is what it is; nothing when it was not worked out.</summary>
     public DiagnosisView? Diagnosis { get; init; }
 
+    /// <summary>The decision rules side by side; nothing when they were not compared.</summary>
+    public DecisionView? Decisions { get; init; }
+
     /// <summary>What the platform's statistics rest on; nothing when the platform does not say.</summary>
     public SampleView? Sample { get; init; }
 }

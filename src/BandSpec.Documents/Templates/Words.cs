@@ -11,7 +11,7 @@ namespace BandSpec.Documents.Templates;
 /// </summary>
 internal sealed partial class Words
 {
-    private static readonly string[] Files = ["document.scriban", "terms.scriban", "cautions.scriban"];
+    private static readonly string[] Files = ["document.scriban", "terms.scriban", "decisions.scriban", "cautions.scriban"];
 
     /// <summary>The file of words that only the judgement of a lot needs.</summary>
     public const string OfJudgements = "judgement.scriban";
