@@ -3,6 +3,7 @@ using System.CommandLine.Help;
 using System.CommandLine.Invocation;
 using BandSpec.Cli.Commands;
 using BandSpec.Cli.Printing;
+using BandSpec.Cli.Storing;
 using BandSpec.Core.Findings;
 using BandSpec.Documents.Templates;
 
@@ -19,7 +20,8 @@ internal static class CommandLine
     {
         try
         {
-            ParseResult parsed = Build(terminal).Parse(arguments);
+            // Whoever names no command wants to know which there are.
+            ParseResult parsed = Build(terminal).Parse(arguments.Count == 0 ? ["--help"] : arguments);
             if (parsed.Errors.Count > 0 && parsed.Action is ParseErrorAction)
                 return RefuseArguments(parsed, terminal);
             // Signals are our own matter: a command that was stopped still has to write what it found, however long that takes.
@@ -45,6 +47,16 @@ internal static class CommandLine
         {
             terminal.Error.WriteLine($"bandspec: {refusal.Message}");
             return (int)refusal.Code;
+        }
+        catch (IOException closed) when (WritingFault.IsClosedPipe(closed))
+        {
+            // Whoever read the output has seen enough.
+            return (int)ExitCode.Fault;
+        }
+        catch (Exception refused) when (WritingFault.IsOfDisk(refused))
+        {
+            terminal.Error.WriteLine($"bandspec: {WritingFault.Refuse("the output", refused).Message}");
+            return (int)ExitCode.Fault;
         }
         catch (Exception fault)
         {

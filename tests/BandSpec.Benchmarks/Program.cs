@@ -12,6 +12,9 @@ switch (args.FirstOrDefault())
     case "plans":
         PlanBenchmark.Run(root);
         return 0;
+    case "documents":
+        DocumentBenchmark.Run(root);
+        return 0;
     case "rare":
         RareBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
         return 0;
@@ -28,6 +31,7 @@ switch (args.FirstOrDefault())
         Console.Error.WriteLine("""
             usage: BandSpec.Benchmarks lots [ROOT]               units made a second beside a NumPy twin
                    BandSpec.Benchmarks plans [ROOT]              the plan search beside a NumPy loop, and its growth
+                   BandSpec.Benchmarks documents [ROOT]          how long the documents take
                    BandSpec.Benchmarks rare [ROOT]               the estimate of a rare event
                    BandSpec.Benchmarks characterize [SECONDS]    the nested model against lme4, which is given so many seconds
                    BandSpec.Benchmarks coverage [REPETITIONS]    how often the intervals of a characterization hold the truth

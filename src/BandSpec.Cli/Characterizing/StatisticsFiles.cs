@@ -1,6 +1,7 @@
 using System.Text;
 using BandSpec.Cli.Opening;
 using BandSpec.Cli.Printing;
+using BandSpec.Cli.Storing;
 using BandSpec.Core.Findings;
 using BandSpec.Core.Requirements;
 using BandSpec.Documents;
@@ -67,18 +68,16 @@ internal sealed class StatisticsFiles(Terminal terminal)
 
     private static void Write(string path, string shown, ReadOnlyMemory<byte> bytes)
     {
-        string beside = path + ".part";
         try
         {
             Directory.CreateDirectory(Path.GetDirectoryName(path)!);
-            using (FileStream stream = new(beside, FileMode.Create))
-                stream.Write(bytes.Span);
-            File.Move(beside, path, overwrite: true);
         }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
-            throw new RefusalException($"{shown} cannot be written: {refused.Message}");
+            throw WritingFault.Refuse(shown, refused);
         }
+
+        WholeFile.Write(path, bytes);
     }
 
     private string PathOf(string file) => Path.GetFullPath(file, terminal.Folder);

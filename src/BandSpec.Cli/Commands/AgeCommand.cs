@@ -24,8 +24,10 @@ internal static class AgeCommand
             "--test-duration", "Time that the drift is stated for; otherwise the platform's, or the longest one.", QuantityForms.Time, "TIME");
         Option<double?> energy = ValueOptions.Quantity(
             "--activation-energy", "Activation energy to assume when the readings cannot tell.", QuantityForms.Energy, "ENERGY");
-        Option<double?> exponent = new("--time-exponent") { Description = "Time exponent to assume when the readings cannot tell.", HelpName = "NUMBER" };
-        Option<int?> planUnits = new("--plan-units") { Description = "Units of a planned further test, to learn what it would add.", HelpName = "NUMBER" };
+        Option<double?> exponent = NumberOption.Create<double>(
+            "--time-exponent", "Time exponent to assume when the readings cannot tell.", "NUMBER", "a number above 0, at most 2", number => number is > 0 and <= 2);
+        Option<int?> planUnits = NumberOption.Create<int>(
+            "--plan-units", "Units of a planned further test, to learn what it would add.", "NUMBER", "a whole number from 1 to 1000000", number => number is >= 1 and <= 1_000_000);
         Option<Temperature?> planStorage = ValueOptions.Quantity(
             "--plan-storage", "Storage temperature of the planned test.", QuantityForms.Temperature, "TEMPERATURE");
         Option<Duration[]> planTimes = ValueOptions.Times("--plan-times", "Times at which the planned test is read.");

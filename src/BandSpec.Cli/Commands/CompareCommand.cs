@@ -1,12 +1,8 @@
 using System.CommandLine;
-using System.Text;
 using BandSpec.Cli.Comparing;
 using BandSpec.Cli.Printing;
-using BandSpec.Core.Requirements;
-using BandSpec.Core.Revisions;
-using BandSpec.Core.Specifying;
+using BandSpec.Documents;
 using BandSpec.Files.Inputs;
-using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;
 
@@ -18,44 +14,32 @@ internal static class CompareCommand
     {
         Argument<string> old = new("OLD") { Description = "A requirement file, a package folder, a specification's PDF, or revision:path in git." };
         Argument<string> now = new("NEW") { Description = "The same, newer." };
+        Option<string?> report = new("--report") { Description = "Folder for the report: PDF and Markdown, both bands in one chart, JSON.", HelpName = "DIR" };
+        Option<bool> markdown = new("--markdown") { Description = "Write Markdown to standard output, for a merge request." };
+        Option<Paper> paper = PaperOption.Create();
         (Option<bool> json, Option<bool> quiet, Option<string?> root) = (CommonOptions.Json(), CommonOptions.Quiet(), CommonOptions.Root());
         TaughtCommand command = new(
             "compare", "Shows what differs between two specifications: inputs, band, plan, every limit, for whom it is tighter, and which input moved most. Exit code 1 when limits differ.",
             ("bandspec compare rev-a:pump.yaml pump.yaml", "since the git tag rev-a"),
             ("bandspec compare out/HV-3107-A out/HV-3107-B", "two packages, from the inputs in their PDFs"),
-            ("bandspec compare a.pdf b.pdf --json", "every figure, for programs"))
+            ("bandspec compare a.pdf b.pdf --report changes", "as PDF, Markdown, SVG and JSON in changes/"),
+            ("bandspec compare main:pump.yaml pump.yaml --markdown", "text for a merge request"))
         {
-            old, now, json, quiet, root,
+            old, now, report, markdown, json, quiet, paper, root,
         };
-        command.SetAction((parsed, cancellation) => Task.FromResult((int)Run(
-            [.. new[] { old, now }.Select(side => ComparedSide.Read(parsed.GetRequiredValue(side), parsed.GetValue(root), terminal.Folder))],
-            parsed.GetValue(json), parsed.GetValue(quiet), terminal, cancellation)));
-        return command;
-    }
-
-    private static ExitCode Run(IReadOnlyList<InputSet> sides, bool json, bool quiet, Terminal terminal, CancellationToken cancellation)
-    {
-        PlacedFinding[] findings = [.. sides.SelectMany(side => side.Findings).Distinct()];
-        if (sides[0].Application is not { } before || sides[1].Application is not { } after)
+        command.Validators.Add(result =>
         {
-            terminal.Out.Write(FindingScreen.Of(findings, terminal.Ink));
-            return ExitCode.Findings;
-        }
+            if (result.GetValue(json) && result.GetValue(markdown))
+                result.AddError("--json and --markdown cannot both be written to standard output");
+        });
+        command.SetAction((parsed, cancellation) => Task.FromResult((int)new CompareRun(terminal)
+        {
+            Json = parsed.GetValue(json), Markdown = parsed.GetValue(markdown), Quiet = parsed.GetValue(quiet),
+            Report = parsed.GetValue(report), Paper = parsed.GetValue(paper),
+        }.Run(Side(old, parsed), Side(now, parsed), cancellation)));
+        return command;
 
-        Comparison comparison = Comparison.Of(Solve(before, terminal, cancellation), Solve(after, terminal, cancellation));
-        IReadOnlyList<Cause> causes = Cause.Of(comparison, cancellation);
-        if (json)
-            terminal.Out.Write(Encoding.UTF8.GetString(ComparisonJson.Write(comparison, causes).Span));
-        else if (!quiet)
-            terminal.Out.Write(ComparisonScreen.Of(comparison, causes, terminal.Ink));
-        return comparison.LimitsDiffer ? ExitCode.AnswerIsNo : ExitCode.Done;
-    }
-
-    private static Specification Solve(Application application, Terminal terminal, CancellationToken cancellation)
-    {
-        Specification specification = SearchBar.Over(
-            terminal, application.Requirement.Identity.FolderName, bar => SpecificationDraft.Draft(application, bar, cancellation: cancellation));
-        cancellation.ThrowIfCancellationRequested();
-        return specification;
+        InputSet Side(Argument<string> side, ParseResult parsed) =>
+            ComparedSide.Read(parsed.GetRequiredValue(side), parsed.GetValue(root), terminal.Folder);
     }
 }

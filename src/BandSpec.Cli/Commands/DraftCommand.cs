@@ -15,22 +15,15 @@ internal static class DraftCommand
     {
         Argument<string[]> files = CommonOptions.Files();
         PackageOptions package = new();
-        Option<int> workers = new("--workers")
-        {
-            Description = "How many requirements are drafted at once; as many as there are processors when left out.",
-            DefaultValueFactory = _ => Environment.ProcessorCount, HelpName = "N",
-        };
+        Option<int> workers = NumberOption.Create(
+            "--workers", "How many requirements are drafted at once; as many as there are processors when left out.", "N", "a whole number from 1 to 1024",
+            number => number is >= 1 and <= 1024, Environment.ProcessorCount);
         Option<string?> since = new("--changed-since")
         {
             Description = "Draft only what depends on a file that differs from this revision in git.", HelpName = "REV",
         };
         (Option<string?> sarif, Option<string?> junit) = (FindingReports.SarifOption(), FindingReports.JunitOption());
         (Option<bool> json, Option<bool> quiet) = (CommonOptions.Json(), CommonOptions.Quiet());
-        workers.Validators.Add(result =>
-        {
-            if (result.GetValueOrDefault<int>() is < 1 or > 1024)
-                result.AddError("--workers takes a number from 1 to 1024");
-        });
         TaughtCommand command = new(
             "draft", "Turns requirements into specification packages, each in a folder of its number and revision. A package that is there already from the same inputs is left as it is.",
             ("bandspec draft pump.yaml", "the package in out/NUMBER-REVISION/"),

@@ -2,7 +2,9 @@ using System.CommandLine;
 using System.Text;
 using BandSpec.Cli.Judging;
 using BandSpec.Cli.Printing;
+using BandSpec.Core.LotJudging;
 using BandSpec.Documents;
+using BandSpec.Documents.Templates;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;
@@ -57,12 +59,25 @@ internal static class JudgeCommand
         }
 
         string folder = wishes.Out ?? Path.Combine("out", $"{judged.Limits.Specification}-judgement");
-        DateOnly today = DateOnly.FromDateTime(terminal.Clock.GetLocalNow().DateTime);
-        IReadOnlyList<string> files = JudgementFolder.Write(Path.GetFullPath(folder, terminal.Folder), judged, judgement.Reports, today, wishes.Look);
+        IReadOnlyList<string> files = Written(folder, judged, judgement, wishes.Look, terminal);
         if (wishes.Json)
             terminal.Out.Write(Encoding.UTF8.GetString(JudgementJson.Write(judged, judgement.Reports).Span));
         else if (!wishes.Quiet)
             terminal.Out.Write(JudgementScreen.Of(judged, judgement.Reports, folder, files, terminal.Ink));
         return (wishes.Proven ? judged.IsProven : judged.IsMet) ? ExitCode.Done : ExitCode.AnswerIsNo;
+    }
+
+    /// <summary>A mistake in the user's own words is the user's to mend, like a finding.</summary>
+    private static IReadOnlyList<string> Written(string folder, LotJudgement judged, Judgement judgement, DocumentOptions look, Terminal terminal)
+    {
+        DateOnly today = DateOnly.FromDateTime(terminal.Clock.GetLocalNow().DateTime);
+        try
+        {
+            return JudgementFolder.Write(Path.GetFullPath(folder, terminal.Folder), judged, judgement.Reports, today, look);
+        }
+        catch (TemplateException fault)
+        {
+            throw new RefusalException(fault.Message, ExitCode.Findings);
+        }
     }
 }

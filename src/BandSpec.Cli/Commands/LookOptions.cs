@@ -17,7 +17,7 @@ internal sealed class LookOptions
         Description = "Language of the documents.", DefaultValueFactory = _ => "en", HelpName = "en|de",
     };
 
-    private readonly Option<Paper> paper = new("--paper") { Description = "Paper of the PDF.", HelpName = "A4|Letter" };
+    private readonly Option<Paper> paper = PaperOption.Create();
 
     /// <summary>Adds all of them to a command.</summary>
     public void AddTo(Command command)

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.Reflection;
 using BandSpec.Cli.Printing;
+using BandSpec.Cli.Storing;
 
 namespace BandSpec.Cli.Commands;
 
@@ -31,22 +32,17 @@ internal static class NewCommand
     private static ExitCode Run(string file, string kind, Terminal terminal)
     {
         string path = Path.GetFullPath(file, terminal.Folder);
-        try
-        {
-            using FileStream target = new(path, FileMode.CreateNew);
-            using Stream starter = Assembly.GetExecutingAssembly().GetManifestResourceStream($"BandSpec.Cli.Starters.{kind}.yaml")
-                ?? throw new InvalidOperationException($"the starter of a {kind} is built into the program");
-            starter.CopyTo(target);
-        }
-        catch (IOException) when (File.Exists(path) || Directory.Exists(path))
+        if (File.Exists(path) || Directory.Exists(path))
         {
             terminal.Error.WriteLine($"bandspec: {file} exists already and was left as it is");
             return ExitCode.Findings;
         }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
-        {
-            throw new RefusalException($"{file} cannot be written: {refused.Message}");
-        }
+
+        using Stream starter = Assembly.GetExecutingAssembly().GetManifestResourceStream($"BandSpec.Cli.Starters.{kind}.yaml")
+            ?? throw new InvalidOperationException($"the starter of a {kind} is built into the program");
+        using MemoryStream text = new();
+        starter.CopyTo(text);
+        WholeFile.Write(path, text.ToArray());
         terminal.Out.WriteLine($"{terminal.Ink.Green(file)} is written; fill it in, then run {terminal.Ink.Blue($"bandspec check {file}")}");
         return ExitCode.Done;
     }

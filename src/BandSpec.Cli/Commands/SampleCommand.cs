@@ -15,7 +15,9 @@ internal static class SampleCommand
     {
         Argument<string> limits = new("LIMITS") { Description = "The limits.json of a specification package." };
         Option<double> confidence = Probability("--confidence", "Confidence of the proof, between 0 and 1.", 0.95);
-        Option<double?> expected = new("--expected") { Description = "The capability that the process is thought to have; shows how likely it is to pass.", HelpName = "INDEX" };
+        Option<double?> expected = NumberOption.Create<double>(
+            "--expected", "The capability that the process is thought to have; shows how likely it is to pass.", "INDEX", "a capability index above 0, at most 100",
+            number => number is > 0 and <= 100);
         Option<double> chance = Probability("--chance", "How likely such a process should be to pass, between 0 and 1.", 0.9);
         Option<bool> json = CommonOptions.Json();
         TaughtCommand command = new(
@@ -86,14 +88,6 @@ internal static class SampleCommand
     /// <summary>Rounded up: an index observed as printed proves the capability.</summary>
     private static string RoundedUp(double index) => (Math.Ceiling(index * 1000 - 1e-7) / 1000).ToString("0.000", CultureInfo.InvariantCulture);
 
-    private static Option<double> Probability(string name, string description, double usual)
-    {
-        Option<double> option = new(name) { Description = description, DefaultValueFactory = _ => usual, HelpName = "P" };
-        option.Validators.Add(result =>
-        {
-            if (!(result.GetValueOrDefault<double>() is > 0 and < 1))
-                result.AddError($"{name} lies between 0 and 1");
-        });
-        return option;
-    }
+    private static Option<double> Probability(string name, string description, double usual) =>
+        NumberOption.Create(name, description, "P", "a number between 0 and 1", number => number is > 0 and < 1, usual);
 }

@@ -10,11 +10,15 @@ internal sealed class TryOptions
 {
     private readonly Argument<string> file = new("FILE") { Description = "The requirement file; platform and station are found from there." };
     private readonly Option<string> units = new("--units") { Description = "Units to make, such as 1e6; rounded up to whole lots.", DefaultValueFactory = _ => "1e6", HelpName = "N" };
-    private readonly Option<int> lotSize = new("--lot-size") { Description = "Units in a lot, 16 to 100000.", DefaultValueFactory = _ => 400, HelpName = "N" };
-    private readonly Option<ulong> seed = new("--seed") { Description = "Root of all chance.", DefaultValueFactory = _ => 1UL, HelpName = "N" };
+    private readonly Option<int> lotSize = NumberOption.Create(
+        "--lot-size", "Units in a lot, 16 to 100000.", "N", "a whole number from 16 to 100000", number => number is >= 16 and <= 100_000, 400);
+
+    private readonly Option<ulong> seed = NumberOption.Create("--seed", "Root of all chance.", "N", "a whole number from 0 to 2^64 - 1", _ => true, 1UL);
     private readonly Option<string?> part = new("--part") { Description = "Make one part only and write it to a file.", HelpName = "K/N" };
     private readonly Option<string[]> set = new("--set") { Description = "Read a value as if it were written otherwise; may be given several times.", HelpName = "PATH=VALUE" };
-    private readonly Option<int> threads = new("--threads") { Description = "Threads; one for each processor when left out.", HelpName = "N" };
+    private readonly Option<int> threads = NumberOption.Create(
+        "--threads", "Threads; one for each processor when left out.", "N", "a whole number from 1 to 1024", number => number is >= 1 and <= 1024, Environment.ProcessorCount);
+
     private readonly Option<string?> root = CommonOptions.Root();
 
     /// <summary>A value to be tried over a range.</summary>
@@ -52,9 +56,8 @@ internal sealed class TryOptions
         }
         if (parsed.GetValue(part) is { } text)
             order = TryRequest.PartOf(order, text);
-        int wanted = parsed.GetValue(threads);
         return new TryRequest(
             parsed.GetRequiredValue(file), parsed.GetValue(root), [.. (parsed.GetValue(set) ?? []).Select(InputChange.Parse)], order,
-            wanted > 0 ? wanted : Environment.ProcessorCount);
+            parsed.GetValue(threads));
     }
 }

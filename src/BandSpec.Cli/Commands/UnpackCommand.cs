@@ -1,4 +1,5 @@
 using System.CommandLine;
+using BandSpec.Cli.Opening;
 using BandSpec.Cli.Printing;
 using BandSpec.Cli.Storing;
 using BandSpec.Documents;
@@ -37,12 +38,9 @@ internal static class UnpackCommand
             throw new RefusalException($"{file} carries a file that would not stay in its folder, `{stray.Name}`; nothing was written", ExitCode.Findings);
         if (Path.Exists(folder))
             throw new RefusalException($"{shown} exists already and was left as it is; name another folder with --out", ExitCode.Findings);
-        Directory.CreateDirectory(folder);
+        WholeFile.WriteInto(folder, carried);
         foreach (DocumentFile one in carried)
-        {
-            WholeFile.Write(Path.Combine(folder, one.Name), one.Bytes);
             terminal.Out.WriteLine(Path.Combine(shown, one.Name));
-        }
 
         return ExitCode.Done;
     }
@@ -51,7 +49,7 @@ internal static class UnpackCommand
     {
         try
         {
-            return SpecificationFile.Attachments(File.ReadAllBytes(Path.GetFullPath(file, terminal.Folder)));
+            return SpecificationFile.Attachments(BoundedFile.Read(Path.GetFullPath(file, terminal.Folder)));
         }
         catch (InvalidDataException)
         {

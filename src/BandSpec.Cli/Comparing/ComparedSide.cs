@@ -13,9 +13,6 @@ namespace BandSpec.Cli.Comparing;
 /// </summary>
 internal static class ComparedSide
 {
-    /// <summary>The largest PDF that is read; a specification with its inputs has a few hundred kilobytes.</summary>
-    private const int LargestDocument = 64 << 20;
-
     /// <summary>The inputs of a side.</summary>
     /// <param name="written">The side as the user named it.</param>
     /// <param name="root">The folder that inputs have to be in; null to find it.</param>
@@ -35,15 +32,17 @@ internal static class ComparedSide
     {
         if (!File.Exists(path))
             return Refuse(written, "no specification's PDF is in this folder", $"a package folder with its {PackageNames.Document}");
-        if (new FileInfo(path).Length > LargestDocument)
-            return Refuse(written, $"the file has more than {LargestDocument} bytes", "the PDF of a specification");
         try
         {
-            IReadOnlyList<DocumentFile> files = SpecificationFile.Attachments(File.ReadAllBytes(path));
+            IReadOnlyList<DocumentFile> files = SpecificationFile.Attachments(BoundedFile.Read(path));
             return CarriedInputs.Of(written, files.DistinctBy(file => file.Name).ToDictionary(file => file.Name, file => file.Bytes))?.Read()
                 ?? Refuse(written, "the PDF carries no inputs", "the PDF of a specification");
         }
-        catch (Exception refused) when (refused is InvalidDataException or IOException or UnauthorizedAccessException)
+        catch (InvalidDataException)
+        {
+            return Refuse(written, "it is not a PDF that can be read", "the PDF of a specification");
+        }
+        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
         {
             return Refuse(written, refused.Message.TrimEnd('.'), "the PDF of a specification");
         }

@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using System.Text.Json;
+using BandSpec.Cli.Opening;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Drafting;
@@ -21,7 +22,7 @@ internal sealed class StoredPackage
     public static StoredPackage? Read(string folder)
     {
         string path = Path.Combine(folder, PackageNames.Manifest);
-        return File.Exists(path) && Manifest.Read(File.ReadAllBytes(path)) is { } manifest ? new StoredPackage(folder, manifest) : null;
+        return File.Exists(path) && Manifest.Read(BoundedFile.Read(path)) is { } manifest ? new StoredPackage(folder, manifest) : null;
     }
 
     /// <summary>
@@ -42,7 +43,7 @@ internal sealed class StoredPackage
     {
         try
         {
-            using JsonDocument result = JsonDocument.Parse(File.ReadAllBytes(Path.Combine(folder, "result.json")));
+            using JsonDocument result = JsonDocument.Parse(BoundedFile.Read(Path.Combine(folder, "result.json")));
             JsonElement margin = result.RootElement.GetProperty("margin");
             // A plan that the requirement pins is not proven best itself: whether the search came to its end stands with what it found instead.
             JsonElement searched = result.RootElement.TryGetProperty("optimum", out JsonElement optimum) ? optimum : result.RootElement.GetProperty("plan");
@@ -61,7 +62,7 @@ internal sealed class StoredPackage
     {
         string path = Path.Combine(folder, output.Name);
         return Path.GetFileName(output.Name) == output.Name && File.Exists(path) && new FileInfo(path).Length == output.Length
-            && DigestOf(File.ReadAllBytes(path)) == output.Digest;
+            && DigestOf(BoundedFile.Read(path)) == output.Digest;
     }
 
     private static string DigestOf(ReadOnlySpan<byte> bytes) => Convert.ToHexStringLower(SHA256.HashData(bytes));

@@ -1,3 +1,4 @@
+using BandSpec.Cli.Opening;
 using BandSpec.Core.Findings;
 using BandSpec.Core.LotJudging;
 using BandSpec.Files.Inputs;
@@ -33,7 +34,7 @@ internal static class JudgeRun
     {
         try
         {
-            return LimitsFile.Read(file, File.ReadAllBytes(Path.GetFullPath(file, terminal.Folder)));
+            return LimitsFile.Read(file, BoundedFile.Read(Path.GetFullPath(file, terminal.Folder)));
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

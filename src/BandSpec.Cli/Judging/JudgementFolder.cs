@@ -1,4 +1,5 @@
 using System.Text;
+using BandSpec.Cli.Storing;
 using BandSpec.Core.LotJudging;
 using BandSpec.Documents;
 using BandSpec.Files.Csv;
@@ -31,9 +32,9 @@ internal static class JudgementFolder
             foreach (DocumentFile document in documents)
                 Replace(folder, document.Name, stream => stream.Write(document.Bytes.Span));
         }
-        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
-            throw new RefusalException($"{folder} cannot be written: {fault.Message}");
+            throw WritingFault.Refuse(folder, refused);
         }
 
         string[] charts = [.. documents.Select(d => d.Name).Where(name => name.EndsWith(".svg", StringComparison.Ordinal))];
@@ -43,8 +44,16 @@ internal static class JudgementFolder
     private static void Replace(string folder, string name, Action<Stream> write)
     {
         string path = Path.Combine(folder, name), unfinished = $"{path}.unfinished";
-        using (FileStream stream = File.Create(unfinished))
-            write(stream);
-        File.Move(unfinished, path, overwrite: true);
+        try
+        {
+            using (FileStream stream = File.Create(unfinished))
+                write(stream);
+            File.Move(unfinished, path, overwrite: true);
+        }
+        catch (IOException)
+        {
+            WholeFile.TryDelete(unfinished);
+            throw;
+        }
     }
 }

@@ -15,6 +15,9 @@ internal static class OpenedContent
             return InputContent.Refused(shown, "it is a folder");
         try
         {
+            // What has no length is empty, or a pipe or a device: to open one of those could wait for ever.
+            if (new FileInfo(path).Length == 0)
+                return InputContent.Of(shown, Array.Empty<byte>());
             using FileStream stream = new(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite);
             byte[] bytes = new byte[Math.Min(mostBytes, stream.Length + 1)];
             int length = stream.ReadAtLeast(bytes, bytes.Length, throwOnEndOfStream: false);

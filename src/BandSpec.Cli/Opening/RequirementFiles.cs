@@ -50,7 +50,8 @@ internal static class RequirementFiles
         [
             .. from path in Directory.EnumerateFiles(folder, "*", Below)
                where Path.GetExtension(path) is ".yaml" or ".yml" && KindOf(path) == "requirement"
-               let shown = Path.Combine(name, Path.GetRelativePath(folder, path))
+               let below = Path.GetRelativePath(folder, path)
+               let shown = name is "." or "./" ? below : Path.Combine(name, below)
                orderby shown.Replace(Path.DirectorySeparatorChar, '/') select new NamedFile(shown, null),
         ];
         return found.Length > 0 ? found : throw new RefusalException($"there is no requirement in {name}", ExitCode.Findings);

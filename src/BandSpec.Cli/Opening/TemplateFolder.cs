@@ -44,7 +44,7 @@ internal sealed class TemplateFolder : ITemplateFolder
             return null;
         if (new FileInfo(full).Length > LargestTemplate)
             throw new TemplateException($"{Name}/{path}", 1, 1, $"the template is larger than {LargestTemplate} bytes");
-        return Encoding.UTF8.GetString(File.ReadAllBytes(full));
+        return Encoding.UTF8.GetString(BoundedFile.Read(full, LargestTemplate));
     }
 
     /// <inheritdoc/>

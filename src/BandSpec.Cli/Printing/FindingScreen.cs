@@ -73,7 +73,7 @@ internal static class FindingScreen
         int from = begin + place.Length <= WidestLine ? 0 : Math.Max(0, begin - (WidestLine / 4));
         string left = from > 0 ? "..." : "", right = text.Length - from > WidestLine ? "..." : "";
         string line = string.Concat(left, text.AsSpan(from, Math.Min(WidestLine, text.Length - from)), right);
-        int length = Math.Clamp(place.Length, 1, Math.Max(1, WidestLine - (begin - from)));
+        int length = Math.Clamp(place.Length, 1, Math.Max(1, Math.Min(WidestLine, text.Length - from) - (begin - from)));
         string before = left + text[from..begin];
         string under = text.Substring(begin, Math.Min(length, text.Length - begin));
         return (line, new string(' ', CellWidth.Of(before)) + new string('^', Math.Max(1, CellWidth.Of(under))));

@@ -22,7 +22,7 @@ internal static class TradeoffScreen
         StringBuilder screen = new();
         screen.Append(Plain, $"\n{ink.Bold(identity.FolderName)}  {identity.Title}\n");
         screen.Append(ink.Faint(string.Create(Plain, $"each plan is the best of all that cost no more, of {found.Fronts.PlansConsidered:N0} plans")));
-        screen.Append(Plain, $"\n\n{ink.Bold("Cost against margin")}\n{TableOf(found, found.ByMargin, ink)}\n");
+        screen.Append(Plain, $"\n\n{ink.Bold("Cost against margin")}\n{(found.ByMargin.Count > 0 ? TableOf(found, found.ByMargin, ink) : "none found yet\n")}\n");
         screen.Append(Plain, $"{ink.Bold("Cost against rms error")}{ink.Faint(", plans that fit")}\n");
         screen.Append(found.ByRmsError.Count > 0 ? TableOf(found, found.ByRmsError, ink) : $"{ink.Red(found.Proven ? "no plan fits" : "none found yet")}\n");
         screen.Append(Plain, $"\n{OptimumLine(found, ink)}\n");

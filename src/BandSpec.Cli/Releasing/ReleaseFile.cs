@@ -33,6 +33,8 @@ internal static class ReleaseFile
         {
             // What is larger than a record may be is refused by its length, and need not be in memory for that.
             long length = Math.Min(new FileInfo(path).Length, ReleaseRecord.LargestFile + 1L);
+            if (length == 0)
+                return InputContent.Of(name, Array.Empty<byte>());
             using FileStream stream = File.OpenRead(path);
             byte[] bytes = new byte[length];
             stream.ReadExactly(bytes);

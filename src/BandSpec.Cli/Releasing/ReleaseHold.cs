@@ -18,6 +18,9 @@ internal sealed class ReleaseHold : IDisposable
     /// <summary>The note is written right after the file is made; without one for this long, its run was killed between the two.</summary>
     private static readonly TimeSpan TimeToSign = TimeSpan.FromSeconds(5);
 
+    /// <summary>The system tells the start of a process from its own clock, which may be set while it runs: seconds by which it may differ.</summary>
+    private const long ClockSlip = 2;
+
     private readonly string path;
 
     private ReleaseHold(string path) => this.path = path;
@@ -59,7 +62,7 @@ internal sealed class ReleaseHold : IDisposable
         }
         catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
         {
-            throw new RefusalException($"nothing can be released: {refused.Message}");
+            throw WritingFault.Refuse(path, refused);
         }
     }
 
@@ -67,7 +70,7 @@ internal sealed class ReleaseHold : IDisposable
     {
         if (HoldNote.Read(path) is not { } note)
             return File.Exists(path) && clock.GetUtcNow() - File.GetLastWriteTimeUtc(path) > TimeToSign;
-        return note.Machine == Environment.MachineName && StartOf(note.Process) != note.Started;
+        return note.Machine == Environment.MachineName && StartOf(note.Process) is var started && (started is null || Math.Abs(started.Value - note.Started) > ClockSlip);
     }
 
     /// <summary>When a process began, so that another with the same number is not taken for it; null when there is none.</summary>

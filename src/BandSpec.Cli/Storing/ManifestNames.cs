@@ -1,4 +1,5 @@
 using System.Text.Json;
+using BandSpec.Cli.Opening;
 
 namespace BandSpec.Cli.Storing;
 
@@ -10,7 +11,7 @@ internal static class ManifestNames
     {
         try
         {
-            using JsonDocument document = JsonDocument.Parse(File.ReadAllBytes(manifest));
+            using JsonDocument document = JsonDocument.Parse(BoundedFile.Read(manifest));
             return [.. document.RootElement.GetProperty("outputs").EnumerateArray().Select(file => file.GetProperty("name").GetString()!), "manifest.json"];
         }
         catch (Exception unreadable) when (unreadable is IOException or JsonException or InvalidOperationException or KeyNotFoundException)

@@ -43,10 +43,10 @@ internal sealed class PackageFolder
             TryRemove(Path.Combine(parent, $".{name}.new"));
             throw;
         }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
             TryRemove(Path.Combine(parent, $".{name}.new"));
-            throw new RefusalException($"{FullPath} cannot be written: {refused.Message.TrimEnd('.')}");
+            throw WritingFault.Refuse(FullPath, refused);
         }
     }
 

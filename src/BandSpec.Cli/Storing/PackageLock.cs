@@ -11,6 +11,9 @@ internal sealed class PackageLock : IDisposable
     private static readonly TimeSpan Patience = TimeSpan.FromSeconds(30);
     private static readonly TimeSpan Pause = TimeSpan.FromMilliseconds(50);
 
+    /// <summary>What .NET gives as <see cref="Exception.HResult"/> of a file that somebody else has: the number of the operating system's error.</summary>
+    private const int LinuxWouldBlock = 11, MacWouldBlock = 35, WindowsSharingViolation = unchecked((int)0x80070020);
+
     private readonly FileStream held;
     private readonly string owner;
 
@@ -30,11 +33,11 @@ internal sealed class PackageLock : IDisposable
                 Sign(owner, clock);
                 return new PackageLock(held, owner);
             }
-            catch (IOException) when (File.Exists(path) && clock.GetElapsedTime(begin) < Patience)
+            catch (IOException refused) when (IsHeld(refused) && clock.GetElapsedTime(begin) < Patience)
             {
                 Thread.Sleep(Pause);
             }
-            catch (IOException) when (File.Exists(path))
+            catch (IOException refused) when (IsHeld(refused))
             {
                 throw new RefusalException($"{parent} is being written to by another run ({Describe(owner)}); nothing was written");
             }
@@ -48,6 +51,9 @@ internal sealed class PackageLock : IDisposable
         TryDelete(owner);
         held.Dispose();
     }
+
+    /// <summary>Whether another run has the file; a full or read-only disk, where waiting would not help, is told at once.</summary>
+    private static bool IsHeld(IOException refused) => refused.HResult is LinuxWouldBlock or MacWouldBlock or WindowsSharingViolation;
 
     private static void Sign(string owner, TimeProvider clock)
     {

@@ -1,3 +1,5 @@
+using BandSpec.Documents;
+
 namespace BandSpec.Cli.Storing;
 
 /// <summary>Writes a file so that it is either the old one or the new one, complete, whenever the process is killed.</summary>
@@ -24,10 +26,10 @@ internal static class WholeFile
 
             File.Move(fresh, path, overwrite: true);
         }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
             TryDelete(fresh);
-            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
+            throw WritingFault.Refuse(path, refused);
         }
     }
 
@@ -35,16 +37,19 @@ internal static class WholeFile
     /// <exception cref="RefusalException">The disk or the rights keep it from being written.</exception>
     public static void WriteInFolder(string path, ReadOnlyMemory<byte> bytes)
     {
-        try
-        {
-            Directory.CreateDirectory(Path.GetDirectoryName(path)!);
-        }
-        catch (Exception refused) when (refused is IOException or UnauthorizedAccessException)
-        {
-            throw new RefusalException($"{path} cannot be written: {refused.Message.TrimEnd('.')}");
-        }
-
+        MakeFolder(Path.GetDirectoryName(path)!);
         Write(path, bytes);
+    }
+
+    /// <summary>Writes files into a folder, which is made when it is not there.</summary>
+    /// <param name="folder">The folder's full path.</param>
+    /// <param name="files">The files; one that is there already is replaced.</param>
+    /// <exception cref="RefusalException">The disk or the rights keep one from being written; it is as it was.</exception>
+    public static void WriteInto(string folder, IEnumerable<DocumentFile> files)
+    {
+        MakeFolder(folder);
+        foreach (DocumentFile file in files)
+            Write(Path.Combine(folder, file.Name), file.Bytes);
     }
 
     /// <summary>Deletes a file that may be gone, or not to be deleted: then it does no harm where it is.</summary>
@@ -57,6 +62,18 @@ internal static class WholeFile
         catch (Exception kept) when (kept is IOException or UnauthorizedAccessException)
         {
             // A hidden leftover; the next run writes over it.
+        }
+    }
+
+    private static void MakeFolder(string folder)
+    {
+        try
+        {
+            Directory.CreateDirectory(folder);
+        }
+        catch (Exception refused) when (WritingFault.Is(refused))
+        {
+            throw WritingFault.Refuse(folder, refused);
         }
     }
 }

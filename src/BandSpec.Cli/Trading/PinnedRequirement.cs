@@ -4,7 +4,6 @@ using BandSpec.Cli.Releasing;
 using BandSpec.Cli.Storing;
 using BandSpec.Core.Requirements;
 using BandSpec.Files.Inputs;
-using BandSpec.Files.Releases;
 
 namespace BandSpec.Cli.Trading;
 

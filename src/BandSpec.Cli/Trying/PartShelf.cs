@@ -1,3 +1,4 @@
+using BandSpec.Cli.Opening;
 using BandSpec.Core.VirtualLots;
 using BandSpec.Files.Json;
 
@@ -19,7 +20,7 @@ internal sealed class PartShelf(Terminal terminal)
         foreach (string file in files)
             try
             {
-                parts.Add(LotPartJson.Read(File.ReadAllBytes(Path.GetFullPath(file, terminal.Folder))));
+                parts.Add(LotPartJson.Read(BoundedFile.Read(Path.GetFullPath(file, terminal.Folder))));
             }
             catch (Exception refused) when (refused is FormatException or IOException or UnauthorizedAccessException)
             {

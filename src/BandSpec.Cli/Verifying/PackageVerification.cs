@@ -1,7 +1,5 @@
-using System.Security.Cryptography;
 using BandSpec.Cli.Releasing;
 using BandSpec.Files.Inputs;
-using BandSpec.Files.Json;
 using BandSpec.Files.Releases;
 
 namespace BandSpec.Cli.Verifying;
@@ -15,9 +13,6 @@ namespace BandSpec.Cli.Verifying;
 /// <param name="workingFolder">The folder that relative paths are counted from.</param>
 internal sealed class PackageVerification(string name, string? record, string workingFolder)
 {
-    /// <summary>No file of a package is larger.</summary>
-    private const int LargestFile = 64 << 20;
-
     private readonly List<VerifiedPart> parts = [];
 
     /// <summary>What was found.</summary>
@@ -26,7 +21,9 @@ internal sealed class PackageVerification(string name, string? record, string wo
         string path = Path.GetFullPath(name, workingFolder);
         bool isFolder = Directory.Exists(path);
         string document = isFolder ? Path.Combine(path, PackageNames.Document) : path;
-        if (Bytes(document) is not { } pdf || CarriedPackage.Of(name, pdf) is not { } carried)
+        if (!File.Exists(document))
+            return Fail(isFolder ? PackageNames.Document : name, isFolder ? "it is missing, and with it what everything could be computed from" : "there is no such file");
+        if (FileComparison.Read(document) is not { } pdf || CarriedPackage.Of(name, pdf) is not { } carried)
             return Fail(Path.GetFileName(document), "it is not the PDF of a specification, or it was damaged");
         if (carried.Provenance.Making.Program != CommandLine.Program)
             return Fail(PackageNames.Document, $"it was made by {carried.Provenance.Making.Program}, and only that can make the same bytes; this is {CommandLine.Program}");
@@ -34,9 +31,9 @@ internal sealed class PackageVerification(string name, string? record, string wo
         if (carried.MakeAgain(released, cancellation, out string? reason) is not { } again)
             return Fail(PackageNames.Document, reason!);
         if (isFolder)
-            CompareFolder(path, again);
+            parts.AddRange(FileComparison.OfFolder(path, again));
         else
-            Compare(Path.GetFileName(document), pdf.Span, again.First(file => file.Name == PackageNames.Document).Bytes.Span);
+            parts.Add(FileComparison.Of(Path.GetFileName(document), pdf.Span, again.First(file => file.Name == PackageNames.Document).Bytes.Span));
         return new Verification(name, parts) { Manifest = carried.Provenance };
     }
 
@@ -75,37 +72,5 @@ internal sealed class PackageVerification(string name, string? record, string wo
             return $"{broken!.Finding.Found}";
         return now.Find(digest) is not { } entry ? "it does not know this release"
             : now.Through(entry).ToBytes().AsSpan().SequenceEqual(chain.ToBytes()) ? null : "what came before this release is another history";
-    }
-
-    private void CompareFolder(string folder, IReadOnlyList<PackageFile> again)
-    {
-        foreach (PackageFile file in again.OrderBy(file => file.Name, StringComparer.Ordinal))
-            if (Bytes(Path.Combine(folder, file.Name)) is { } bytes)
-                Compare(file.Name, bytes.Span, file.Bytes.Span);
-            else
-                parts.Add(new VerifiedPart(file.Name, "it is missing"));
-        foreach (string stranger in Directory.EnumerateFileSystemEntries(folder).Select(entry => Path.GetFileName(entry)).Except(again.Select(file => file.Name)).Order())
-            parts.Add(new VerifiedPart(stranger, "it is not a file of the package"));
-    }
-
-    private void Compare(string what, ReadOnlySpan<byte> stored, ReadOnlySpan<byte> again)
-    {
-        int same = stored.CommonPrefixLength(again);
-        parts.Add(new VerifiedPart(what, same == stored.Length && same == again.Length ? null
-            : $"it differs from what its inputs give, first at byte {same}; its SHA-256 is {Convert.ToHexStringLower(SHA256.HashData(stored))}"));
-    }
-
-    private static ReadOnlyMemory<byte>? Bytes(string path)
-    {
-        try
-        {
-            if (!File.Exists(path) || new FileInfo(path).Length > LargestFile)
-                return null;
-            return File.ReadAllBytes(path);
-        }
-        catch (Exception unreadable) when (unreadable is IOException or UnauthorizedAccessException)
-        {
-            return null;
-        }
     }
 }

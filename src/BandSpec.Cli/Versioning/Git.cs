@@ -38,7 +38,8 @@ internal static class Git
         if (!isWhole)
             git.Kill(entireProcessTree: true);
         git.WaitForExit();
-        string message = isWhole ? errors.Result.Split('\n')[0].Trim() : $"more than {mostBytes} bytes";
+        string first = errors.Result.Split('\n')[0].Trim().TrimEnd('.');
+        string message = isWhole ? first.StartsWith("fatal: ", StringComparison.Ordinal) ? first["fatal: ".Length..] : first : $"more than {mostBytes} bytes";
         return new GitAnswer(isWhole && git.ExitCode == 0, output, message);
     }
 

@@ -37,6 +37,8 @@ internal static class PlanChoosing
             IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
             List<NodePlace> shortOf = [.. Violated(everywhere, answer.Winner.Margin).Where(p => !added.Contains(p))];
             bool holds = shortOf.Count == 0;
+            if (!answer.Proven)
+                (plan, everywhere) = OrClimbed(plan, everywhere, search);
             if (holds || !answer.Proven || round == MostRounds)
                 return new PlanChoice(plan, ChamberRun.Of(plan, application.Station.Chamber), search.PlanCount, answer.Proven && holds)
                 {
@@ -48,6 +50,20 @@ internal static class PlanChoosing
                 };
             added = [.. added, .. shortOf];
         }
+    }
+
+    /// <summary>
+    /// What a search that was ended early has to show: its plan, unless that falls short between the nodes and the plan found by climbing does not.
+    /// </summary>
+    private static (CompensationPlan Plan, IReadOnlyList<ContinuousMargin> Everywhere) OrClimbed(
+        CompensationPlan plan, IReadOnlyList<ContinuousMargin> everywhere, PlanSearch search)
+    {
+        double least = everywhere.Min(r => r.Margin);
+        if (least >= 1 - Shortfall)
+            return (plan, everywhere);
+        CompensationPlan climbed = Climbed(search);
+        IReadOnlyList<ContinuousMargin> instead = ContinuousMargin.AllOf(search.Tables.Application, climbed);
+        return instead.Min(r => r.Margin) > least ? (climbed, instead) : (plan, everywhere);
     }
 
     /// <summary>A good plan, found quickly and without proof.</summary>

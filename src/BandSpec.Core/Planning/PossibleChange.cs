@@ -65,7 +65,7 @@ internal sealed class PossibleChanges(Application application)
     {
         AllowedErrorRegion now = requirement.AllowedError[region];
         double from = now.Limit.Percent;
-        int steps = Math.Max(0, (int)((LargestAllowance - from) / 0.01));
+        int steps = Math.Max(0, (int)(((LargestAllowance - from) / 0.01) + 1e-9));
         return new PossibleChange("allowed-error", region, from, steps, 0.01, "%FS", v => With(requirement with
         {
             AllowedError =

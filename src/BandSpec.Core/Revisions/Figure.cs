@@ -76,11 +76,14 @@ public sealed record Figure
 
     /// <summary>
     /// Whether both have the same value. Numbers closer than <see cref="Same"/>, relative, are the same: the order in which a sum was taken is
-    /// no change.
+    /// no change. Of what was found, numbers below <see cref="Nothing"/> are the same: what a fit leaves of a term that it follows is rounding.
     /// </summary>
     internal bool HasTheSameValue(Figure other) => Number is { } mine && other.Number is { } theirs && Unit == other.Unit
-        ? AreSame(mine, theirs)
+        ? AreSame(mine, theirs) || (Subject > FigureSubject.Station && Math.Abs(mine) < Nothing && Math.Abs(theirs) < Nothing)
         : Text == other.Text;
+
+    /// <summary>No error in %FS, no probability and no part of a span is ever told from zero at this size.</summary>
+    internal const double Nothing = 1e-12;
 
     /// <summary>Relative difference of numbers that count as the same.</summary>
     internal const double Same = 1e-9;

@@ -13,6 +13,9 @@ namespace BandSpec.Core.Revisions;
 /// <param name="New">The point in the newer record; <see langword="null"/> when nothing is tested there any more.</param>
 public sealed record PointChange(string Place, VerificationPoint? Old, VerificationPoint? New)
 {
+    /// <summary>Seven digits tell any two steps of a 20-bit output apart.</summary>
+    private const int Digits = 7;
+
     /// <summary>What the change means for production: neutral when one limit becomes tighter and the other looser.</summary>
     public Bearing ForProduction { get; private init; }
 
@@ -50,9 +53,13 @@ public sealed record PointChange(string Place, VerificationPoint? Old, Verificat
     internal static string PlaceOf(VerificationPoint point) => string.Create(
         CultureInfo.InvariantCulture, $"{point.Temperature}, {100 * point.PressureFraction} % of span, {Words.Of(point.Direction)}");
 
-    /// <summary>Seven digits tell any two steps of a 20-bit output apart.</summary>
-    private static string? Interval(VerificationPoint? point, string unit) =>
-        point is null ? null : string.Create(CultureInfo.InvariantCulture, $"{point.Lower:G7} … {point.Upper:G7} {unit}");
+    private static string? Interval(VerificationPoint? point, string unit)
+    {
+        if (point is null)
+            return null;
+        string[] ends = ShownFigures.WithDigits(Digits, point.Lower, point.Upper);
+        return $"{ends[0]} … {ends[1]} {unit}";
+    }
 
     private static Dictionary<string, VerificationPoint> ByPlace(Specification specification) => specification.VerificationPoints
         .GroupBy(PlaceOf).ToDictionary(points => points.Key, points => points.First());

@@ -22,6 +22,9 @@ internal static class ShownFigures
         return (old is null ? null : Join(written[0], old.Unit), now is null ? null : Join(written[^1], now.Unit));
     }
 
+    /// <summary>Numbers with as many decimals as the largest needs for so many digits; zeros that all have at their end are left out.</summary>
+    public static string[] WithDigits(int digits, params double[] numbers) => Trim([.. numbers.Select(number => Write(number, digits, numbers.Max(Math.Abs)))]);
+
     private static string[] Write(double[] numbers)
     {
         for (int digits = FewestDigits; digits < MostDigits; digits++)

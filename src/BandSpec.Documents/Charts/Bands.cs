@@ -3,7 +3,7 @@ using OxyPlot.Series;
 
 namespace BandSpec.Documents.Charts;
 
-/// <summary>The bands about zero, drawn the same over temperature and over pressure.</summary>
+/// <summary>The bands about zero, drawn the same over temperature and over pressure. Where a chart has only one upright axis, it needs no key.</summary>
 internal static class Bands
 {
     public static void Add(
@@ -21,7 +21,7 @@ internal static class Bands
         }
     }
 
-    private static AreaSeries Area(string upright, IReadOnlyList<Spot> spots)
+    public static AreaSeries Area(string? upright, IReadOnlyList<Spot> spots)
     {
         var area = new AreaSeries { YAxisKey = upright, Fill = ChartStyle.BlueWash, Color = OxyColors.Transparent, StrokeThickness = 0 };
         area.Points.AddRange(spots.Select(s => s.Data));
@@ -29,7 +29,7 @@ internal static class Bands
         return area;
     }
 
-    private static LineSeries Line(string upright, IReadOnlyList<Spot> spots, Stroke stroke, bool mirrored, MarkerType marker)
+    public static LineSeries Line(string? upright, IReadOnlyList<Spot> spots, Stroke stroke, bool mirrored, MarkerType marker = MarkerType.None)
     {
         var line = new LineSeries
         {

@@ -33,13 +33,12 @@ internal sealed class SpecificationCharts
         get
         {
             var worst = _specification.Bands.Worst;
+            var curves = BandCurves.Of(_specification);
             return new BandChart(
                 new(
                     Word("axis.temperature"), Word("axis.error"), Word("axis.dwell"), Word("key.allowed"), Word("key.design"),
                     Word("key.maximum"), Word("key.typical"), Word("key.plan"), Word("key.worst")),
-                OverTemperature(nodes => nodes.Min(n => n.Allowed.Percent)),
-                HasDesign ? OverTemperature(nodes => nodes.Min(n => n.Design.Percent)) : [],
-                OverTemperature(nodes => nodes.Max(n => n.Maximum.Percent)), OverTemperature(nodes => nodes.Max(n => n.Typical.Percent)),
+                curves.Allowed, curves.Design, curves.Maximum, curves.Typical,
                 [.. _specification.Choice.Plan.Temperatures.Select(t => t.Celsius)],
                 new Spot(worst.Temperature.Celsius, worst.Maximum.Percent), Dwell) { DecimalSign = Sign };
         }
@@ -88,10 +87,6 @@ internal sealed class SpecificationCharts
     private string Word(string key) => _words.Plain(key);
 
     private string Name(string term) => TermGroups.Of(term) == TermGroups.Further ? term : _words.Plain("term." + term);
-
-    // A region's edge appears once for each neighbour, so that a step in the allowance is drawn upright.
-    private Spot[] OverTemperature(Func<IEnumerable<BandNode>, double> worst) =>
-        [.. _specification.Bands.Nodes.GroupBy(n => (n.Region, n.Temperature)).Select(g => new Spot(g.Key.Temperature.Celsius, worst(g)))];
 
     private Spot[] OverPressure(IEnumerable<BandNode> nodes, Func<BandNode, double> value) =>
         [.. nodes.Select(n => new Spot(_specification.Application.Requirement.Pressure.At(n.PressureFraction).Value, value(n)))];

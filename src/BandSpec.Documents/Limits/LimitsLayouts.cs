@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Security;
 using System.Text;
 using BandSpec.Documents.Printing;
@@ -34,8 +35,14 @@ internal static class LimitsLayouts
         _ => null,
     };
 
-    private static string Quoted(string value) =>
-        value.AsSpan().IndexOfAny(",;\"\n") < 0 ? value : $"\"{value.Replace("\"", "\"\"", StringComparison.Ordinal)}\"";
+    // A spreadsheet would run what begins like a formula; a number with its sign is none.
+    private static string Quoted(string value)
+    {
+        bool isFormula = value.Length > 0 && "=+-@\t".Contains(value[0], StringComparison.Ordinal)
+            && !double.TryParse(value, NumberStyles.Float, CultureInfo.InvariantCulture, out _);
+        string safe = isFormula ? $"'{value}" : value;
+        return safe.AsSpan().IndexOfAny(",;\"\n") < 0 ? safe : $"\"{safe.Replace("\"", "\"\"", StringComparison.Ordinal)}\"";
+    }
 
     // The fields of limits.json, with underscores in their names.
     private static ScriptObject View(PrintView view) => ViewForTemplates.Script(

@@ -1,4 +1,3 @@
-using System.Globalization;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Specifying;
 

@@ -22,6 +22,9 @@ internal sealed class SafeTemplate
     public SafeTemplate(string file, string text)
     {
         _file = file;
+        // Scriban takes it for the end of the text, and would leave the rest out without a word.
+        if (text.IndexOf('\0', StringComparison.Ordinal) is >= 0 and var at)
+            throw new TemplateException(file, text.AsSpan(0, at).Count('\n') + 1, at - text.LastIndexOf('\n', at), "An invisible character, U+0000.");
         _template = Template.Parse(text, file, new ParserOptions { ExpressionDepthLimit = 100 });
         if (_template.Messages.FirstOrDefault(m => m.Type == ParserMessageType.Error) is { } error) throw At(error.Span, error.Message);
     }
@@ -45,6 +48,7 @@ internal sealed class SafeTemplate
             // The limits would cut the text off without a word otherwise.
             OnStringLimit = ScriptLimitBehavior.Throw,
             OnOutputLimit = ScriptLimitBehavior.Throw,
+            TemplateLoader = NoOther.Instance,
             RegexTimeOut = TimeSpan.FromMilliseconds(500),
             NewLine = "\n",
             MemberFilter = _ => false,
@@ -63,8 +67,9 @@ internal sealed class SafeTemplate
         }
     }
 
+    // What is missing at the end of the text has no place of its own.
     private TemplateException At(SourceSpan span, string reason) =>
-        new(_file, span.Start.Line + 1, span.Start.Column + 1, reason.Trim().TrimEnd('.') + ".");
+        new(_file, Math.Max(span.Start.Line, 0) + 1, Math.Max(span.Start.Column, 0) + 1, reason.Trim().TrimEnd('.') + ".");
 
     // Without the clock, chance, and evaluation of text made up at run time. Shared by all templates, so read-only throughout.
     private static ScriptObject MakeBuiltins()
@@ -84,6 +89,21 @@ internal sealed class SafeTemplate
         var functions = (ScriptObject)all.Clone(deep: false);
         foreach (var name in names) functions.Remove(name);
         builtins.SetValue(group, functions, readOnly: true);
+    }
+
+    /// <summary>A template is one file: what it seems to say is all that it says.</summary>
+    private sealed class NoOther : ITemplateLoader
+    {
+        public static readonly NoOther Instance = new();
+
+        public string GetPath(TemplateContext context, SourceSpan callerSpan, string templateName) =>
+            throw new ScriptRuntimeException(callerSpan, $"a template cannot include another, `{templateName}`");
+
+        public string? Load(TemplateContext context, SourceSpan callerSpan, string templatePath) =>
+            throw new ScriptRuntimeException(callerSpan, "a template cannot include another");
+
+        public ValueTask<string?> LoadAsync(TemplateContext context, SourceSpan callerSpan, string templatePath) =>
+            throw new ScriptRuntimeException(callerSpan, "a template cannot include another");
     }
 
     private sealed class EscapingContext(ScriptObject builtins, Func<string, string>? escape) : TemplateContext(builtins)

@@ -21,10 +21,13 @@ internal sealed class CsvText
     }
 
     /// <summary>Adds a text.</summary>
-    internal CsvText Add(string value)
+    internal CsvText Add(string value) => AddPlain(Cell(value));
+
+    /// <summary>A text as it stands in a cell.</summary>
+    internal static string Cell(string value)
     {
         string safe = value.Length > 0 && "=+-@\t\r".Contains(value[0], StringComparison.Ordinal) ? $"'{value}" : value;
-        return AddPlain(safe.AsSpan().IndexOfAny("\",\r\n") >= 0 ? $"\"{safe.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : safe);
+        return safe.AsSpan().IndexOfAny("\",\r\n") >= 0 ? $"\"{safe.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : safe;
     }
 
     /// <summary>Adds a number in the shortest form that reads back the same.</summary>

@@ -17,16 +17,13 @@ public static class UnitsCsv
         {
             if (unit.Verdict == UnitVerdict.Pass)
             {
-                to.Write(Cell(unit.Serial));
+                to.Write(CsvText.Cell(unit.Serial));
                 to.Write(",pass,,\n");
                 continue;
             }
 
             string reasons = string.Join("; ", unit.Reasons.Select(r => string.Create(CultureInfo.InvariantCulture, $"{r.Name} {r.Error:0.####} %FS")));
-            to.Write($"{Cell(unit.Serial)},{JudgementJson.Word(unit.Verdict)},{Cell(reasons)},{Cell(string.Join("; ", unit.Missing))}\n");
+            to.Write($"{CsvText.Cell(unit.Serial)},{JudgementJson.Word(unit.Verdict)},{CsvText.Cell(reasons)},{CsvText.Cell(string.Join("; ", unit.Missing))}\n");
         }
     }
-
-    private static string Cell(string text) =>
-        text.AsSpan().IndexOfAny(",\"\n") >= 0 ? $"\"{text.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : text;
 }

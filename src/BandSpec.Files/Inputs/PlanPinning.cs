@@ -3,7 +3,6 @@ using System.Text;
 using BandSpec.Core.Findings;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
-using BandSpec.Files.Yaml;
 using YamlDotNet.Core;
 using YamlDotNet.Core.Events;
 

@@ -10,7 +10,18 @@ internal readonly struct JsonPart(JsonElement element, string path)
 
     public string Text(string key) => OptionalText(key) ?? throw Lacking(key, "text");
 
-    public string? OptionalText(string key) => Find(key) is { ValueKind: JsonValueKind.String } value ? value.GetString() : null;
+    public string? OptionalText(string key)
+    {
+        try
+        {
+            return Find(key) is { ValueKind: JsonValueKind.String } value ? value.GetString() : null;
+        }
+        catch (InvalidOperationException)
+        {
+            // The bytes of a string are looked at only when it is asked for.
+            throw new JsonPartException($"`{Join(key)}` has bytes that are not UTF-8, or half a letter", "text in UTF-8");
+        }
+    }
 
     public double Number(string key) => OptionalNumber(key) ?? throw Lacking(key, "a number");
 

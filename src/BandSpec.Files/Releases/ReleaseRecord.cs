@@ -100,7 +100,7 @@ public sealed class ReleaseRecord
     private static PlacedFinding? Unreadable(InputContent content) => content switch
     {
         { Refusal: { } why } => Find(content.Name, 1, "", "file", why, "a file that can be read"),
-        { Bytes.Length: > LargestFile } => Find(content.Name, 1, "", "file-size", $"the file has {content.Bytes.Length} bytes", $"at most {LargestFile} bytes"),
+        { Bytes.Length: > LargestFile } => Find(content.Name, 1, "", "file-size", $"the file has more than {LargestFile} bytes", $"at most {LargestFile} bytes"),
         { Bytes.Span: var bytes } when !Utf8.IsValid(bytes) => Find(content.Name, 1, "", "encoding", "the file has bytes that are not UTF-8", "the record as it is in version control"),
         _ => null,
     };

@@ -31,7 +31,7 @@ internal sealed class SourceText
     internal static SourceText Decode(ReadOnlySpan<byte> bytes, FoundFaults faults, int largest = LargestFile)
     {
         if (bytes.Length > largest)
-            return Refuse(faults, "file-size", $"the file has {bytes.Length} bytes", $"at most {largest} bytes");
+            return Refuse(faults, "file-size", $"the file has more than {largest} bytes", $"at most {largest} bytes");
         if (bytes.StartsWith((ReadOnlySpan<byte>)[0xFE, 0xFF]) || bytes.StartsWith((ReadOnlySpan<byte>)[0xFF, 0xFE]) || bytes.Contains((byte)0))
             return Refuse(faults, "encoding", "the file is not UTF-8, it looks like UTF-16 or a binary file", "save it as UTF-8");
         if (bytes.StartsWith(Encoding.UTF8.Preamble))

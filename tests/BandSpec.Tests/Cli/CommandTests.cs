@@ -131,6 +131,19 @@ public sealed class CommandTests : IDisposable
         Assert.Equal((2, "", "bandspec: there is no option `--jsn`; did you mean `--json`?\nbandspec: see `bandspec check --help`\n"), desk.Run("check", "pump.yaml", "--jsn"));
     }
 
+    [Theory]
+    [InlineData("draft x.yaml --workers many", "`many`: --workers takes a whole number from 1 to 1024", "draft ")]
+    [InlineData("draft x.yaml --workers 0", "`0`: --workers takes a whole number from 1 to 1024", "draft ")]
+    [InlineData("draft x.yaml --paper A5", "there is no paper `A5`; --paper takes A4 or Letter", "draft ")]
+    [InlineData("draft x.yaml --paper 1", "there is no paper `1`; --paper takes A4 or Letter", "draft ")]
+    [InlineData("try x.yaml --seed -1", "`-1`: --seed takes a whole number from 0 to 2^64 - 1", "try ")]
+    [InlineData("sample x.json --confidence NaN", "`NaN`: --confidence takes a number between 0 and 1", "sample ")]
+    public void A_wrong_value_of_an_option_is_refused_in_words(string line, string message, string command) =>
+        Assert.Equal((2, "", $"bandspec: {message}\nbandspec: see `bandspec {command}--help`\n"), desk.Run(line.Split(' ')));
+
+    [Fact]
+    public void Without_a_command_the_help_is_shown() => Assert.Equal(desk.Run("--help"), desk.Run());
+
     [Fact]
     public void Help_teaches_with_examples() => Snapshot.Match(desk.Run("--help").Out + desk.Run("draft", "--help").Out);
 

@@ -39,6 +39,13 @@ internal sealed class Desk : IDisposable
     /// <summary>The same when the user has pressed Ctrl-C at once.</summary>
     public (int ExitCode, string Out, string Error) RunStopped(params string[] arguments) => Run(new CancellationToken(canceled: true), arguments);
 
+    /// <summary>The same when the user presses Ctrl-C after a second.</summary>
+    public (int ExitCode, string Out, string Error) RunStoppedSoon(params string[] arguments)
+    {
+        using CancellationTokenSource soon = new(TimeSpan.FromSeconds(1));
+        return Run(soon.Token, arguments);
+    }
+
     private (int ExitCode, string Out, string Error) Run(CancellationToken interruption, string[] arguments)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };

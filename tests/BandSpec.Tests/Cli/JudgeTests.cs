@@ -118,6 +118,16 @@ public sealed class JudgeTests : IDisposable
     }
 
     [Fact]
+    public void An_unknown_language_is_refused_and_nothing_is_written()
+    {
+        desk.Write("lot.csv", Lot(units: 12, sigma: 0.1));
+        (int code, _, string error) = desk.Run("judge", "limits.json", "lot.csv", "--language", "tlh");
+        Assert.Equal(2, code);
+        Assert.Contains("the language 'tlh' is not known", error, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(desk.At("out")));
+    }
+
+    [Fact]
     public void The_judgement_follows_its_schema_to_the_last_member()
     {
         JsonSchema schema = JsonSchema.FromText(desk.Run("schema", "judgement").Out);

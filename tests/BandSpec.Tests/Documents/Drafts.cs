@@ -10,7 +10,8 @@ internal static class Drafts
 {
     private static readonly Lazy<Specification> Done = new(() => SpecificationDraft.Draft(Given.Application(Quick(Given.Requirement))));
     private static readonly Lazy<Specification> Impossible = new(() => SpecificationDraft.Draft(Given.Application(Quick(Given.Requirement) with { SafetyFactor = 3 }), extras: DraftExtras.All));
-    private static readonly Lazy<Specification> Large = new(() => SpecificationDraft.Draft(Given.Application(Crowded())));
+    private static readonly Lazy<Specification> Large = new(() => SpecificationDraft.Draft(Given.Application(Crowded(20))));
+    private static readonly Lazy<Specification> Longest = new(() => SpecificationDraft.Draft(Given.Application(Crowded(280))));
 
     public static Specification Feasible => Done.Value;
 
@@ -18,6 +19,9 @@ internal static class Drafts
 
     /// <summary>40 regions, 30 profile bins, 60 verification points, long names in three scripts.</summary>
     public static Specification Stress => Large.Value;
+
+    /// <summary>The same, tested at so many temperatures that the document has more than forty pages.</summary>
+    public static Specification Long => Longest.Value;
 
     public static readonly SourceFile[] Sources =
     [
@@ -38,7 +42,7 @@ internal static class Drafts
         Compensation = requirement.Compensation with { CandidateStep = Given.K(10), FewestTemperatures = 3, MostTemperatures = 3, Separation = Given.K(40) },
     };
 
-    private static Requirement Crowded()
+    private static Requirement Crowded(int testTemperatures)
     {
         var given = Quick(Given.Requirement);
         Temperature At(double part) => Given.C(Math.Round(-20 + 170 * part, 1));
@@ -54,7 +58,7 @@ internal static class Drafts
             },
             AllowedError = [.. Enumerable.Range(0, 40).Select(i => new AllowedErrorRegion(At(i / 40.0), At((i + 1) / 40.0), Given.P(1.4 + 0.01 * (i % 7)), i % 3 == 0 ? Given.P(1.6) : null, i % 5 == 0 ? 0.02 : 0))],
             Profile = [.. Enumerable.Range(0, 30).Select(i => new DwellBin(At(i / 30.0), At((i + 1) / 30.0), Duration.FromHours(500 + 37 * i)))],
-            Test = given.Test with { Temperatures = [.. Enumerable.Range(0, 20).Select(i => At(i / 19.0))] },
+            Test = given.Test with { Temperatures = [.. Enumerable.Range(0, testTemperatures).Select(i => At(i / (testTemperatures - 1.0)))] },
             FurtherTerms = [.. Enumerable.Range(1, 6).Select(i => new FurtherTerm($"Дополнительная погрешность номер {i}", Given.P(0.002), Given.P(0.001), FurtherTermShape.Constant))],
         };
     }

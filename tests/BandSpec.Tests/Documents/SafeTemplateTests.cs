@@ -37,6 +37,7 @@ public sealed class SafeTemplateTests
     [InlineData("{{ math.pi = 3 }}")]
     [InlineData("{{ if feasible }}never closed")]
     [InlineData("{{ end }}")]
+    [InlineData("{{ title }} \0 the rest")]
     [InlineData("{{ ('a' | string.repeat 30) + '!' | regex.match '^(a+)+$' }}")]
     public void Refuses_with_file_line_and_column(string hostile)
     {
@@ -44,6 +45,10 @@ public sealed class SafeTemplateTests
         Assert.Matches(@"^layout\.txt:\d+:\d+: .+\.$", fault.Message);
         Assert.Equal(2, fault.Line);
     }
+
+    [Fact]
+    public void Says_in_plain_words_that_one_template_cannot_include_another() => Assert.Equal(
+        "layout.txt:1:4: a template cannot include another, `/etc/hostname`.", Assert.Throws<TemplateException>(() => Render("{{ include '/etc/hostname' }}")).Message);
 
     [Fact]
     public void Leaves_its_own_text_alone_and_escapes_values() =>

@@ -1,3 +1,5 @@
+using BandSpec.Cli.Verifying;
+using BandSpec.Files.Json;
 using CsCheck;
 using Xunit;
 
@@ -35,6 +37,43 @@ public sealed class VerifyTests : IClassFixture<VerifyTests.ReleasedPackage>
     }
 
     [Fact]
+    public void Many_bytes_of_every_file_flipped_one_by_one_show()
+    {
+        PackageFile[] made = [.. package.Files.Select(file => new PackageFile(Path.GetFileName(file), File.ReadAllBytes(file)))];
+        string copy = package.Shop.PathOf("copy");
+        Directory.CreateDirectory(copy);
+        foreach (PackageFile file in made)
+            File.WriteAllBytes(Path.Combine(copy, file.Name), file.Bytes.Span);
+        Assert.All(FileComparison.OfFolder(copy, made), part => Assert.Null(part.Fault));
+        foreach (PackageFile file in made)
+            foreach (int at in Enumerable.Range(0, 60).Select(i => (int)((long)(file.Bytes.Length - 1) * i / 59)).Distinct())
+            {
+                package.Flip(Path.Combine(copy, file.Name), at, 1 << (at % 8));
+                VerifiedPart[] faults = [.. FileComparison.OfFolder(copy, made).Where(part => part.Fault is not null)];
+                package.Flip(Path.Combine(copy, file.Name), at, 1 << (at % 8));
+                Assert.StartsWith($"it differs from what its inputs give, first at byte {at};", Assert.Single(faults, fault => fault.What == file.Name).Fault, StringComparison.Ordinal);
+            }
+
+        Directory.Delete(copy, recursive: true);
+    }
+
+    [Fact]
+    public void Any_flipped_byte_in_the_release_record_shows()
+    {
+        string record = package.Shop.PathOf("releases.json");
+        Assert.Equal(0, package.Shop.Run("verify", "out/HV-3107-A", "--record", "releases.json", "--quiet").ExitCode);
+        int length = (int)new FileInfo(record).Length;
+        foreach (int at in Offsets(length))
+        {
+            package.Flip(record, at, 1 << (at % 8));
+            Screen screen = package.Shop.Run("verify", "out/HV-3107-A", "--record", "releases.json", "--quiet");
+            package.Flip(record, at, 1 << (at % 8));
+            Assert.True(screen.ExitCode == 1, $"at {at}: {screen.Output}{screen.Error}");
+            Assert.StartsWith("DIFFERS releases.json: ", screen.Output, StringComparison.Ordinal);
+        }
+    }
+
+    [Fact]
     public void Any_flipped_byte_in_a_document_alone_shows()
     {
         string pdf = package.Files.Single(file => file.EndsWith(".pdf", StringComparison.Ordinal));
@@ -65,14 +104,14 @@ public sealed class VerifyTests : IClassFixture<VerifyTests.ReleasedPackage>
     }
 
     [Theory]
-    [InlineData("nowhere")]
-    [InlineData("brine.yaml")]
-    [InlineData("platforms")]
-    public void What_is_no_specification_is_not_verified(string name)
+    [InlineData("nowhere", "DIFFERS nowhere: there is no such file")]
+    [InlineData("brine.yaml", "DIFFERS brine.yaml: it is not the PDF of a specification, or it was damaged")]
+    [InlineData("platforms", "DIFFERS specification.pdf: it is missing, and with it what everything could be computed from")]
+    public void What_is_no_specification_is_not_verified(string name, string found)
     {
         Screen screen = package.Shop.Run("verify", name);
         Assert.Equal(1, screen.ExitCode);
-        Assert.Contains("it is not the PDF of a specification, or it was damaged", screen.Output, StringComparison.Ordinal);
+        Assert.Contains(found, screen.Output, StringComparison.Ordinal);
     }
 
     /// <summary>Both ends, and some in between that differ from run to run of the whole suite but not within one.</summary>

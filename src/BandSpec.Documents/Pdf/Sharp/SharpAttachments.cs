@@ -1,3 +1,4 @@
+using System.IO.Compression;
 using PdfSharp.Pdf;
 using PdfSharp.Pdf.IO;
 
@@ -6,22 +7,20 @@ namespace BandSpec.Documents.Pdf.Sharp;
 /// <summary>Reads attached files with PDFsharp, from the list of associated files in the catalogue.</summary>
 internal static class SharpAttachments
 {
-    public static IReadOnlyList<DocumentFile> Read(ReadOnlyMemory<byte> pdf)
-    {
-        using var stream = new MemoryStream(pdf.ToArray());
-        using var document = Open(stream);
-        if (document.Internals.Catalog.Elements.GetArray("/AF") is not { } files) return [];
-        var read = Enumerable.Range(0, files.Elements.Count).Select(i => ReadFile(files.Elements.GetDictionary(i)));
-        return [.. read.OrderBy(f => f.Name, StringComparer.Ordinal)];
-    }
+    /// <summary>No attached file is larger once unpacked; a few bytes can be made to unpack to gigabytes.</summary>
+    private const int LargestFile = 64 << 20;
 
-    private static PdfDocument Open(MemoryStream stream)
+    public static IReadOnlyList<DocumentFile> Read(ReadOnlyMemory<byte> pdf)
     {
         try
         {
-            return PdfReader.Open(stream, PdfDocumentOpenMode.Import);
+            using var stream = new MemoryStream(pdf.ToArray());
+            using var document = PdfReader.Open(stream, PdfDocumentOpenMode.Import);
+            if (document.Internals.Catalog.Elements.GetArray("/AF") is not { } files) return [];
+            var read = Enumerable.Range(0, files.Elements.Count).Select(i => ReadFile(files.Elements.GetDictionary(i)));
+            return [.. read.OrderBy(f => f.Name, StringComparer.Ordinal)];
         }
-        catch (Exception fault) when (fault is not OutOfMemoryException)
+        catch (Exception fault) when (fault is not (OutOfMemoryException or InvalidDataException))
         {
             // PDFsharp meets a damaged file with exceptions of many kinds.
             throw new InvalidDataException($"The file cannot be read as PDF: {fault.Message}", fault);
@@ -32,7 +31,23 @@ internal static class SharpAttachments
     {
         var content = specification?.Elements.GetDictionary("/EF")?.Elements.GetDictionary("/F")
             ?? throw new InvalidDataException("The PDF names an attached file without its content.");
-        if (!content.Stream.TryUncompress()) throw new InvalidDataException("The content of an attached file cannot be unpacked.");
-        return new DocumentFile(specification.Elements.GetString("/UF"), content.Stream.Value);
+        return new DocumentFile(specification.Elements.GetString("/UF"), Content(content));
+    }
+
+    private static byte[] Content(PdfDictionary file)
+    {
+        if (!file.Elements.ContainsKey("/Filter")) return file.Stream.Value;
+        if (file.Elements.GetName("/Filter") != "/FlateDecode" || file.Elements.ContainsKey("/DecodeParms"))
+            throw new InvalidDataException("The content of an attached file is packed in a way that this program does not use.");
+        using var packed = new ZLibStream(new MemoryStream(file.Stream.Value), CompressionMode.Decompress);
+        using var unpacked = new MemoryStream();
+        var buffer = new byte[1 << 16];
+        for (int read; (read = packed.Read(buffer)) > 0;)
+        {
+            unpacked.Write(buffer, 0, read);
+            if (unpacked.Length > LargestFile) throw new InvalidDataException($"An attached file unpacks to more than {LargestFile} bytes.");
+        }
+
+        return unpacked.ToArray();
     }
 }

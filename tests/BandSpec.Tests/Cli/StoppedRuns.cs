@@ -1,0 +1,134 @@
+using System.Diagnostics;
+using System.Text.Json;
+using BandSpec.Cli;
+using BandSpec.Core.Bands;
+using BandSpec.Core.Planning;
+using BandSpec.Core.Requirements;
+using BandSpec.Core.Specifying;
+using Xunit;
+
+namespace BandSpec.Tests.Cli;
+
+/// <summary>Ctrl-C in the middle of a search: exit code 1, the best plan so far kept, nothing claimed that was not proven.</summary>
+public sealed class StoppedRuns : IDisposable
+{
+    private const string File = "brine-reinjection.yaml";
+
+    private readonly Desk desk = new();
+
+    /// <summary>69 candidate temperatures, 14 million plans: many seconds of search on any machine of today.</summary>
+    public StoppedRuns() => desk.Change(
+        File, "candidate-step: 5 K, temperatures: 3, separation: 15 K, reach: 15 K, objective: least-cost",
+        "candidate-step: 2.5 K, temperatures: 3..6, separation: 15 K, reach: 15 K, objective: least-error");
+
+    public void Dispose() => desk.Dispose();
+
+    [Fact]
+    public void A_draft_that_is_stopped_keeps_its_best_plan_and_says_how_far_it_got()
+    {
+        (int code, string output, string error) = desk.RunStoppedSoon("draft", File);
+
+        Assert.Equal(1, code);
+        Assert.Contains("not proven: the search was stopped when ", output, StringComparison.Ordinal);
+        Assert.Matches("^bandspec: HV-3107-A: stopped when [0-9,]+ of [0-9,]+ plans were decided or discarded; its package holds the best plan so far, marked as not proven\n$", error);
+        Assert.False(Result().GetProperty("plan").GetProperty("proven").GetBoolean());
+        Assert.Contains("best plan found, not proven", System.IO.File.ReadAllText(desk.At("out/HV-3107-A/specification.md")), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_package_that_was_stopped_is_not_up_to_date_and_is_not_released()
+    {
+        desk.RunStoppedSoon("draft", File);
+        Assert.DoesNotContain("up to date", desk.RunStoppedSoon("draft", File).Out, StringComparison.Ordinal);
+        Assert.Equal((1, "", "bandspec: stopped; nothing was written\n"), desk.RunStoppedSoon("release", File, "--by", "N. Aas"));
+        Assert.False(System.IO.File.Exists(desk.At("releases.json")));
+    }
+
+    [Fact]
+    public void Of_several_requirements_those_not_begun_are_left()
+    {
+        desk.Write("second.yaml", System.IO.File.ReadAllText(desk.At(File)).Replace("HV-3107", "HV-3108", StringComparison.Ordinal));
+        (int code, string output, _) = desk.RunStopped("draft", File, "second.yaml");
+
+        Assert.Equal(1, code);
+        Assert.Contains("2 stopped", output, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(desk.At("out")));
+    }
+
+    [Fact]
+    public void A_search_that_is_stopped_in_its_middle_has_a_plan_of_its_candidates()
+    {
+        Application application = Given.Application(Given.Requirement with
+        {
+            Compensation = Given.Requirement.Compensation with { CandidateStep = Given.K(2.5), Objective = PlanObjective.LeastError, MostTemperatures = 5 },
+        });
+        using CancellationTokenSource stop = new();
+        Specification specification = SpecificationDraft.Draft(application, new StopAt(20_000, stop), cancellation: stop.Token);
+
+        Assert.True(stop.IsCancellationRequested);
+        Assert.False(specification.IsComplete);
+        Assert.InRange(specification.Choice.PlansDecided + specification.Choice.PlansDiscarded, 20_000, specification.Choice.PlansConsidered - 1);
+        Assert.True(ContinuousMargin.AllOf(application, specification.Choice.Plan).Min(r => r.Margin) >= 1);
+    }
+
+    [Fact]
+    public void Fronts_that_are_stopped_are_those_of_the_cheaper_plans()
+    {
+        Application application = Given.Application(Given.Requirement with { SafetyFactor = 1.8 });
+        Tradeoff whole = Tradeoff.Of(application);
+        using CancellationTokenSource stop = new();
+        Tradeoff part = Tradeoff.Of(application, new StopAt(whole.PlansConsidered / 2, stop), stop.Token);
+
+        Assert.False(part.Proven);
+        Assert.NotNull(part.MarginCompleteTo);
+        Assert.Null(part.RmsErrorCompleteTo);
+        Assert.Equal(
+            whole.ByMargin.Where(p => p.CostPerUnit <= part.MarginCompleteTo + 1e-9).Select(p => (p.CostPerUnit, p.Margin)),
+            part.ByMargin.Select(p => (p.CostPerUnit, p.Margin)));
+    }
+
+    /// <summary>
+    /// A real process and a real signal. The search takes a minute and more; a process that was too slow to listen when the signal came is ended by
+    /// it, as it should be, and is tried again with more patience.
+    /// </summary>
+    [Fact]
+    public void A_process_that_gets_the_signal_ends_with_its_best_so_far()
+    {
+        Assert.SkipWhen(OperatingSystem.IsWindows(), "signals are sent with kill");
+        (int code, string output, string error) = Signalled(TimeSpan.FromSeconds(2));
+        for (int patience = 4; code > 128 && patience < 60; patience *= 2)
+            (code, output, error) = Signalled(TimeSpan.FromSeconds(patience));
+
+        Assert.Equal(1, code);
+        Assert.Contains("not proven: the search was stopped when ", output, StringComparison.Ordinal);
+        Assert.StartsWith("bandspec: HV-3107-A: stopped when ", error, StringComparison.Ordinal);
+        Assert.False(Result().GetProperty("plan").GetProperty("proven").GetBoolean());
+    }
+
+    private (int ExitCode, string Out, string Error) Signalled(TimeSpan after)
+    {
+        ProcessStartInfo start = new("dotnet") { WorkingDirectory = desk.Folder, RedirectStandardOutput = true, RedirectStandardError = true };
+        foreach (string argument in new[] { typeof(CommandLine).Assembly.Location, "draft", File })
+            start.ArgumentList.Add(argument);
+        using Process run = Process.Start(start)!;
+        Task<string> output = run.StandardOutput.ReadToEndAsync(TestContext.Current.CancellationToken);
+        Task<string> error = run.StandardError.ReadToEndAsync(TestContext.Current.CancellationToken);
+        Assert.False(run.WaitForExit(after), "the search was over before it could be stopped");
+        using (Process kill = Process.Start("kill", ["-INT", run.Id.ToString(System.Globalization.CultureInfo.InvariantCulture)]))
+            kill.WaitForExit();
+        run.WaitForExit();
+        return (run.ExitCode, output.Result, error.Result);
+    }
+
+    private JsonElement Result() => JsonDocument.Parse(System.IO.File.ReadAllText(desk.At("out/HV-3107-A/result.json"))).RootElement;
+
+    /// <summary>Stops a search when it has come so far.</summary>
+    private sealed class StopAt(long plans, CancellationTokenSource stop) : IProgress<SearchProgress>
+    {
+        public void Report(SearchProgress value)
+        {
+            if (value.Done >= plans)
+                stop.Cancel();
+        }
+    }
+}
