@@ -39,7 +39,7 @@ public sealed record DecisionComparison(IReadOnlyList<RuleOutcome> Rules, FieldW
         RuleJudging judging = new(application, law, points);
         RuleOutcome[] rules = [.. Usual.Select(usual => usual.Rule == kind
             ? judging.Judge(chosen, true, points)
-            : judging.Judge(usual, false, VerificationPoint.AllOf(application, plan, bands, allocation, usual with { Temperatures = chosen.Temperatures })))];
+            : judging.Judge(usual, false, VerificationPoint.AllOf(application, plan, bands, allocation, usual with { Temperatures = chosen.Temperatures, Promise = chosen.Promise })))];
         return new(rules, FieldWorth.Of(application, law, rules.Single(rule => rule.IsChosen), [.. bands.Nodes.Select(n => n.Allowed.Percent)]));
     }
 }

@@ -68,7 +68,9 @@ internal sealed class RuleJudging
         {
             PointDecision decision = new(
                 point.ProcessMean.Percent, point.ProcessSigma.Percent, point.Uncertainty.Percent / 2, point.Tolerance.Percent);
-            return decision.LargestUncertainty(rules, half => AcceptanceLimits.Of(application.Requirement, point.PressureFraction, half) is var (lower, upper) && lower <= upper);
+            bool accepts(double half) => AcceptanceLimits.Of(application.Requirement, point.PressureFraction, half) is var (lower, upper) && lower <= upper;
+            // Where the rule alone would accept something it is the promise that does not, and no better station helps.
+            return accepts(decision.Tolerance - decision.GuardBandOf(rules)) ? 0 : decision.LargestUncertainty(rules, accepts);
         });
         return needed > 0 ? PercentOfSpan.FromPercent(2 * needed) : null;
     }

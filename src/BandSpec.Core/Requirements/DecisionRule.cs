@@ -1,5 +1,17 @@
 namespace BandSpec.Core.Requirements;
 
+/// <summary>Of whom the design band and its capability are promised when limits are set.</summary>
+public enum Promise
+{
+    /// <summary>Of the population: limits follow from what the process does.</summary>
+    Population,
+
+    /// <summary>
+    /// Of every accepted unit: no limit lies so far out that a unit which reads exactly on it would have less than the capability over lots, anywhere in use.
+    /// </summary>
+    EveryUnit,
+}
+
 /// <summary>How acceptance limits are drawn from tolerances when readings are uncertain.</summary>
 public enum DecisionRule
 {

@@ -127,4 +127,7 @@ public sealed record VerificationRules(double GuardBand, IReadOnlyList<Temperatu
     /// The risk that <see cref="DecisionRule.SpecificRisk"/> or <see cref="DecisionRule.GlobalRisk"/> keeps; <see langword="null"/> for the others.
     /// </summary>
     public double? Risk { get; init; }
+
+    /// <summary>Of whom the band is promised.</summary>
+    public Promise Promise { get; init; }
 }

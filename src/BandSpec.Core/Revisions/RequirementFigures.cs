@@ -139,6 +139,7 @@ internal sealed class RequirementFigures(Requirement requirement, bool regionsBy
         list.Number("test.guard-band", requirement.Test.GuardBand, "", Leeway.LessForProduction);
         if (requirement.Test.Risk is { } risk)
             list.Number("test.risk", risk, "", Leeway.ForProduction);
+        list.Word("test.promise", requirement.Test.Promise);
         list.Text("test.temperatures", requirement.Test.Temperatures is { } given ? string.Join(", ", given) : "auto");
         list.Error("rounding.band", requirement.Rounding.Band, Leeway.ForCustomer);
         list.Error("rounding.limit", requirement.Rounding.Limit, Leeway.LessForProduction);

@@ -45,7 +45,7 @@ public sealed record VerificationPoint
     /// <summary>Half width of the tolerance, <c>L_v</c>: what a good unit may show here.</summary>
     public required PercentOfSpan Tolerance { get; init; }
 
-    /// <summary>Guard band by which the decision rule keeps acceptance inside the tolerance.</summary>
+    /// <summary>Guard band by which decision rule and promise keep acceptance inside the tolerance.</summary>
     public required PercentOfSpan GuardBand { get; init; }
 
     /// <summary>Expanded uncertainty of the test reading, <c>U = 2u_v</c>.</summary>
@@ -75,7 +75,7 @@ public sealed record VerificationPoint
     /// <summary>The same points as another decision rule would have them.</summary>
     internal static IReadOnlyList<VerificationPoint> AllOf(
         Application application, CompensationPlan plan, BandMap bands, Allocation allocation, VerificationRules rules) =>
-        new VerificationTest(application, bands, BandFormulas.Of(application, plan), Multipliers.Of(allocation), rules).Points();
+        new VerificationTest(application, plan, bands, Multipliers.Of(allocation), rules).Points();
 
     private static VerificationRules RulesOf(Application application)
     {

@@ -11,22 +11,29 @@ namespace BandSpec.Core.TestLimits;
 internal sealed class VerificationTest
 {
     private readonly Application application;
+    private readonly CompensationPlan plan;
     private readonly BandMap bands;
     private readonly BandFormulas formulas;
     private readonly Multipliers multipliers;
     private readonly VerificationRules rules;
 
-    public VerificationTest(Application application, BandMap bands, BandFormulas formulas, Multipliers multipliers, VerificationRules rules) =>
-        (this.application, this.bands, this.formulas, this.multipliers, this.rules) = (application, bands, formulas, multipliers, rules);
+    public VerificationTest(Application application, CompensationPlan plan, BandMap bands, Multipliers multipliers, VerificationRules rules)
+    {
+        (this.application, this.plan, this.bands, this.multipliers, this.rules) = (application, plan, bands, multipliers, rules);
+        formulas = BandFormulas.Of(application, plan);
+    }
 
     /// <summary>All points in the order of the test: coldest first, at each temperature rising, then falling.</summary>
     public IReadOnlyList<VerificationPoint> Points()
     {
-        int number = 0;
-        return [.. Places().Select(p => PointAt($"V{++number:00}", p.Temperature, p.Fraction, p.Direction))];
+        TestPlace[] places = [.. Places()];
+        double[]? widest = rules.Promise == Promise.EveryUnit
+            ? EveryUnitLimits.Of(new UnitLaw(application, plan, places, bands.Nodes), bands.Nodes, application.Requirement.Capability.LongRun)
+            : null;
+        return [.. places.Select((place, v) => PointAt($"V{v + 1:00}", place, widest?[v] ?? double.PositiveInfinity))];
     }
 
-    private IEnumerable<(Temperature Temperature, double Fraction, PressureDirection Direction)> Places()
+    private IEnumerable<TestPlace> Places()
     {
         Temperature[] temperatures = [.. Temperatures()];
         Temperature nearest = CompensationPlan.NearestTo(application.Requirement.Temperature.Reference, temperatures);
@@ -34,9 +41,9 @@ internal sealed class VerificationTest
         {
             IReadOnlyList<double> fractions = application.Station.TestPoints.At(t == nearest);
             foreach (double x in fractions)
-                yield return (t, x, PressureDirection.Rising);
+                yield return new(t, x, PressureDirection.Rising);
             foreach (double x in fractions.Reverse().Skip(1))
-                yield return (t, x, PressureDirection.Falling);
+                yield return new(t, x, PressureDirection.Falling);
         }
     }
 
@@ -57,12 +64,14 @@ internal sealed class VerificationTest
         return Temperature.Min(Temperature.Max(rounded, range.Lower), range.Upper);
     }
 
-    private VerificationPoint PointAt(string id, Temperature temperature, double fraction, PressureDirection direction)
+    private VerificationPoint PointAt(string id, TestPlace place, double widest)
     {
+        (Temperature temperature, double fraction, PressureDirection direction) = place;
         Requirement requirement = application.Requirement;
         double tolerance = requirement.RegionsAt(temperature).Min(r => ToleranceAt(fraction, temperature, r));
         (double mean, double sigma) = ProcessAt(fraction, temperature, direction);
-        double standard = StandardUncertainty(fraction), guardBand = new PointDecision(mean, sigma, standard, tolerance).GuardBandOf(rules);
+        double standard = StandardUncertainty(fraction);
+        double guardBand = Math.Max(new PointDecision(mean, sigma, standard, tolerance).GuardBandOf(rules), tolerance - widest);
         (decimal lower, decimal upper) = AcceptanceLimits.Of(requirement, fraction, tolerance - guardBand);
         ConformityRisks risks = ConformityRisk.Of(
             mean, sigma, standard, Interval.Symmetric(tolerance), AcceptanceLimits.InPercent(requirement.Output, fraction, lower, upper));

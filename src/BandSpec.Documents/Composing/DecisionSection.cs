@@ -29,6 +29,7 @@ internal static class DecisionSection
                 "decision.impossible", ("rule", Name(c, r).Plain), ("points", r.Impossible), ("needed", r.Needed)))]);
         yield return c.Section("decision.field-heading");
         yield return new Paragraph(c.Words["decision.field-text"]);
+        yield return new Paragraph(c.Words["decision.promise"]);
         yield return new Facts(
         [
             new Fact(c.Words["decision.any"], Probability(decisions.AnyUnit)), new Fact(c.Words["decision.accepted"], Probability(decisions.AcceptedUnit)),

@@ -114,7 +114,7 @@ internal sealed class PrintViewMaker
         var (rules, capability) = (_requirement.Test, _requirement.Capability);
         string Given(double value) => Shown(Rounded.Given(value));
         return new TestView(
-            DecisionViewMaker.Key(rules.Rule), Given(rules.GuardBand), rules.GuardBand > 0, rules.Risk is { } risk ? Given(100 * risk) : "", Given(capability.Sample), Given(capability.LongRun),
+            DecisionViewMaker.Key(rules.Rule), Given(rules.GuardBand), rules.GuardBand > 0, rules.Risk is { } risk ? Given(100 * risk) : "", rules.Promise == Core.Requirements.Promise.EveryUnit, Given(capability.Sample), Given(capability.LongRun),
             Shown(Rounded.Nearest(3 * capability.Sample, 2)), Shown(Rounded.Nearest(3 * capability.LongRun, 2)),
             Given(_requirement.SafetyFactor), Given(_requirement.Rounding.Band.Percent), Given(_requirement.Rounding.Limit.Percent),
             _specification.Application.Station.ReadingsAveraged.ToString(CultureInfo.InvariantCulture));

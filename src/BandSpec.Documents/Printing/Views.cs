@@ -72,7 +72,7 @@ internal sealed record PointView(
 /// How the test decides: guard band factor, capability criteria with their sigma levels, safety factor, rounding steps in %FS.
 /// </summary>
 internal sealed record TestView(
-    string Rule, string GuardBand, bool Guarded, string Risk, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor,
+    string Rule, string GuardBand, bool Guarded, string Risk, bool EveryUnit, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor,
     string BandStep, string LimitStep, string Readings);
 
 internal sealed record DigestView(string Name, string Digest);

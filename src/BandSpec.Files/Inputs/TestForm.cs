@@ -26,13 +26,18 @@ internal static class TestForm
     private static readonly Key<double> Risk = Key.Optional<double>(
         "risk", new NumberForm(AcceptedRanges.Risk), "The risk that specific-risk or global-risk keeps, such as 0.025.");
 
+    private static readonly Key<Promise> Promised = Key.Optional<Promise>(
+        "promise", new ChoiceForm<Promise>(("population", Promise.Population), ("every-unit", Promise.EveryUnit)),
+        "Of whom the band is promised with the stated capability. population: limits follow from what the process does. every-unit: no acceptance limit lies "
+        + "so far out that a unit which reads exactly on it would have less than the long-run capability anywhere in use. population when left out.");
+
     private static readonly Key<WordOrList<Temperature>> Temperatures = Key.Optional(
         "temperatures",
         new WordOrListForm<Temperature>("auto", new ListForm<Temperature>("verification temperatures", QuantityForms.Temperature, 1, 20)),
         new WordOrList<Temperature>(null), "Verification temperatures, or auto to have them chosen.");
 
     /// <summary>The form of <c>test</c>.</summary>
-    internal static MapForm<VerificationRules> Form { get; } = new("the verification test", [Rule, GuardBand, Risk, Temperatures], Of);
+    internal static MapForm<VerificationRules> Form { get; } = new("the verification test", [Rule, GuardBand, Risk, Promised, Temperatures], Of);
 
     /// <summary>Each rule has its own parameter: the one it needs has to be there, one that it would not look at may not.</summary>
     private static VerificationRules Of(MapValues v)
@@ -41,7 +46,10 @@ internal static class TestForm
         string name = Rules.First(known => known.Rule == rule).Word;
         Judge(v, GuardBand, rule == DecisionRule.Guarded, name);
         Judge(v, Risk, rule is DecisionRule.SpecificRisk or DecisionRule.GlobalRisk, name);
-        return new VerificationRules(v.FindValue(GuardBand) ?? 0, v.Of(Temperatures).Items) { Rule = rule, Risk = v.FindValue(Risk) };
+        return new VerificationRules(v.FindValue(GuardBand) ?? 0, v.Of(Temperatures).Items) 
+        {
+            Rule = rule, Risk = v.FindValue(Risk), Promise = v.FindValue(Promised) ?? Promise.Population,
+        };
     }
 
     private static void Judge(MapValues v, Key<double> parameter, bool isNeeded, string rule)

@@ -50,6 +50,7 @@ public static class LimitsJson
             json.Figure("guard-band", rules.GuardBand);
         if (rules.Risk is { } risk)
             json.Figure("risk", risk);
+        json.WriteString("promise", JudgementJson.Word(rules.Promise));
     }
 
     private static void WriteDerived(Utf8JsonWriter json, DerivedLimit limit, Requirement requirement)

@@ -124,6 +124,33 @@ public sealed class DecisionComparisonTests
         Assert.True(s.Decisions!.Field.AtLimit!.Leaving.Value > s.Decisions.Field.AcceptedUnit.Value);
     }
 
+    /// <summary>
+    /// Promised of every unit, each limit leaves a unit that reads exactly on it the capability over lots everywhere, and one limit at least just that; what such
+    /// a unit is worth rises by orders of magnitude, and more units are rejected.
+    /// </summary>
+    [Fact]
+    public void Promised_of_every_unit_a_unit_on_its_limit_keeps_the_band_with_the_capability()
+    {
+        Specification population = Drafted(0.6, Given.Station, null);
+        Requirement asked = population.Application.Requirement with { Test = population.Application.Requirement.Test with { Promise = Promise.EveryUnit } };
+        Specification everyUnit = SpecificationDraft.Draft(Given.Application(asked), extras: DraftExtras.Decisions);
+        UnitLaw law = new(everyUnit.Application, everyUnit.Choice.Plan, [.. everyUnit.VerificationPoints.Select(TestPlace.Of)], everyUnit.Bands.Nodes);
+        double least = double.PositiveInfinity;
+        foreach ((VerificationPoint p, int v) in everyUnit.VerificationPoints.Select((p, v) => (p, v)))
+            foreach (double reading in new[] { p.Lower, p.Upper }.Select(r => 100 * (r - p.Nominal) / asked.Output.Span))
+                for (int n = 0; n < law.Nodes; n++)
+                    foreach ((int side, int age) in UnitLaw.Sides)
+                    {
+                        LinearError error = law.Given(law.Used(n, side, age), v, reading);
+                        least = Math.Min(least, (everyUnit.Bands.Nodes[n].Design.Percent - error.Mean) / (3 * error.Sigma));
+                    }
+
+        Assert.InRange(least, asked.Capability.LongRun - 1e-9, asked.Capability.LongRun + 0.02);
+        Assert.All(everyUnit.VerificationPoints.Zip(population.VerificationPoints), pair => Assert.True(pair.First.Upper <= pair.Second.Upper && pair.First.Lower >= pair.Second.Lower));
+        Assert.True(everyUnit.Decisions!.Field.AtLimit!.Leaving.Value < population.Decisions!.Field.AtLimit!.Leaving.Value / 10);
+        Assert.True(everyUnit.Decisions.Chosen.Rejected.Value > population.Decisions.Chosen.Rejected.Value);
+    }
+
     private static double Dot(double[] a, double[] b) => a.Zip(b, (x, y) => x * y).Sum();
 
     private static double Error(Rate rate) => Math.Sqrt(rate.DesignEffect * rate.Value * (1 - rate.Value) / rate.Of);

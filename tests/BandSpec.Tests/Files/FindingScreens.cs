@@ -181,6 +181,7 @@ public sealed class FindingScreens
         ("guard-band: 1.0", "decision-rule: global-risk, risk: 0"),
         ("guard-band: 1.0", "decision-rule: global-risk, risk: 2 %"),
         ("guard-band: 1.0", "guard-band: 1, risk: 0.025"),
+        ("guard-band: 1.0", "guard-band: 1.0, promise: each-unit"),
         ("guard-band: 1.0, ", ""));
 
     [Fact]
