@@ -1,4 +1,3 @@
-using BandSpec.Core.Numerics;
 using BandSpec.Core.Numerics.RareEvents;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;

@@ -1,6 +1,5 @@
 using BandSpec.Core.Bands;
 using BandSpec.Core.Numerics;
-using BandSpec.Core.Quantities;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Residuals;
 

@@ -1,6 +1,5 @@
 using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
-using BandSpec.Core.Numerics;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
 using MathNet.Numerics;
