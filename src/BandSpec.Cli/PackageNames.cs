@@ -9,6 +9,9 @@ internal static class PackageNames
     /// <summary>The digests of inputs and outputs.</summary>
     public const string Manifest = "manifest.json";
 
+    /// <summary>Everything that was found.</summary>
+    public const string Result = "result.json";
+
     /// <summary>The limits that production tests against.</summary>
     public const string Limits = "limits.json";
 }

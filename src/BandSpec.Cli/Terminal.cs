@@ -18,6 +18,9 @@ internal sealed record Terminal
     /// <summary>Whether a person watches standard error, so that progress is worth showing.</summary>
     public required bool IsWatched { get; init; }
 
+    /// <summary>How many letters a line of standard error holds; 0 where that is not known.</summary>
+    public Func<int> Width { get; init; } = static () => 0;
+
     /// <summary>The folder that relative paths are counted from.</summary>
     public required string Folder { get; init; }
 
@@ -38,10 +41,23 @@ internal sealed record Terminal
             Error = Writer(Console.OpenStandardError()),
             Ink = new Ink(mayColour && !Console.IsOutputRedirected),
             IsWatched = mayColour && !Console.IsErrorRedirected,
+            Width = WidthOfWindow,
             Folder = Directory.GetCurrentDirectory(),
             Clock = TimeProvider.System,
             Interruption = Cli.Interruption.Listen,
         };
+    }
+
+    private static int WidthOfWindow()
+    {
+        try
+        {
+            return Console.WindowWidth;
+        }
+        catch (IOException)
+        {
+            return 0; // no window
+        }
     }
 
     /// <summary>The output of every machine is UTF-8 with line feeds: what it is piped into should not depend on where it was made.</summary>

@@ -19,6 +19,7 @@ internal static class TryCommand
             ("bandspec try pump.yaml", "a million units; the same seed gives the same figures on every machine"),
             ("bandspec try pump.yaml --set station.soak-gradient=0.5", "what if the oven settled less well"),
             ("bandspec try pump.yaml --sweep safety-factor=1.0..1.5:0.1", "one line a value, with common chance"),
+            ("bandspec try pump.yaml --sweep station.soak-gradient=0..1:0.1 --chart soak.svg", "the same as a chart"),
             ("bandspec try pump.yaml --units 1e9 --part 3/64", "one of 64 parts, for `bandspec gather`"));
         options.AddTo(command);
         command.SetAction((parsed, cancellation) => Task.FromResult((int)Checked(parsed, options, terminal, cancellation)));
@@ -31,7 +32,9 @@ internal static class TryCommand
         {
             TryRequest request = options.RequestOf(parsed);
             if (parsed.GetValue(options.Sweep) is { } sweep)
-                return SweepRun.Run(request, Sweep.Parse(sweep), parsed.GetValue(options.Json), terminal, cancellation);
+                return new SweepRun(request, Sweep.Parse(sweep), terminal).Run(parsed.GetValue(options.Chart), parsed.GetValue(options.Json), cancellation);
+            if (parsed.GetValue(options.Chart) is not null)
+                throw new FormatException("--chart draws a sweep; say what to sweep, such as --sweep safety-factor=1.0..1.5:0.1");
             return Run(request, parsed, options, terminal, cancellation);
         }
         catch (FormatException wrong)

@@ -24,6 +24,9 @@ internal sealed class TryOptions
     /// <summary>A value to be tried over a range.</summary>
     public Option<string?> Sweep { get; } = new("--sweep") { Description = "Try a value over a range, with common random numbers.", HelpName = "PATH=FROM..TO:STEP" };
 
+    /// <summary>Where the chart of a sweep is written.</summary>
+    public Option<string?> Chart { get; } = new("--chart") { Description = "File for the chart of a sweep.", HelpName = "FILE.svg" };
+
     /// <summary>Where the result is written for gathering.</summary>
     public Option<string?> Out { get; } = new("--out") { Description = "File for the part; NUMBER-REVISION.part-K-of-N.json when left out.", HelpName = "FILE" };
 
@@ -37,7 +40,7 @@ internal sealed class TryOptions
     public void AddTo(Command command)
     {
         command.Add(file);
-        foreach (Option option in new Option[] { units, lotSize, seed, part, Out, set, Sweep, threads, Json, Quiet, root })
+        foreach (Option option in new Option[] { units, lotSize, seed, part, Out, set, Sweep, Chart, threads, Json, Quiet, root })
             command.Add(option);
     }
 
@@ -45,15 +48,7 @@ internal sealed class TryOptions
     /// <exception cref="FormatException">An option is not written as it should be.</exception>
     public TryRequest RequestOf(ParseResult parsed)
     {
-        LotOrder order;
-        try
-        {
-            order = LotOrder.For(TryRequest.UnitsOf(parsed.GetValue(units)!), parsed.GetValue(lotSize), parsed.GetValue(seed));
-        }
-        catch (ArgumentOutOfRangeException)
-        {
-            throw new FormatException("a lot has 16 to 100000 units");
-        }
+        LotOrder order = LotOrder.For(TryRequest.UnitsOf(parsed.GetValue(units)!), parsed.GetValue(lotSize), parsed.GetValue(seed));
         if (parsed.GetValue(part) is { } text)
             order = TryRequest.PartOf(order, text);
         return new TryRequest(

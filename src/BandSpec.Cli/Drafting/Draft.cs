@@ -61,12 +61,6 @@ internal sealed record Draft(string File, DraftState State, InputSet? Inputs)
     };
 }
 
-/// <summary>The answer of a package in short.</summary>
-/// <param name="Feasible">Whether a plan fits.</param>
-/// <param name="Margin">The margin.</param>
-/// <param name="Proven">Whether the best plan is proven; not when the search was stopped.</param>
-internal sealed record Verdict(bool Feasible, double Margin, bool Proven);
-
 /// <summary>A package on the disk.</summary>
 /// <param name="Folder">Its folder as the user would name it.</param>
 /// <param name="Files">The names of its files, in order.</param>

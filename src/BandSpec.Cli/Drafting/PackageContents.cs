@@ -19,7 +19,7 @@ internal static class PackageContents
     {
         PackageFile[] records =
         [
-            new("result.json", ResultJson.Write(specification)),
+            new(PackageNames.Result, ResultJson.Write(specification)),
             new(PackageNames.Limits, LimitsJson.Write(specification)),
             new("limits.csv", LimitsCsv.Write(specification)),
         ];

@@ -18,7 +18,7 @@ internal sealed record PackageSource(
 {
     /// <summary>Names that a PDF gives to what it carries besides inputs.</summary>
     private static readonly string[] Taken =
-        ["result.json", PackageNames.Limits, "limits.csv", CarriedInputs.ProvenanceName, ReleaseRecord.FileName];
+        [PackageNames.Result, PackageNames.Limits, "limits.csv", CarriedInputs.ProvenanceName, ReleaseRecord.FileName];
 
     /// <summary>How the package is made, as its manifest says it.</summary>
     public PackageMaking Making => new(Look.Program, Look.Paper.ToString(), Look.Language, Look.Release?.Digest, IsDiagnosed);

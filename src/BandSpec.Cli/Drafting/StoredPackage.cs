@@ -1,5 +1,4 @@
 using System.Security.Cryptography;
-using System.Text.Json;
 using BandSpec.Cli.Opening;
 using BandSpec.Files.Json;
 
@@ -43,16 +42,9 @@ internal sealed class StoredPackage
     {
         try
         {
-            using JsonDocument result = JsonDocument.Parse(BoundedFile.Read(Path.Combine(folder, "result.json")));
-            JsonElement margin = result.RootElement.GetProperty("margin");
-            // A plan that the requirement pins is not proven best itself: whether the search came to its end stands with what it found instead.
-            JsonElement searched = result.RootElement.TryGetProperty("optimum", out JsonElement optimum) ? optimum : result.RootElement.GetProperty("plan");
-            bool isCut = result.RootElement.TryGetProperty("diagnosis-complete", out JsonElement complete) && !complete.GetBoolean();
-            return isCut || !searched.GetProperty("proven").GetBoolean() ? null : new Verdict(
-                result.RootElement.GetProperty("feasible").GetBoolean(), margin.ValueKind == JsonValueKind.Null ? double.PositiveInfinity : margin.GetDouble(),
-                Proven: true);
+            return Drafting.Verdict.Read(BoundedFile.Read(Path.Combine(folder, PackageNames.Result))) is { Proven: true } verdict ? verdict : null;
         }
-        catch (Exception unreadable) when (unreadable is IOException or JsonException or InvalidOperationException or KeyNotFoundException)
+        catch (IOException)
         {
             return null;
         }

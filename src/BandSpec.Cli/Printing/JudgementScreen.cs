@@ -160,6 +160,7 @@ internal static class JudgementScreen
         ReadingFault.AmbiguousPoint => "whose direction is not said where both are tested",
         ReadingFault.NotANumber => "with text where the reading belongs",
         ReadingFault.OtherUnit => "in another unit, or a thousandfold off as if it were",
+        ReadingFault.BeyondMeasure => "more than ten thousand spans off, which no instrument shows",
         ReadingFault.Duplicate => "with a point that its unit has already; the first stands",
         _ => "counted at their point only: too many units to follow each",
     };

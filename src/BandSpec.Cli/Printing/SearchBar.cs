@@ -16,14 +16,14 @@ internal sealed class SearchBar : IProgress<SearchProgress>, IDisposable
     private readonly string name;
     private readonly StatusLine line;
     private readonly long begun;
-    private SearchProgress last;
-    private long lapBegun;
+    private readonly Pace pace;
 
     private SearchBar(Terminal terminal, string name)
     {
         (this.terminal, this.name) = (terminal, name);
         line = new StatusLine(terminal, TimeSpan.FromMilliseconds(100));
-        begun = lapBegun = terminal.Clock.GetTimestamp();
+        begun = terminal.Clock.GetTimestamp();
+        pace = new Pace(terminal.Clock);
     }
 
     /// <summary>Runs a search under a bar.</summary>
@@ -49,14 +49,12 @@ internal sealed class SearchBar : IProgress<SearchProgress>, IDisposable
     /// <summary>Called one at a time.</summary>
     private string LineOf(SearchProgress value)
     {
-        if (value.Done < last.Done || value.Total != last.Total)
-            lapBegun = last.Total == 0 ? begun : terminal.Clock.GetTimestamp();
-        last = value;
         double part = Math.Clamp((double)value.Done / Math.Max(1, value.Total), 0, 1);
         if (value.OfChanges)
             return $"{name} {StatusLine.Bar(part)} no plan fits; {value.Done} of {value.Total} kinds of change looked at that would make one fit";
+        string left = pace.Left(value.Done, value.Total) is { } time ? $"{StatusLine.Written(time)} left at this pace, " : "";
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"{name} {StatusLine.Bar(part)} {value.Done:N0} of {value.Total:N0} plans, {StatusLine.Left(terminal.Clock.GetElapsedTime(lapBegun), part)} left at this pace; Ctrl-C keeps the best so far");
+            $"{name} {StatusLine.Bar(part)} {left}{value.Done:N0} of {value.Total:N0} plans; Ctrl-C keeps the best so far");
     }
 }

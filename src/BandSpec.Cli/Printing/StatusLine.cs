@@ -24,7 +24,7 @@ internal sealed class StatusLine(Terminal terminal, TimeSpan pause) : IDisposabl
         try
         {
             Volatile.Write(ref drawn, terminal.Clock.GetTimestamp());
-            string line = text();
+            string line = Cut(text());
             longest = Math.Max(longest, line.Length);
             terminal.Error.Write($"\r{line.PadRight(longest)}");
         }
@@ -41,6 +41,9 @@ internal sealed class StatusLine(Terminal terminal, TimeSpan pause) : IDisposabl
             terminal.Error.Write($"\r{new string(' ', longest)}\r");
     }
 
+    /// <summary>A line that ran on to the next could not be taken away.</summary>
+    private string Cut(string line) => terminal.Width() is var width and > 1 && line.Length >= width ? line[..(width - 1)] : line;
+
     /// <summary>A part of a whole as a bar.</summary>
     public static string Bar(double part)
     {
@@ -49,14 +52,13 @@ internal sealed class StatusLine(Terminal terminal, TimeSpan pause) : IDisposabl
     }
 
     /// <summary>The time that the rest takes at the pace so far, such as <c>12 s</c>.</summary>
-    public static string Left(TimeSpan elapsed, double part)
+    public static string Left(TimeSpan elapsed, double part) => Written(part > 0 ? elapsed * ((1 - part) / part) : TimeSpan.Zero);
+
+    /// <summary>A time in the unit that suits it.</summary>
+    public static string Written(TimeSpan time) => time.TotalSeconds switch
     {
-        double seconds = part > 0 ? elapsed.TotalSeconds * (1 - part) / part : 0;
-        return seconds switch
-        {
-            < 90 => string.Create(CultureInfo.InvariantCulture, $"{seconds:0} s"),
-            < 5400 => string.Create(CultureInfo.InvariantCulture, $"{seconds / 60:0} min"),
-            _ => string.Create(CultureInfo.InvariantCulture, $"{seconds / 3600:0.0} h"),
-        };
-    }
+        < 90 => string.Create(CultureInfo.InvariantCulture, $"{time.TotalSeconds:0} s"),
+        < 5400 => string.Create(CultureInfo.InvariantCulture, $"{time.TotalMinutes:0} min"),
+        _ => string.Create(CultureInfo.InvariantCulture, $"{time.TotalHours:0.0} h"),
+    };
 }

@@ -10,8 +10,8 @@ internal static class SweepScreen
 {
     private static readonly CultureInfo Plain = CultureInfo.InvariantCulture;
 
-    /// <summary>The table.</summary>
-    public static string Of(Sweep sweep, IReadOnlyList<SweepStep> steps, Ink ink)
+    /// <summary>The table, and where the chart is when there is one.</summary>
+    public static string Of(Sweep sweep, IReadOnlyList<SweepStep> steps, string? chart, Ink ink)
     {
         StringBuilder screen = new("\n");
         int width = Math.Max(sweep.Path.Length, steps.Count > 0 ? steps.Max(step => step.Value.Length) : 0) + 2;
@@ -19,7 +19,8 @@ internal static class SweepScreen
         double longest = steps.Where(step => double.IsFinite(step.Margin)).Select(step => step.Margin).Append(1).Max();
         foreach (SweepStep step in steps)
             screen.Append(Plain, $"{step.Value.PadRight(width)}{Line(step)}{Bar(step.Margin, longest, ink)}\n");
-        return screen.Append("\nEvery value was specified and tried anew with the same chance, so that the differences are not noise.\n").ToString();
+        screen.Append("\nEvery value was specified and tried anew with the same chance, so that the differences are not noise.\n");
+        return (chart is null ? screen : screen.Append(Plain, $"Chart     {chart}\n")).ToString();
     }
 
     /// <summary>The table for programs.</summary>
@@ -35,7 +36,7 @@ internal static class SweepScreen
                 return;
             item.Figure("margin", step.Margin);
             item.Figure("cost-per-unit", step.CostPerUnit);
-            item.Figure("yield", report.Steps[^3].Through.Value);
+            item.Figure("yield", step.Yield!.Value);
             item.Figure("good-rejected", report.GoodRejected.Value);
             item.Figure("accepted-leaving", report.AcceptedLeaving.Value);
             item.Figure("leaving-probability", leaving.AnyUnit.Value);
@@ -47,7 +48,7 @@ internal static class SweepScreen
         ? step.Findings > 0 ? $"{step.Findings} finding{(step.Findings == 1 ? "" : "s")}; `bandspec check` shows them" : "stopped"
         : string.Create(
             Plain,
-            $"{step.Margin,6:0.000}{step.CostPerUnit,9:0.00}{100 * report.Steps[^3].Through.Value,10:0.000} %{100 * report.GoodRejected.Value,14:0.000} %{LotFigures.Probability(leaving.AnyUnit.Value),19}{LotFigures.Probability(leaving.AcceptedUnit.Value),14}  ");
+            $"{step.Margin,6:0.000}{step.CostPerUnit,9:0.00}{100 * step.Yield,10:0.000} %{100 * report.GoodRejected.Value,14:0.000} %{LotFigures.Probability(leaving.AnyUnit.Value),19}{LotFigures.Probability(leaving.AcceptedUnit.Value),14}  ");
 
     private static string Bar(double margin, double longest, Ink ink)
     {

@@ -42,6 +42,10 @@ internal sealed class CarriedPackage
         }
     }
 
+    /// <summary>Whether the draft was stopped before its proof: what it found by then depends on when that was, and cannot be found again.</summary>
+    public bool WasStopped =>
+        files.TryGetValue(PackageNames.Result, out ReadOnlyMemory<byte> result) && Verdict.Read(result) is { Proven: false };
+
     /// <summary>The release record that it carries; null for a draft, or when the chain is broken.</summary>
     public ReleaseRecord? Record() =>
         files.TryGetValue(ReleaseRecord.FileName, out ReadOnlyMemory<byte> bytes) ? ReleaseRecord.Read(InputContent.Of(name, bytes), out _) : null;

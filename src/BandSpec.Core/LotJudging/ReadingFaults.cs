@@ -21,6 +21,9 @@ public enum ReadingFault
     /// <summary>The reading is in another unit, or looks a thousandfold off as if it were.</summary>
     OtherUnit,
 
+    /// <summary>The reading is farther from its nominal output than ten thousand spans: no instrument shows it, and no sum of squares should hold it.</summary>
+    BeyondMeasure,
+
     /// <summary>This unit has a reading of this point already; the first one stands.</summary>
     Duplicate,
 

@@ -13,6 +13,9 @@ internal sealed class ReadingTaker(LotCollector collector, ReadingLayout layout,
     /// <summary>An error that large makes a mixed-up unit worth asking for, %FS.</summary>
     private const double Absurd = 100;
 
+    /// <summary>Error in percent of span that no instrument shows.</summary>
+    private const double BeyondMeasure = 1e6;
+
     private readonly PointFinder points = new(collector.Limits);
     private readonly CultureInfo culture = layout.Culture;
 
@@ -56,9 +59,10 @@ internal sealed class ReadingTaker(LotCollector collector, ReadingLayout layout,
 
     private void Add(long line, ReadOnlySpan<char> serial, ReadOnlySpan<char> lot, int point, double value, ReadOnlySpan<char> text)
     {
-        if (Math.Abs(collector.Limits.ErrorOf(point, value)) > Absurd && LooksThousandfold(point, value))
+        double error = Math.Abs(collector.Limits.ErrorOf(point, value));
+        if (error > Absurd && (LooksThousandfold(point, value) || !(error <= BeyondMeasure)))
         {
-            Note(ReadingFault.OtherUnit, line, text);
+            Note(error <= BeyondMeasure ? ReadingFault.OtherUnit : ReadingFault.BeyondMeasure, line, text);
             return;
         }
 

@@ -34,19 +34,19 @@ internal sealed class Desk : IDisposable
         Write(path, File.ReadAllText(At(path)).Replace(old, replacement, StringComparison.Ordinal));
 
     /// <summary>What a run printed and ended with; the folder's own path is shown as <c>DESK</c>.</summary>
-    public (int ExitCode, string Out, string Error) Run(params string[] arguments) => Run(CancellationToken.None, arguments);
+    public (int ExitCode, string Out, string Error) Run(params string[] arguments) => RunUntil(arguments, CancellationToken.None);
 
     /// <summary>The same when the user has pressed Ctrl-C at once.</summary>
-    public (int ExitCode, string Out, string Error) RunStopped(params string[] arguments) => Run(new CancellationToken(canceled: true), arguments);
+    public (int ExitCode, string Out, string Error) RunStopped(params string[] arguments) => RunUntil(arguments, new CancellationToken(canceled: true));
 
     /// <summary>The same when the user presses Ctrl-C after a second.</summary>
     public (int ExitCode, string Out, string Error) RunStoppedSoon(params string[] arguments)
     {
         using CancellationTokenSource soon = new(TimeSpan.FromSeconds(1));
-        return Run(soon.Token, arguments);
+        return RunUntil(arguments, soon.Token);
     }
 
-    private (int ExitCode, string Out, string Error) Run(CancellationToken interruption, string[] arguments)
+    private (int ExitCode, string Out, string Error) RunUntil(string[] arguments, CancellationToken interruption)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
         int code = CommandLine.Run(arguments, new Terminal

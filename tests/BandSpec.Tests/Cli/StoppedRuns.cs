@@ -36,9 +36,12 @@ public sealed class StoppedRuns : IDisposable
     }
 
     [Fact]
-    public void A_package_that_was_stopped_is_not_up_to_date_and_is_not_released()
+    public void A_package_that_was_stopped_is_neither_verified_nor_up_to_date_nor_released()
     {
         desk.RunStoppedSoon("draft", File);
+        (int verified, string told, _) = desk.Run("verify", "out/HV-3107-A");
+        Assert.Equal(1, verified);
+        Assert.Contains("its draft was stopped before the proof, so that it cannot be made again; draft it once more", told, StringComparison.Ordinal);
         Assert.DoesNotContain("up to date", desk.RunStoppedSoon("draft", File).Out, StringComparison.Ordinal);
         Assert.Equal((1, "", "bandspec: stopped; nothing was written\n"), desk.RunStoppedSoon("release", File, "--by", "N. Aas"));
         Assert.False(System.IO.File.Exists(desk.At("releases.json")));

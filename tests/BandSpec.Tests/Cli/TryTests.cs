@@ -67,6 +67,21 @@ public sealed class TryTests : IDisposable
     }
 
     [Fact]
+    public void A_sweep_is_drawn_when_a_file_is_named()
+    {
+        (int code, string output, string error) = desk.Run(
+            "try", "brine-reinjection.yaml", "--units", "400", "--lot-size", "40", "--sweep", "safety-factor=1.1..1.3:0.1", "--chart", "charts/safety.svg");
+
+        Assert.Equal((0, ""), (code, error));
+        Assert.EndsWith("Chart     charts/safety.svg\n", output, StringComparison.Ordinal);
+        string chart = File.ReadAllText(desk.At("charts/safety.svg"));
+        Assert.Matches(@"3\svalues of safety-factor from 1\.1\sto\s1\.3: the margin goes from", chart);
+        Assert.Equal(
+            (2, "", "bandspec: --chart draws a sweep; say what to sweep, such as --sweep safety-factor=1.0..1.5:0.1\n"),
+            desk.Run("try", "brine-reinjection.yaml", "--chart", "safety.svg"));
+    }
+
+    [Fact]
     public void A_change_shows_and_the_rest_of_the_chance_stays()
     {
         double Yield(params string[] change)
@@ -85,7 +100,7 @@ public sealed class TryTests : IDisposable
     [InlineData("--sweep", "safety-factor=1..2", "bandspec: `safety-factor=1..2`: a sweep is written PATH=FROM..TO:STEP, such as safety-factor=1.0..1.5:0.1\n")]
     [InlineData("--units", "many", "bandspec: `many`: units are a whole number from 1 to 1e12\n")]
     [InlineData("--part", "3/2", "bandspec: `3/2`: a part is written PART/PARTS, such as 3/64, with at most as many parts as lots (2500)\n")]
-    [InlineData("--lot-size", "3", "bandspec: a lot has 16 to 100000 units\n")]
+    [InlineData("--lot-size", "3", "bandspec: `3`: --lot-size takes a whole number from 16 to 100000\nbandspec: see `bandspec try --help`\n")]
     public void What_makes_no_sense_is_refused_with_what_would(string option, string value, string message) =>
         Assert.Equal((2, "", message), desk.Run("try", "brine-reinjection.yaml", option, value));
 

@@ -27,7 +27,12 @@ internal static class SampleCharts
         new("Figure 5", "Dwell profile", "Bars of the dwell profile.", new DwellChart("Temperature, °C", "Dwell, %", Dwell), "dwell.svg"),
         new("Figure 6", "Cost against margin and rms error", "Stairs of margin and rms error over cost.", Front, "front.svg"),
         new("Figure 7", "Cost against margin", "Stairs of margin over cost.", Front with { Errors = [] }, "front-margin.svg"),
+        new("Figure 8", "A sweep", "Margin, yield and chance over a figure.", Sweep, "sweep.svg"),
     ];
+
+    private static SweepChart Sweep => new(
+        new("station.soak-gradient", "Margin", "Accepted, %", "Chance of leaving", "Closed form", "Counted", "Sampled", "Needed"),
+        [new(0, 1.2), new(0.5, 1.0), new(1, 0.8)], [new(0, 99.9), new(0.5, 99.2), new(1, 92)], [new(0, 0), new(0.5, 3e-9), new(1, 2e-4)]);
 
     private static FrontChart Front => new(
         new("Cost, EUR a unit", "Margin", "Rms error, %FS", "Best for the money", "Fits", "Falls short", "Taken by the draft", "Needed"),

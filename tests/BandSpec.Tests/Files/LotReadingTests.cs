@@ -77,15 +77,18 @@ public sealed class LotReadingTests
             B,V02,3.01 bar
             B,V02,3010 mV
             B,V03,
+            C,V01,1e308
+            C,V02,-1e9
             """);
         Assert.Equal(
             [
                 "MissingCell 9 A,V02", "NoSerial 6 ", "UnknownPoint 4 V99", "NotANumber 5 n/a", "NotANumber 12 ", "OtherUnit 7 3010", "OtherUnit 10 3.01 bar",
+                "BeyondMeasure 13 1e308", "BeyondMeasure 14 -1e9",
                 "Duplicate 3 A, V01",
             ],
             collector.Faults.All.SelectMany(f => f.Places.Select(p => $"{f.Kind} {p.Line} {p.Text}")));
         // `3.01 mV` says its unit, so it is taken at its word: 0.00301 V, far off and a failure.
-        Assert.Equal((3, 11, 2), (collector.Readings, report.Lines, report.Converted));
+        Assert.Equal((3, 13, 2), (collector.Readings, report.Lines, report.Converted));
     }
 
     [Fact]
