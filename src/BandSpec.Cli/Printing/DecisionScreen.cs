@@ -19,7 +19,7 @@ internal static class DecisionScreen
         StringBuilder screen = new();
         screen.Append(Plain, $"\n{ink.Bold(identity.FolderName)}  {identity.Title}\n\n");
         screen.Append(TableOf(decisions, ink)).Append('\n');
-        screen.Append(ink.Faint("Risks in millionths of all units made (JCGM 106:2012), of the whole unit to about 3 %; cost of rejects spread over all units made.\n* the rule of the requirement")).Append("\n\n");
+        screen.Append(ink.Faint("Risks in millionths of all units made (JCGM 106:2012), of the whole unit to about 3 %, very small ones more coarsely;\ncost of rejects spread over all units made.\n* the rule of the requirement")).Append("\n\n");
         foreach (RuleOutcome rule in decisions.Rules.Where(r => r.Impossible.Count > 0))
         {
             string needed = rule.UncertaintyNeeded is { } u

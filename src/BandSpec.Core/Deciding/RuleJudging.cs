@@ -57,7 +57,7 @@ internal sealed class RuleJudging
         if (known.Find(test => test.Limits.AsSpan().SequenceEqual(limits)) is { Limits: not null } same)
             return (same.Rejected, same.Consumer);
         EstimatedProbability rejected = Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2));
-        EstimatedProbability consumer = Integration.Of(beyond, events.ReadingsWithSteps(points));
+        EstimatedProbability consumer = Integration.Of(beyond, events.TestedReadings(points));
         known.Add((limits, rejected, consumer));
         return (rejected, consumer);
     }

@@ -12,15 +12,15 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
     private const int Standards = 2;
 
     /// <summary>
-    /// That what a unit truly shows is beyond the tolerance at some test place. The output's step at each place enters what is shown and what is read
-    /// there, so each is a number of its own behind those of the unit.
+    /// That what a unit truly shows is beyond the tolerance at some test place. Behind the numbers of the unit stand those of its test: the output's step
+    /// at each place, each reading's noise, the standard's two. What is accepted although beyond is so by these, and the integration has to lean on them.
     /// </summary>
     public HalfSpaces BeyondTolerance(IReadOnlyList<VerificationPoint> points)
     {
-        HalfSpaces events = new(law.Dimensions + points.Count, 0);
+        HalfSpaces events = new(TestedDimensions(points), 0);
         for (int v = 0; v < points.Count; v++)
             foreach (int side in new[] { -1, 1 })
-                Add(events, WithStep(v, points.Count), side, points[v].Tolerance.Percent, -1);
+                Add(events, Tested(v, points.Count, isRead: false), side, points[v].Tolerance.Percent, -1);
         return events;
     }
 
@@ -57,19 +57,13 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
         return events;
     }
 
-    /// <summary>The test readings by which a unit is accepted, about the numbers of the unit alone: the output's steps are noise then.</summary>
-    public Readings Readings(IReadOnlyList<VerificationPoint> points) => ReadingsOf(points, law.Dimensions, v => law.Shown(v));
-
-    /// <summary>The same readings about the numbers of <see cref="BeyondTolerance"/>.</summary>
-    public Readings ReadingsWithSteps(IReadOnlyList<VerificationPoint> points) =>
-        ReadingsOf(points, law.Dimensions + points.Count, v => WithStep(v, points.Count));
-
-    private Readings ReadingsOf(IReadOnlyList<VerificationPoint> points, int dimensions, Func<int, LinearError> shownAt)
+    /// <summary>The test readings by which a unit is accepted, about the numbers of the unit alone: all that the test adds is noise then.</summary>
+    public Readings Readings(IReadOnlyList<VerificationPoint> points)
     {
-        Readings readings = new(dimensions, law.ReadingErrors(0).CommonZero);
+        Readings readings = new(law.Dimensions, law.ReadingErrors(0).CommonZero);
         for (int v = 0; v < points.Count; v++)
         {
-            LinearError shown = shownAt(v);
+            LinearError shown = law.Shown(v);
             (double own, _, double common) = law.ReadingErrors(v);
             Interval accepted = AcceptedAt(points[v]);
             readings.Add(
@@ -79,11 +73,29 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
         return readings;
     }
 
-    private LinearError WithStep(int place, int places)
+    /// <summary>The same readings about the numbers of <see cref="BeyondTolerance"/>, which leave no noise.</summary>
+    public Readings TestedReadings(IReadOnlyList<VerificationPoint> points)
+    {
+        Readings readings = new(TestedDimensions(points), 0);
+        for (int v = 0; v < points.Count; v++)
+        {
+            LinearError read = Tested(v, points.Count, isRead: true);
+            Interval accepted = AcceptedAt(points[v]);
+            readings.Add(read.Weights, new Reading(read.Mean, accepted.Lower, accepted.Upper, 0, 0));
+        }
+
+        return readings;
+    }
+
+    private int TestedDimensions(IReadOnlyList<VerificationPoint> points) => law.Dimensions + (2 * points.Count) + Standards;
+
+    private LinearError Tested(int place, int places, bool isRead)
     {
         LinearError shown = law.Shown(place);
-        double[] weights = [.. shown.Weights, .. new double[places]];
+        double[] weights = [.. shown.Weights, .. new double[(2 * places) + Standards]];
         weights[law.Dimensions + place] = shown.Own;
+        if (isRead)
+            (weights[law.Dimensions + places + place], weights[^2], weights[^1]) = law.ReadingErrors(place);
         return new(shown.Mean, weights, 0);
     }
 
