@@ -151,6 +151,44 @@ public sealed class DecisionComparisonTests
         Assert.True(everyUnit.Decisions.Chosen.Rejected.Value > population.Decisions.Chosen.Rejected.Value);
     }
 
+    /// <summary>
+    /// Units drawn one by one, tested with the output's steps as normal errors, and counted: beyond a tolerance and accepted, within all and rejected.
+    /// </summary>
+    [Fact]
+    public void Risks_of_the_unit_are_what_counting_finds()
+    {
+        Requirement stepped = Narrow.Value.Application.Requirement with { Output = Given.Requirement.Output with { Step = 5.0 / 16384, Resolution = "14 bit" }, Test = new VerificationRules(0, null) };
+        Specification s = SpecificationDraft.Draft(Given.Application(stepped), extras: DraftExtras.Decisions);
+        UnitLaw law = new(s.Application, s.Choice.Plan, [.. s.VerificationPoints.Select(TestPlace.Of)], s.Bands.Nodes);
+        (LinearError Shown, (double Own, double Zero, double Common) Reading, VerificationPoint Point)[] test =
+            [.. s.VerificationPoints.Select((p, v) => (law.Shown(v), law.ReadingErrors(v), p))];
+        Random random = new(11);
+        double next() => Numerics.Draws.Normal(random);
+        const int Units = 150_000;
+        (int consumer, int producer) = (0, 0);
+        for (int unit = 0; unit < Units; unit++)
+        {
+            double[] x = [.. Enumerable.Range(0, law.Dimensions).Select(_ => next())];
+            (double zero, double common) = (next(), next());
+            (bool within, bool accepted) = (true, true);
+            foreach ((LinearError shown, (double Own, double Zero, double Common) reading, VerificationPoint p) in test)
+            {
+                double truth = shown.Mean + Dot(shown.Weights, x) + (shown.Own * next());
+                double read = p.Nominal + ((truth + (reading.Own * next()) + (reading.Zero * zero) + (reading.Common * common)) * stepped.Output.Span / 100);
+                within &= Math.Abs(truth) <= p.Tolerance.Percent;
+                accepted &= read >= p.Lower && read <= p.Upper;
+            }
+
+            consumer += !within && accepted ? 1 : 0;
+            producer += within && !accepted ? 1 : 0;
+        }
+
+        static double error(int count) => Math.Sqrt(count) / Units;
+        Assert.True(consumer > 20 && producer > 200, $"{consumer} and {producer} say too little");
+        Counted((double)consumer / Units, error(consumer), s.Decisions!.Chosen.Consumer);
+        Counted((double)producer / Units, error(producer), s.Decisions.Chosen.Producer);
+    }
+
     private static double Dot(double[] a, double[] b) => a.Zip(b, (x, y) => x * y).Sum();
 
     private static double Error(Rate rate) => Math.Sqrt(rate.DesignEffect * rate.Value * (1 - rate.Value) / rate.Of);
