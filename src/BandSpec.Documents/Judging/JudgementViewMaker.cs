@@ -113,7 +113,7 @@ internal sealed class JudgementViewMaker(LotJudgement judged, IReadOnlyList<Judg
 
     private FaultView Of((ReadingFault Kind, long Count, IReadOnlyList<FaultPlace> Places) fault) => new(
         Key(fault.Kind), Whole(fault.Count),
-        string.Join(", ", fault.Places.Take(PlacesShown).Select(p => string.Create(CultureInfo.InvariantCulture, $"{Printable(p.File)}:{p.Line}")))
+        string.Join(", ", fault.Places.Take(PlacesShown).Select(p => string.Create(CultureInfo.InvariantCulture, $"{Printable(Path.GetFileName(p.File))}:{p.Line}")))
         + (fault.Count > PlacesShown ? " …" : ""));
 
     /// <summary>Serials, names and headings come from files: what no font has, or no page can show, becomes a question mark.</summary>
