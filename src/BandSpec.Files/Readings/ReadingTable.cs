@@ -21,6 +21,8 @@ internal sealed class ReadingTable
     private readonly FoundFaults faults = new(InputFile.Readings);
     private readonly ReadingsFormat format;
     private readonly List<HeaderCell> header = [];
+    private readonly HashSet<ReadingField> condemned = [];
+    private ReadingRow heading = new(1, []);
 
     private ReadingTable(InputContent content, ReadingsFormat format)
     {
@@ -74,6 +76,13 @@ internal sealed class ReadingTable
     internal void Complain(ReadingRow row, ReadingField field, string rule, string found, string accepted) =>
         faults.Add(row.ExtentOf(IndexOf(field)), field.Name, rule, found, accepted);
 
+    /// <summary>Adds a finding about a whole column, once, at its name in the header.</summary>
+    internal void ComplainOfColumn(ReadingField field, string rule, string found, string accepted)
+    {
+        if (condemned.Add(field))
+            Complain(heading, field, rule, found, accepted);
+    }
+
     private void ReadRows(IReadOnlyList<ReadingField[]> needed, Action<ReadingRow> take)
     {
         int skipped = text.Lines.TakeWhile(line => line.StartsWith('#') || line.Length == 0).Count();
@@ -94,7 +103,11 @@ internal sealed class ReadingTable
             if (header.Count > 0 && cells.Any(cell => cell.Trim().Length > 0))
                 TakeRow(new ReadingRow(row.LineNumberFrom + skipped, cells), take);
             else if (header.Count == 0)
+            {
+                heading = new ReadingRow(skipped + 1, cells);
                 header.AddRange(cells.Select(HeaderCell.Of));
+            }
+
             if (!hasAll && !(hasAll = HasAll(needed, skipped + 1)))
                 return;
         }
