@@ -30,7 +30,8 @@ internal sealed class FamilyStatistics(MeasuredFamily family, CharacterizationSc
         MeasuredFamily used = scope.KeepSuspects ? family : clean;
         if (found)
             fit = SpreadFit.Of(used.Sample(columns), columns, restricted: true);
-        return new StatisticsReport(used, columns, Correlated(fit, columns), scope).With(support.LeftOut, selection.Steps, strangers, slips);
+        return new StatisticsReport(used, columns, Correlated(fit, columns), scope)
+            .With([.. support.LeftOut, .. selection.LeftOut], selection.Steps, strangers, slips);
     }
 
     private DegreeSelection Selection(MeasuredFamily clean, Support support) => new(clean, support.Columns, scope.PinnedDegrees);

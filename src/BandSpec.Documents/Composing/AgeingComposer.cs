@@ -29,7 +29,7 @@ internal static class AgeingComposer
     {
         yield return new Heading(1, "1", "Drift");
         yield return new Paragraph(
-            $"Drift after {found.Scope.TestDuration} at {found.Scope.TestTemperature}; brackets hold {Figures.Short(100 * found.Scope.Confidence)} % intervals.");
+            $"Drift after {found.Scope.TestDuration} at {found.Scope.TestTemperature}; brackets hold {Figures.Given(100 * found.Scope.Confidence)} % intervals.");
         yield return new Table("Table 1", "Drift of the family",
             [new Column("Figure"), new Column("Mean"), new Column("Spread")],
             [
@@ -72,6 +72,6 @@ internal static class AgeingComposer
             [new Column("Storage"), new Column("Time"), new Column("Pressure fraction", Align.Decimal), new Column("Units", Align.Decimal), new Column("Mean drift", Align.Decimal, Percent)],
             [.. found.Drifts.GroupBy(d => (d.Storage, d.Stored, d.PressureFraction)).OrderBy(g => g.Key.Storage.Celsius).ThenBy(g => g.Key.Stored.Hours)
                 .ThenBy(g => g.Key.PressureFraction).Select(g => new Row(
-                    [g.Key.Storage.ToString(), g.Key.Stored.ToString(), Figures.Short(g.Key.PressureFraction), Figures.Whole(g.Count()), Figures.Short(g.Average(d => d.Drift))]))]);
+                    [g.Key.Storage.ToString(), g.Key.Stored.ToString(), Figures.Given(g.Key.PressureFraction), Figures.Whole(g.Count()), Figures.Short(g.Average(d => d.Drift))]))]);
     }
 }

@@ -22,6 +22,7 @@ public sealed class CharacterizationTests
         Assert.Empty(found.SuspectUnits);
         Assert.Empty(found.SuspectReadings);
         Assert.All(found.DegreeSteps, step => Assert.Equal(step.Kept, step.Gain > 0));
+        Assert.Contains(found.LeftOut, term => term.Term == "bow.1" && term.Reason.EndsWith("by Schwarz' criterion", StringComparison.Ordinal));
     }
 
     [Fact]

@@ -25,9 +25,9 @@ public sealed class CharacterizeTests : IDisposable
             ["characterize", "steel-cell-40.csv", .. Range, "--platform", "cell.yaml", "--report", "report", "--name", "SK-40 steel cell"]);
 
         Assert.Equal((0, ""), (code, error));
-        Snapshot.Match(output + "\n" + File.ReadAllText(desk.At("cell.yaml")));
+        Snapshot.Match(output + "\n" + desk.Text("cell.yaml"));
         Assert.Equal(
-            ["characterization.json", "characterization.md", "characterization.pdf", "raw-span.svg", "raw-zero.svg", "residuals.svg"],
+            ["characterization.json", "characterization.md", "characterization.pdf", "raw-span.svg", "raw-zero.svg", "residuals-pressure.svg", "residuals.svg"],
             Directory.EnumerateFiles(desk.At("report")).Select(Path.GetFileName).Order(StringComparer.Ordinal));
     }
 
@@ -35,7 +35,7 @@ public sealed class CharacterizeTests : IDisposable
     public void A_platform_keeps_its_name_and_ratings_and_age_touches_nothing_but_ageing()
     {
         desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--quiet"]);
-        string characterized = File.ReadAllText(desk.At("platforms/steel-cell-40.yaml"));
+        string characterized = desk.Text("platforms/steel-cell-40.yaml");
         Assert.Contains("platform: { name: SK-40 welded steel cell, revision: 4 }", characterized, StringComparison.Ordinal);
         Assert.Contains("burst-factor: 5", characterized, StringComparison.Ordinal);
 
@@ -44,10 +44,35 @@ public sealed class CharacterizeTests : IDisposable
 
         Assert.Equal((0, ""), (code, error));
         Snapshot.Match(output);
-        string aged = File.ReadAllText(desk.At("platforms/steel-cell-40.yaml"));
+        string aged = desk.Text("platforms/steel-cell-40.yaml");
         Assert.Equal(Before(characterized, "ageing:"), Before(aged, "# Drift of 60 units"));
         Assert.Contains("    activation-energy-error: ", aged, StringComparison.Ordinal);
         Assert.Equal((0, ""), (desk.Run("check", "brine-reinjection.yaml", "--quiet").ExitCode, desk.Run("check", "brine-reinjection.yaml", "--quiet").Out));
+    }
+
+    [Fact]
+    public void New_statistics_leave_what_a_person_wrote_about_the_rest()
+    {
+        string file = "platforms/steel-cell-40.yaml";
+        desk.Change(file, "platform:", "# yaml-language-server: $schema=platform.schema.json\nplatform:");
+        desk.Change(file, "pressure: {", "pressure: # as rated by the design office\n  {");
+        desk.Change(file, "ageing:", "# Drift from the tests of two years.\nageing:   # taken over from the older cell");
+        string before = desk.Text(file);
+        desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", file, "--quiet"]);
+        string after = desk.Text(file);
+        Assert.StartsWith("# yaml-language-server: $schema=platform.schema.json\n# Statistics of 46 units", after, StringComparison.Ordinal);
+        Assert.Contains("pressure: # as rated by the design office\n  {", after, StringComparison.Ordinal);
+        Assert.Contains(before[before.IndexOf("# Drift from", StringComparison.Ordinal)..].TrimEnd(), after, StringComparison.Ordinal);
+        Assert.Equal((0, ""), (desk.Run("check", "brine-reinjection.yaml", "--quiet").ExitCode, desk.Run("check", "brine-reinjection.yaml", "--quiet").Out));
+    }
+
+    [Fact]
+    public void Ageing_that_stood_in_for_a_test_does_not_say_at_what_temperature_the_drift_is_stated()
+    {
+        desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "cell.yaml", "--quiet"]);
+        Assert.Contains("test: { temperature: 25 °C", desk.Text("cell.yaml"), StringComparison.Ordinal);
+        desk.Run(["age", "steel-cell-40-storage.csv", .. Range, "--platform", "cell.yaml", "--quiet"]);
+        Assert.Contains("test: { temperature: 105 °C, duration: 1000 h }", desk.Text("cell.yaml"), StringComparison.Ordinal);
     }
 
     [Fact]
