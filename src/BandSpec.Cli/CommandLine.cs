@@ -73,6 +73,7 @@ internal static class CommandLine
         root.Add(DraftCommand.Create(terminal));
         root.Add(CheckCommand.Create(terminal));
         root.Add(TradeoffCommand.Create(terminal));
+        root.Add(RulesCommand.Create(terminal));
         root.Add(CompareCommand.Create(terminal));
         root.Add(ReleaseCommand.Create(terminal));
         root.Add(VerifyCommand.Create(terminal));

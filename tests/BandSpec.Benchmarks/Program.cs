@@ -15,6 +15,9 @@ switch (args.FirstOrDefault())
     case "documents":
         DocumentBenchmark.Run(root);
         return 0;
+    case "judging":
+        JudgingBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
+        return 0;
     case "rare":
         RareBenchmark.Run(Demos.Draft(root, "brine-reinjection"));
         return 0;
@@ -32,6 +35,7 @@ switch (args.FirstOrDefault())
             usage: BandSpec.Benchmarks lots [ROOT]               units made a second beside a NumPy twin
                    BandSpec.Benchmarks plans [ROOT]              the plan search beside a NumPy loop, and its growth
                    BandSpec.Benchmarks documents [ROOT]          how long the documents take
+                   BandSpec.Benchmarks judging [ROOT]            ten million readings read and judged
                    BandSpec.Benchmarks rare [ROOT]               the estimate of a rare event
                    BandSpec.Benchmarks characterize [SECONDS]    the nested model against lme4, which is given so many seconds
                    BandSpec.Benchmarks coverage [REPETITIONS]    how often the intervals of a characterization hold the truth

@@ -2,6 +2,9 @@ using System.CommandLine;
 using System.Text;
 using BandSpec.Cli.Judging;
 using BandSpec.Cli.Printing;
+using BandSpec.Core.LotJudging;
+using BandSpec.Documents;
+using BandSpec.Documents.Templates;
 using BandSpec.Files.Json;
 
 namespace BandSpec.Cli.Commands;
@@ -21,6 +24,7 @@ internal static class JudgeCommand
         Option<string?> output = new("--out") { Description = "Folder for the judgement; otherwise out/NUMBER-REVISION-judgement.", HelpName = "DIR" };
         Option<bool> strict = new("--strict") { Description = "Refuse readings of which any line is at fault." };
         Option<bool> proven = new("--proven") { Description = "Answer no unless every capability is proven, not only met." };
+        LookOptions look = new();
         (Option<bool> json, Option<bool> quiet) = (CommonOptions.Json(), CommonOptions.Quiet());
         TaughtCommand command = new(
             "judge", "Holds the readings of a lot against limits: capability at every point and of every derived figure, each unit, and what would prove it.",
@@ -30,13 +34,15 @@ internal static class JudgeCommand
         {
             limits, readings, output, strict, proven, json, quiet,
         };
+        look.AddTo(command);
         command.SetAction(parsed => (int)Run(
             JudgeRun.Run(parsed.GetRequiredValue(limits), parsed.GetRequiredValue(readings), terminal),
-            new Wishes(parsed.GetValue(output), parsed.GetValue(strict), parsed.GetValue(proven), parsed.GetValue(json), parsed.GetValue(quiet)), terminal));
+            new Wishes(parsed.GetValue(output), parsed.GetValue(strict), parsed.GetValue(proven), parsed.GetValue(json), parsed.GetValue(quiet),
+                look.Of(parsed, parsed.GetRequiredValue(limits), terminal)), terminal));
         return command;
     }
 
-    private sealed record Wishes(string? Out, bool Strict, bool Proven, bool Json, bool Quiet);
+    private sealed record Wishes(string? Out, bool Strict, bool Proven, bool Json, bool Quiet, DocumentOptions Look);
 
     private static ExitCode Run(Judgement judgement, Wishes wishes, Terminal terminal)
     {
@@ -53,11 +59,25 @@ internal static class JudgeCommand
         }
 
         string folder = wishes.Out ?? Path.Combine("out", $"{judged.Limits.Specification}-judgement");
-        IReadOnlyList<string> files = JudgementFolder.Write(Path.GetFullPath(folder, terminal.Folder), judged, judgement.Reports);
+        IReadOnlyList<string> files = Written(folder, judged, judgement, wishes.Look, terminal);
         if (wishes.Json)
             terminal.Out.Write(Encoding.UTF8.GetString(JudgementJson.Write(judged, judgement.Reports).Span));
         else if (!wishes.Quiet)
             terminal.Out.Write(JudgementScreen.Of(judged, judgement.Reports, folder, files, terminal.Ink));
         return (wishes.Proven ? judged.IsProven : judged.IsMet) ? ExitCode.Done : ExitCode.AnswerIsNo;
+    }
+
+    /// <summary>A mistake in the user's own words is the user's to mend, like a finding.</summary>
+    private static IReadOnlyList<string> Written(string folder, LotJudgement judged, Judgement judgement, DocumentOptions look, Terminal terminal)
+    {
+        DateOnly today = DateOnly.FromDateTime(terminal.Clock.GetLocalNow().DateTime);
+        try
+        {
+            return JudgementFolder.Write(Path.GetFullPath(folder, terminal.Folder), judged, judgement.Reports, today, look);
+        }
+        catch (TemplateException fault)
+        {
+            throw new RefusalException(fault.Message, ExitCode.Findings);
+        }
     }
 }

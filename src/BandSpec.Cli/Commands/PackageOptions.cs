@@ -1,6 +1,5 @@
 using System.CommandLine;
 using BandSpec.Cli.Drafting;
-using BandSpec.Documents;
 
 namespace BandSpec.Cli.Commands;
 
@@ -12,17 +11,7 @@ internal sealed class PackageOptions
         Description = "Folder for the packages; `out` when left out.", DefaultValueFactory = _ => "out", HelpName = "DIR",
     };
 
-    private readonly Option<string?> templates = new("--templates")
-    {
-        Description = "Folder of your own templates; otherwise `templates` in the project, if there is one.", HelpName = "DIR",
-    };
-
-    private readonly Option<string> language = new("--language")
-    {
-        Description = "Language of the documents.", DefaultValueFactory = _ => "en", HelpName = "en|de",
-    };
-
-    private readonly Option<Paper> paper = PaperOption.Create();
+    private readonly LookOptions look = new();
     private readonly Option<string?> root = CommonOptions.Root();
     private readonly Option<bool> diagnose = new("--diagnose")
     {
@@ -32,13 +21,13 @@ internal sealed class PackageOptions
     /// <summary>Adds all of them to a command.</summary>
     public void AddTo(Command command)
     {
-        foreach (Option option in new Option[] { output, templates, language, paper, root, diagnose })
-            command.Add(option);
+        command.Add(output);
+        look.AddTo(command);
+        command.Add(root);
+        command.Add(diagnose);
     }
 
     /// <summary>A run with what the command line says.</summary>
     public DraftRun RunOf(ParseResult parsed, Terminal terminal) => new(
-        terminal, new DraftFolders(parsed.GetValue(output)!, parsed.GetValue(root), parsed.GetValue(templates)),
-        new DocumentOptions { Program = CommandLine.Program, Language = parsed.GetValue(language)!, Paper = parsed.GetValue(paper) },
-        parsed.GetValue(diagnose));
+        terminal, new DraftFolders(parsed.GetValue(output)!, parsed.GetValue(root), look.TemplatesIn(parsed)), look.Of(parsed), parsed.GetValue(diagnose));
 }

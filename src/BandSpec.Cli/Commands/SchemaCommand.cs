@@ -16,12 +16,13 @@ internal static class SchemaCommand
         ("station", () => InputSchemas.Write(InputFile.Station)),
         ("result", () => OutputSchemas.Result),
         ("limits", () => OutputSchemas.Limits),
+        ("judgement", () => OutputSchemas.Judgement),
     ];
 
     /// <summary>The command.</summary>
     public static Command Create(Terminal terminal)
     {
-        Argument<string> kind = new("KIND") { Description = "Which file: requirement, platform, station, result or limits." };
+        Argument<string> kind = new("KIND") { Description = "Which file: requirement, platform, station, result, limits or judgement." };
         kind.AcceptOnlyFromAmong([.. Kinds.Select(known => known.Kind)]);
         TaughtCommand command = new(
             "schema", "Writes the JSON Schema of an input or output file to standard output.",

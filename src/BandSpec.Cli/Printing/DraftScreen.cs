@@ -39,7 +39,8 @@ internal static class DraftScreen
         BandNode worst = specification.Bands.Worst;
         Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
         string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
-        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red(specification.Optimum.Proven ? "NOT FEASIBLE" : "NO PLAN FOUND"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        bool isPinned = specification.Application.Requirement.Compensation.Pinned is not null;
+        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red(specification.Optimum.Proven || isPinned ? "NOT FEASIBLE" : "NO PLAN FOUND"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Optimum.Proven ? ProofWords.Of(specification) : ink.Yellow(ProofWords.Of(specification));
         screen.Append(Plain, $"{proof}; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
         if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })

@@ -10,12 +10,12 @@ namespace BandSpec.Core.Planning;
 internal sealed class ChangeSearch
 {
     private readonly PossibleChange change;
-    private readonly List<CompensationPlan> known;
+    private readonly List<KnownPlan> known;
 
     private readonly CancellationToken cancellation;
 
     private ChangeSearch(PossibleChange change, CompensationPlan known, CancellationToken cancellation) =>
-        (this.change, this.known, this.cancellation) = (change, [known], cancellation);
+        (this.change, this.known, this.cancellation) = (change, [new KnownPlan(change, known)], cancellation);
 
     /// <summary>The smallest change of every kind, side by side; only those that were found when the search is ended early.</summary>
     public static (IReadOnlyList<SingleChange> Found, bool IsComplete) AllOf(
@@ -77,59 +77,18 @@ internal sealed class ChangeSearch
 
     private SingleChange Answer(int? steps) => new(
         change.Key, change.Region, change.Before, steps is { } s ? change.At(s) : null, change.At(change.Steps), Math.Abs(change.Step), change.Unit,
-        steps is { } found ? known.LastOrDefault(p => Fits(p, found)) : null);
+        steps is { } found ? known.LastOrDefault(p => p.Fits(found))?.Plan : null);
 
     /// <summary>The fewest steps, of at most a number, after which a known plan fits; more than that when none does.</summary>
-    private int LeastForKnown(int most)
-    {
-        int best = most + 1;
-        foreach (CompensationPlan plan in known.Where(p => Fits(p, most)))
-        {
-            int fails = -1, fits = Math.Min(best, most);
-            if (!Fits(plan, fits))
-                continue;
-            while (fits - fails > 1)
-            {
-                int middle = (fits + fails) / 2;
-                if (Fits(plan, middle))
-                    fits = middle;
-                else
-                    fails = middle;
-            }
-
-            best = fits;
-        }
-
-        return best;
-    }
+    private int LeastForKnown(int most) => known.Aggregate(most + 1, (best, plan) => Math.Min(best, plan.Least(Math.Min(best, most))));
 
     private bool IsFeasibleAfter(int steps)
     {
-        if (known.Any(p => Fits(p, steps)))
+        if (known.Any(p => p.Fits(steps)))
             return true;
-        if (change.After(steps) is not { } changed)
+        if (change.After(steps) is not { } changed || PlanChoosing.Feasible(new PlanSearch(changed), cancellation) is not { } plan)
             return false;
-        var search = new PlanSearch(changed);
-        known.Add(PlanChoosing.Climbed(search));
-        if (Fits(known[^1], steps))
-            return true;
-        if (PlanChoosing.Feasible(search, cancellation) is not { } plan)
-            return false;
-        known.Add(plan);
+        known.Add(new KnownPlan(change, plan));
         return true;
-    }
-
-    /// <summary>Whether a plan, with the pressures it has, is a candidate after the change and keeps every allowance.</summary>
-    private bool Fits(CompensationPlan plan, int steps)
-    {
-        if (change.After(steps) is not { } changed)
-            return false;
-        OperatingTemperature range = changed.Requirement.Temperature;
-        CompensationScope scope = changed.Requirement.Compensation;
-        bool isCandidate = plan.Temperatures.Count <= scope.MostTemperatures
-            && plan.Temperatures.All(CandidateTemperatures.Of(scope, range).Contains)
-            && (plan.Temperatures[0] - range.Lower).Kelvin <= scope.Reach.Kelvin + 1e-9
-            && (range.Upper - plan.Temperatures[^1]).Kelvin <= scope.Reach.Kelvin + 1e-9;
-        return isCandidate && ContinuousMargin.AllOf(changed, plan).All(r => r.Margin >= 1 - PlanChoosing.Shortfall);
     }
 }

@@ -89,7 +89,7 @@ internal sealed class FrontSearch(PlanSearch search, IProgress<SearchProgress>? 
 
             if (winner is null || cancellation.IsCancellationRequested)
                 return null;
-            CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
+            CompensationPlan plan = search.Tables.PlanOf(winner);
             IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(search.Tables.Application, plan);
             double least = everywhere.Min(r => r.Margin);
             List<NodePlace> shortOf =

@@ -28,6 +28,9 @@ internal sealed class ObjectiveSearch
     /// <summary>The plans in the running when the search that decided had ended; nothing before.</summary>
     public Shortlist? Shortlist { get; private set; }
 
+    /// <summary>The plan that searches begin with, found by climbing.</summary>
+    public Contender Start => start.Value;
+
     private PlanFamilies Families => search.Tables.Families;
 
     /// <summary>The best plan by an objective; when none is feasible, the one of largest margin.</summary>

@@ -33,7 +33,7 @@ internal static class PlanChoosing
         for (int round = 1; ; round++)
         {
             answer = answer is null ? search.Run(objective, added, cancellation) : search.RunAgain(answer, objective, added, cancellation);
-            CompensationPlan plan = search.Tables.PlanOf(answer.Winner.List, answer.Winner.Zero, answer.Winner.Span);
+            CompensationPlan plan = search.Tables.PlanOf(answer.Winner);
             IReadOnlyList<ContinuousMargin> everywhere = ContinuousMargin.AllOf(application, plan);
             List<NodePlace> shortOf = [.. Violated(everywhere, answer.Winner.Margin).Where(p => !added.Contains(p))];
             bool holds = shortOf.Count == 0;
@@ -67,10 +67,10 @@ internal static class PlanChoosing
     }
 
     /// <summary>A good plan, found quickly and without proof.</summary>
-    public static CompensationPlan Climbed(PlanSearch search)
+    private static CompensationPlan Climbed(PlanSearch search)
     {
         Contender top = new PlanAscent(search.Tables, new MarginScore(search.Tables, []), search.Rms).Climb();
-        return search.Tables.PlanOf(top.List, top.Zero, top.Span);
+        return search.Tables.PlanOf(top);
     }
 
     /// <summary>
@@ -80,19 +80,21 @@ internal static class PlanChoosing
     public static CompensationPlan? Feasible(PlanSearch search, CancellationToken cancellation = default)
     {
         List<NodePlace> added = [];
-        while (new ObjectiveSearch(search, added, cancellation).Feasible() is { } winner && !cancellation.IsCancellationRequested)
+        IEnumerable<NodePlace> ShortOf(CompensationPlan plan) =>
+            ContinuousMargin.AllOf(search.Tables.Application, plan).Where(r => r.Margin < 1 - Shortfall).Select(r => r.Worst).Where(p => !added.Contains(p));
+        while (true)
         {
-            CompensationPlan plan = search.Tables.PlanOf(winner.List, winner.Zero, winner.Span);
-            List<NodePlace> shortOf =
-            [
-                .. ContinuousMargin.AllOf(search.Tables.Application, plan).Where(r => r.Margin < 1 - Shortfall).Select(r => r.Worst).Where(p => !added.Contains(p)),
-            ];
-            if (shortOf.Count == 0)
+            var round = new ObjectiveSearch(search, added, cancellation);
+            if (added.Count == 0 && round.Start.Margin >= 1 && search.Tables.PlanOf(round.Start) is var climbed && !ShortOf(climbed).Any())
+                return climbed;
+            if (round.Feasible() is not { } winner || cancellation.IsCancellationRequested)
+                return null;
+            CompensationPlan plan = search.Tables.PlanOf(winner);
+            NodePlace[] shortOf = [.. ShortOf(plan)];
+            if (shortOf.Length == 0)
                 return plan;
             added.AddRange(shortOf);
         }
-
-        return null;
     }
 
     /// <summary>The plan that the requirement pins, judged between the nodes as well; nothing when it pins none.</summary>

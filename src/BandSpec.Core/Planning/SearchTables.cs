@@ -69,6 +69,9 @@ internal sealed class SearchTables
         [.. list.Select(i => Families.Candidates[i])], zeroDegree, spanDegree,
         Application.Requirement.Temperature.Reference, Application.Station.PressurePoints);
 
+    /// <summary>The plan of a contender.</summary>
+    public CompensationPlan PlanOf(Contender contender) => PlanOf(contender.List, contender.Zero, contender.Span);
+
     private CandidateReadings CandidateOf(Temperature temperature, Platform platform, Station station)
     {
         ScaledTemperature place = PlaceOf(temperature);

@@ -21,6 +21,9 @@ public static class AcceptedRanges
     /// <summary>Guard band in multiples of the expanded uncertainty.</summary>
     public static AcceptedRange GuardBand { get; } = new(0, 3, "");
 
+    /// <summary>The risk that a decision rule keeps: half is that of simple acceptance at the limit itself.</summary>
+    public static AcceptedRange Risk { get; } = new(0, 0.5, "") { IsAbove = true };
+
     /// <summary>Steps of rounding.</summary>
     public static AcceptedRange RoundingStep { get; } = new(0.0001, 1, "%FS");
 

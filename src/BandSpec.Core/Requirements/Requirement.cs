@@ -113,6 +113,21 @@ public sealed record FurtherTerm(string Name, PercentOfSpan Bound, PercentOfSpan
 public sealed record RoundingSteps(PercentOfSpan Band, PercentOfSpan Limit);
 
 /// <summary>What the requirement says about the verification test.</summary>
-/// <param name="GuardBand">The guard band in multiples of the expanded uncertainty <c>U</c> (k = 2): 0 is simple acceptance.</param>
+/// <param name="GuardBand">
+/// The guard band in multiples of the expanded uncertainty <c>U</c> (k = 2) for <see cref="DecisionRule.Guarded"/>, where 0 is simple acceptance;
+/// 0 for the other rules.
+/// </param>
 /// <param name="Temperatures">The verification temperatures, rising; <see langword="null"/> to have them chosen.</param>
-public sealed record VerificationRules(double GuardBand, IReadOnlyList<Temperature>? Temperatures);
+public sealed record VerificationRules(double GuardBand, IReadOnlyList<Temperature>? Temperatures)
+{
+    /// <summary>How acceptance limits are drawn.</summary>
+    public DecisionRule Rule { get; init; } = DecisionRule.Guarded;
+
+    /// <summary>
+    /// The risk that <see cref="DecisionRule.SpecificRisk"/> or <see cref="DecisionRule.GlobalRisk"/> keeps; <see langword="null"/> for the others.
+    /// </summary>
+    public double? Risk { get; init; }
+
+    /// <summary>Of whom the band is promised.</summary>
+    public Promise Promise { get; init; }
+}

@@ -32,6 +32,7 @@ internal static class RequirementRules
         if (requirement.FurtherTerms is { } further)
             TermRules.Judge(further, requirement.HeldTerms ?? [], findings);
         findings.InRange("test.guard-band", requirement.Test?.GuardBand, AcceptedRanges.GuardBand);
+        findings.InRange("test.risk", requirement.Test?.Risk, AcceptedRanges.Risk);
         JudgeRounding(requirement, findings);
     }
 

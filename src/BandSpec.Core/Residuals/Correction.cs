@@ -74,6 +74,16 @@ internal sealed class Correction
         return (zero * zero) + (proportional * proportional);
     }
 
+    /// <summary>
+    /// What one standard deviation of each independent error of the compensation run does to the residue: each reading's own, then the standard's zero
+    /// and proportional error. Their squares add up to <see cref="CarriedVariance"/> and <see cref="StandardVariance"/>.
+    /// </summary>
+    public double[] RunWeights(Residue residue, Station station) =>
+    [
+        .. residue.Weights.Zip(readingVariance, (w, v) => -w * Math.Sqrt(v)),
+        -station.StandardZero.Percent * residue.Weights.Sum(), -station.StandardProportional.Percent * Vectors.Dot(residue.Weights, fractions),
+    ];
+
     /// <summary><c>u_T² E[(∂raw/∂T)²]</c> with <c>E[s²] = (dᵀā)² + dᵀΣ_w d</c>: variance of a reading before the temperature has settled.</summary>
     public static double SoakVariance(RawError raw, Station station, double x, double tau)
     {

@@ -135,7 +135,11 @@ internal sealed class RequirementFigures(Requirement requirement, bool regionsBy
 
     private void ListTest()
     {
+        list.Word("test.decision-rule", requirement.Test.Rule);
         list.Number("test.guard-band", requirement.Test.GuardBand, "", Leeway.LessForProduction);
+        if (requirement.Test.Risk is { } risk)
+            list.Number("test.risk", risk, "", Leeway.ForProduction);
+        list.Word("test.promise", requirement.Test.Promise);
         list.Text("test.temperatures", requirement.Test.Temperatures is { } given ? string.Join(", ", given) : "auto");
         list.Error("rounding.band", requirement.Rounding.Band, Leeway.ForCustomer);
         list.Error("rounding.limit", requirement.Rounding.Limit, Leeway.LessForProduction);

@@ -1,5 +1,6 @@
 using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
+using BandSpec.Core.Deciding;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
@@ -43,6 +44,9 @@ public sealed record Specification
 
     /// <summary>The points of the verification test.</summary>
     public required IReadOnlyList<VerificationPoint> VerificationPoints { get; init; }
+
+    /// <summary>Every decision rule beside the others, and what accepted units are worth; <see langword="null"/> unless it was asked for.</summary>
+    public DecisionComparison? Decisions { get; init; }
 
     /// <summary>
     /// Why the answer is what it is and, when no plan fits, what would make one fit; <see langword="null"/> unless it was asked for.

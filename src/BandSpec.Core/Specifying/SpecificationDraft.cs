@@ -1,5 +1,6 @@
 using BandSpec.Core.Allocating;
 using BandSpec.Core.Bands;
+using BandSpec.Core.Deciding;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.TestLimits;
@@ -46,6 +47,7 @@ public static class SpecificationDraft
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
             Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum, progress, cancellation) : null,
+            Decisions = extras.HasFlag(DraftExtras.Decisions) ? DecisionComparison.Of(application, choice.Plan, bands, allocation) : null,
             Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
         };
     }
@@ -67,9 +69,12 @@ public enum DraftExtras
     /// <summary>What a small change of each input does to the margin.</summary>
     Gains = 4,
 
+    /// <summary>Every decision rule beside the others, and what accepted units are worth in the field.</summary>
+    Decisions = 8,
+
     /// <summary>What a package has unless more is asked for.</summary>
-    Usual = DiagnosisOfNo,
+    Usual = DiagnosisOfNo | Decisions,
 
     /// <summary>Everything there is.</summary>
-    All = Diagnosis | DiagnosisOfNo | Gains,
+    All = Diagnosis | DiagnosisOfNo | Gains | Decisions,
 }

@@ -45,7 +45,7 @@ public sealed record VerificationPoint
     /// <summary>Half width of the tolerance, <c>L_v</c>: what a good unit may show here.</summary>
     public required PercentOfSpan Tolerance { get; init; }
 
-    /// <summary>Guard band <c>g·U</c> by which acceptance stays inside the tolerance.</summary>
+    /// <summary>Guard band by which decision rule and promise keep acceptance inside the tolerance.</summary>
     public required PercentOfSpan GuardBand { get; init; }
 
     /// <summary>Expanded uncertainty of the test reading, <c>U = 2u_v</c>.</summary>
@@ -70,5 +70,16 @@ public sealed record VerificationPoint
     /// <param name="allocation">How the allowed error was shared out.</param>
     public static IReadOnlyList<VerificationPoint> AllOf(
         Application application, CompensationPlan plan, BandMap bands, Allocation allocation) =>
-        new VerificationTest(application, bands, BandFormulas.Of(application, plan), Multipliers.Of(allocation)).Points();
+        AllOf(application, plan, bands, allocation, RulesOf(application));
+
+    /// <summary>The same points as another decision rule would have them.</summary>
+    internal static IReadOnlyList<VerificationPoint> AllOf(
+        Application application, CompensationPlan plan, BandMap bands, Allocation allocation, VerificationRules rules) =>
+        new VerificationTest(application, plan, bands, Multipliers.Of(allocation), rules).Points();
+
+    private static VerificationRules RulesOf(Application application)
+    {
+        ArgumentNullException.ThrowIfNull(application);
+        return application.Requirement.Test;
+    }
 }

@@ -11,21 +11,29 @@ namespace BandSpec.Core.TestLimits;
 internal sealed class VerificationTest
 {
     private readonly Application application;
+    private readonly CompensationPlan plan;
     private readonly BandMap bands;
     private readonly BandFormulas formulas;
     private readonly Multipliers multipliers;
+    private readonly VerificationRules rules;
 
-    public VerificationTest(Application application, BandMap bands, BandFormulas formulas, Multipliers multipliers) =>
-        (this.application, this.bands, this.formulas, this.multipliers) = (application, bands, formulas, multipliers);
+    public VerificationTest(Application application, CompensationPlan plan, BandMap bands, Multipliers multipliers, VerificationRules rules)
+    {
+        (this.application, this.plan, this.bands, this.multipliers, this.rules) = (application, plan, bands, multipliers, rules);
+        formulas = BandFormulas.Of(application, plan);
+    }
 
     /// <summary>All points in the order of the test: coldest first, at each temperature rising, then falling.</summary>
     public IReadOnlyList<VerificationPoint> Points()
     {
-        int number = 0;
-        return [.. Places().Select(p => PointAt($"V{++number:00}", p.Temperature, p.Fraction, p.Direction))];
+        TestPlace[] places = [.. Places()];
+        double[]? widest = rules.Promise == Promise.EveryUnit
+            ? EveryUnitLimits.Of(new UnitLaw(application, plan, places, bands.Nodes), bands.Nodes, application.Requirement.Capability.LongRun)
+            : null;
+        return [.. places.Select((place, v) => PointAt($"V{v + 1:00}", place, widest?[v] ?? double.PositiveInfinity))];
     }
 
-    private IEnumerable<(Temperature Temperature, double Fraction, PressureDirection Direction)> Places()
+    private IEnumerable<TestPlace> Places()
     {
         Temperature[] temperatures = [.. Temperatures()];
         Temperature nearest = CompensationPlan.NearestTo(application.Requirement.Temperature.Reference, temperatures);
@@ -33,9 +41,9 @@ internal sealed class VerificationTest
         {
             IReadOnlyList<double> fractions = application.Station.TestPoints.At(t == nearest);
             foreach (double x in fractions)
-                yield return (t, x, PressureDirection.Rising);
+                yield return new(t, x, PressureDirection.Rising);
             foreach (double x in fractions.Reverse().Skip(1))
-                yield return (t, x, PressureDirection.Falling);
+                yield return new(t, x, PressureDirection.Falling);
         }
     }
 
@@ -46,7 +54,7 @@ internal sealed class VerificationTest
     private IEnumerable<Temperature> Temperatures()
     {
         OperatingTemperature range = application.Requirement.Temperature;
-        return (application.Requirement.Test.Temperatures ?? [range.Lower, range.Reference, range.Upper, WholeDegrees(bands.Worst.Temperature, range)])
+        return (rules.Temperatures ?? [range.Lower, range.Reference, range.Upper, WholeDegrees(bands.Worst.Temperature, range)])
             .Distinct().Order();
     }
 
@@ -56,13 +64,15 @@ internal sealed class VerificationTest
         return Temperature.Min(Temperature.Max(rounded, range.Lower), range.Upper);
     }
 
-    private VerificationPoint PointAt(string id, Temperature temperature, double fraction, PressureDirection direction)
+    private VerificationPoint PointAt(string id, TestPlace place, double widest)
     {
+        (Temperature temperature, double fraction, PressureDirection direction) = place;
         Requirement requirement = application.Requirement;
         double tolerance = requirement.RegionsAt(temperature).Min(r => ToleranceAt(fraction, temperature, r));
-        double standard = StandardUncertainty(fraction), guardBand = requirement.Test.GuardBand * 2 * standard;
-        (decimal lower, decimal upper) = AcceptanceLimits.Of(requirement, fraction, tolerance - guardBand);
         (double mean, double sigma) = ProcessAt(fraction, temperature, direction);
+        double standard = StandardUncertainty(fraction);
+        double guardBand = Math.Max(new PointDecision(mean, sigma, standard, tolerance).GuardBandOf(rules), tolerance - widest);
+        (decimal lower, decimal upper) = AcceptanceLimits.Of(requirement, fraction, tolerance - guardBand);
         ConformityRisks risks = ConformityRisk.Of(
             mean, sigma, standard, Interval.Symmetric(tolerance), AcceptanceLimits.InPercent(requirement.Output, fraction, lower, upper));
         return new VerificationPoint

@@ -43,7 +43,7 @@ internal sealed record FrontChart(FrontWords Words, IReadOnlyList<FrontSpot> Mar
         var plot = ChartStyle.NewPlot();
         double pad = Math.Max(0.04 * (Dearest - Cheapest), 0.01 * Dearest), end = Dearest + pad;
         plot.Axes.Add(ChartStyle.Axis(AxisPosition.Bottom, Cheapest - pad, end));
-        plot.Axes.Add(Tier(Margins.Select(s => s.Figure).Append(Needed).Append(Taken.Y), Upper, Errors.Count == 0 ? 0 : 0.47, 1));
+        plot.Axes.Add(Tier(Margins.Select(s => s.Figure).Append(Needed).Append(Taken.Y), Upper, Errors.Count == 0 ? 0 : 0.47, 1, 0.16));
         AddStairs(plot, Margins, Upper, end);
         plot.Annotations.Add(new LineAnnotation
         {
@@ -51,7 +51,7 @@ internal sealed record FrontChart(FrontWords Words, IReadOnlyList<FrontSpot> Mar
             LineStyle = LineStyle.DashDot,
         });
         if (Errors.Count == 0) return plot;
-        plot.Axes.Add(Tier(Errors.Select(s => s.Figure), Lower, 0, 0.34));
+        plot.Axes.Add(Tier(Errors.Select(s => s.Figure), Lower, 0, 0.34, 0.42));
         AddStairs(plot, Errors, Lower, end);
         return plot;
     }
@@ -67,11 +67,12 @@ internal sealed record FrontChart(FrontWords Words, IReadOnlyList<FrontSpot> Mar
         Mark(pen, plot, Errors, Lower, above: false);
     }
 
-    private static LinearAxis Tier(IEnumerable<double> figures, string key, double start, double end)
+    // The room below is that of the numbers, where they stand below.
+    private static LinearAxis Tier(IEnumerable<double> figures, string key, double start, double end, double below)
     {
         var all = figures.ToList();
-        var pad = Math.Max(0.16 * (all.Max() - all.Min()), 1e-3 * Math.Abs(all.Max()));
-        var axis = ChartStyle.Axis(AxisPosition.Left, all.Min() - pad, all.Max() + pad);
+        var height = Math.Max(all.Max() - all.Min(), 5e-3 * Math.Abs(all.Max()));
+        var axis = ChartStyle.Axis(AxisPosition.Left, all.Min() - below * height, all.Max() + 0.16 * height);
         (axis.Key, axis.StartPosition, axis.EndPosition) = (key, start, end);
         return axis;
     }

@@ -37,7 +37,8 @@ internal sealed class SvgPen : ChartPen
         Element($"<polygon points=\"{Points(outline)}\" fill=\"{Colour(fill)}\"{(edge is null ? "" : Edge(edge))}/>");
 
     public override void Write(ScreenPoint at, string text, Face face, double size, OxyColor ink) =>
-        Element($"<text x=\"{F(at.X)}\" y=\"{F(at.Y)}\" font-size=\"{F(size)}\"{Weight(face)} fill=\"{Colour(ink)}\">{Safe(text)}</text>");
+        Element(
+            $"<text x=\"{F(at.X)}\" y=\"{F(at.Y)}\" font-size=\"{F(size)}\"{Weight(face)}{Length(text, face, size)} fill=\"{Colour(ink)}\">{Safe(text)}</text>");
 
     protected override void BeginClip(OxyRect area)
     {
@@ -48,6 +49,10 @@ internal sealed class SvgPen : ChartPen
     }
 
     protected override void EndClip() => Element("</g>");
+
+    /// <summary>The width that the text was placed by, so that it keeps its room in whatever font a reader has.</summary>
+    private static string Length(string text, Face face, double size) =>
+        text.Length == 0 ? "" : $" textLength=\"{F(Typeface.Of(face).Width(text, size))}\" lengthAdjust=\"spacingAndGlyphs\"";
 
     private void Element(string text) => _body.Append(text).Append('\n');
 

@@ -49,7 +49,8 @@ internal static class LimitsLayouts
         ("format", "bandspec/limits/1"),
         ("specification", ViewForTemplates.Of(view.Identity)),
         ("feasible", view.Verdict.Feasible), ("standing", view.Standing),
-        ("decision_rule", ViewForTemplates.Script(("guard_band", Plain(view.Test.GuardBand, view)))),
+        ("decision_rule", ViewForTemplates.Script(
+            ("rule", view.Test.Rule), ("guard_band", Plain(view.Test.GuardBand, view)), ("risk", Plain(view.Test.Risk, view)))),
         ("sample_criterion", Plain(view.Test.Sample, view)),
         ("long_run_criterion", Plain(view.Test.LongRun, view)),
         ("pressure_unit", view.Range.Unit), ("output_unit", view.Output.Unit),

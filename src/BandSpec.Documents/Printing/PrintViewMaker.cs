@@ -38,6 +38,7 @@ internal sealed class PrintViewMaker
         {
             Sample = Sample(platform.Sample),
             Optimum = new PlanViews(_specification, _sign).Optimum,
+            Decisions = _specification.Decisions is { Rules: [{ Points.Count: > 0 }, ..] } decisions ? new DecisionViewMaker(decisions, _sign).Make() : null,
             Diagnosis = new DiagnosisViews(_specification, Regions, _sign).Diagnosis,
         };
     }
@@ -113,7 +114,7 @@ internal sealed class PrintViewMaker
         var (rules, capability) = (_requirement.Test, _requirement.Capability);
         string Given(double value) => Shown(Rounded.Given(value));
         return new TestView(
-            Given(rules.GuardBand), rules.GuardBand > 0, Given(capability.Sample), Given(capability.LongRun),
+            DecisionViewMaker.Key(rules.Rule), Given(rules.GuardBand), rules.GuardBand > 0, rules.Risk is { } risk ? Given(100 * risk) : "", rules.Promise == Core.Requirements.Promise.EveryUnit, Given(capability.Sample), Given(capability.LongRun),
             Shown(Rounded.Nearest(3 * capability.Sample, 2)), Shown(Rounded.Nearest(3 * capability.LongRun, 2)),
             Given(_requirement.SafetyFactor), Given(_requirement.Rounding.Band.Percent), Given(_requirement.Rounding.Limit.Percent),
             _specification.Application.Station.ReadingsAveraged.ToString(CultureInfo.InvariantCulture));

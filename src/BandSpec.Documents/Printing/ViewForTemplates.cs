@@ -76,7 +76,7 @@ internal static class ViewForTemplates
         ("objective", p.Objective));
 
     private static ScriptObject Of(TestView t) => Script(
-        ("guard_band", t.GuardBand), ("guarded", t.Guarded), ("sample", t.Sample), ("long_run", t.LongRun), ("sample_sigma", t.SampleSigma),
+        ("rule", t.Rule), ("guard_band", t.GuardBand), ("guarded", t.Guarded), ("risk", t.Risk), ("every_unit", t.EveryUnit), ("sample", t.Sample), ("long_run", t.LongRun), ("sample_sigma", t.SampleSigma),
         ("long_run_sigma", t.LongRunSigma),
         ("safety_factor", t.SafetyFactor), ("band_step", t.BandStep), ("limit_step", t.LimitStep), ("readings", t.Readings));
 }

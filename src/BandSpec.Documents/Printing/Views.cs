@@ -72,7 +72,7 @@ internal sealed record PointView(
 /// How the test decides: guard band factor, capability criteria with their sigma levels, safety factor, rounding steps in %FS.
 /// </summary>
 internal sealed record TestView(
-    string GuardBand, bool Guarded, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor,
+    string Rule, string GuardBand, bool Guarded, string Risk, bool EveryUnit, string Sample, string LongRun, string SampleSigma, string LongRunSigma, string SafetyFactor,
     string BandStep, string LimitStep, string Readings);
 
 internal sealed record DigestView(string Name, string Digest);
@@ -93,6 +93,9 @@ internal sealed record PrintView(
 
     /// <summary>Why the answer is what it is; nothing when it was not worked out.</summary>
     public DiagnosisView? Diagnosis { get; init; }
+
+    /// <summary>The decision rules side by side; nothing when they were not compared.</summary>
+    public DecisionView? Decisions { get; init; }
 
     /// <summary>What the platform's statistics rest on; nothing when the platform does not say.</summary>
     public SampleView? Sample { get; init; }

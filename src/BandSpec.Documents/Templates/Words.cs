@@ -11,7 +11,10 @@ namespace BandSpec.Documents.Templates;
 /// </summary>
 internal sealed partial class Words
 {
-    private static readonly string[] Files = ["document.scriban", "terms.scriban", "cautions.scriban"];
+    private static readonly string[] Files = ["document.scriban", "terms.scriban", "decisions.scriban", "cautions.scriban"];
+
+    /// <summary>The file of words that only the judgement of a lot needs.</summary>
+    public const string OfJudgements = "judgement.scriban";
 
     private readonly Dictionary<string, Entry> _entries;
     private readonly ScriptObject _view;
@@ -26,13 +29,14 @@ internal sealed partial class Words
     public static IEnumerable<string> PathsOf(string language) => Files.Select(file => $"words/{language}/{file}");
 
     /// <summary>
-    /// Reads the word files of a language; every entry is parsed at once, so that a mistake shows however rarely the entry is used.
+    /// Reads the word files of a language, and further ones by name; every entry is parsed at once, so that a mistake shows however rarely
+    /// the entry is used.
     /// </summary>
-    public static Words Load(TemplateSources sources, string language)
+    public static Words Load(TemplateSources sources, string language, params IEnumerable<string> further)
     {
         var folder = $"words/{language}";
         var entries = new Dictionary<string, Entry>();
-        foreach (var file in Files)
+        foreach (var file in Files.Concat(further))
         {
             if (sources.Read($"{folder}/{file}") is not var (name, text))
                 throw new TemplateException(

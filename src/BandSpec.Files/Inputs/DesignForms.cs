@@ -5,7 +5,7 @@ using BandSpec.Files.Forms;
 
 namespace BandSpec.Files.Inputs;
 
-/// <summary>The forms of what a requirement says about capability, compensation, test and rounding.</summary>
+/// <summary>The forms of what a requirement says about capability, compensation and rounding.</summary>
 internal static class DesignForms
 {
     private static readonly Key<double> Sample = new(
@@ -51,14 +51,6 @@ internal static class DesignForms
     private static readonly Key<int> SpanDegree = Key.Optional<int>(
         "span-degree", new CountForm(AcceptedRanges.CorrectionDegree), "Degree of the span correction of the plan given; the highest when left out.");
 
-    private static readonly Key<double> GuardBand = new(
-        "guard-band", new NumberForm(AcceptedRanges.GuardBand), "Guard band in multiples of the expanded uncertainty; 0 is simple acceptance.");
-
-    private static readonly Key<WordOrList<Temperature>> TestTemperatures = Key.Optional(
-        "temperatures",
-        new WordOrListForm<Temperature>("auto", new ListForm<Temperature>("verification temperatures", QuantityForms.Temperature, 1, 20)),
-        new WordOrList<Temperature>(null), "Verification temperatures, or auto to have them chosen.");
-
     private static readonly Key<PercentOfSpan> BandStep = new("band", QuantityForms.Error, "Step of band values, rounded up.");
     private static readonly Key<PercentOfSpan> LimitStep = new("limit", QuantityForms.Error, "Step of acceptance limits, rounded inward.");
 
@@ -78,10 +70,6 @@ internal static class DesignForms
                 ? new PinnedPlan(v.Has(Plan) ? v.Of(Plan) : [], v.FindValue(ZeroDegree), v.FindValue(SpanDegree))
                 : null,
         });
-
-    /// <summary>The form of <c>test</c>.</summary>
-    internal static MapForm<VerificationRules> Test { get; } = new(
-        "the verification test", [GuardBand, TestTemperatures], v => new VerificationRules(v.Of(GuardBand), v.Of(TestTemperatures).Items));
 
     /// <summary>The form of <c>rounding</c>.</summary>
     internal static MapForm<RoundingSteps> Rounding { get; } = new(

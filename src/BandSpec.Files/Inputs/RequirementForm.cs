@@ -37,7 +37,7 @@ internal static class RequirementForm
         "held-terms", ErrorForms.Held, [], "Terms whose limit the customer has fixed.");
     private static readonly Key<IReadOnlyList<FurtherTerm>> FurtherTerms = Key.Optional<IReadOnlyList<FurtherTerm>>(
         "further-terms", ErrorForms.FurtherTerms, [], "Error sources outside the platform.");
-    private static readonly Key<VerificationRules> Test = new("test", DesignForms.Test, "How the verification test decides.");
+    private static readonly Key<VerificationRules> Test = new("test", TestForm.Form, "How the verification test decides.");
     private static readonly Key<RoundingSteps> Rounding = new(
         "rounding", DesignForms.Rounding, "Steps to which printed and tested values are rounded.");
 

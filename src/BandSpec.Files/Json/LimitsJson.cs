@@ -25,7 +25,7 @@ public static class LimitsJson
             json.WriteString("format", Format);
             json.Identity(requirement.Identity);
             json.WriteBoolean("feasible", specification.Feasible);
-            json.Object("decision-rule", rule => rule.Figure("guard-band", requirement.Test.GuardBand));
+            json.Object("decision-rule", rule => WriteRule(rule, requirement.Test));
             json.Figure("sample-criterion", requirement.Capability.Sample);
             json.Figure("long-run-criterion", requirement.Capability.LongRun);
             json.Figure("reference-temperature", requirement.Temperature.Reference.Celsius);
@@ -42,6 +42,16 @@ public static class LimitsJson
         specification.DerivedLimits.Concat(specification.Allocation.Terms
             .Where(share => share.Term == ErrorTerm.PressureHysteresis)
             .Select(share => new DerivedLimit("hysteresis", null, share.Limit)));
+
+    private static void WriteRule(Utf8JsonWriter json, VerificationRules rules)
+    {
+        json.WriteString("rule", JudgementJson.Word(rules.Rule));
+        if (rules.Rule == DecisionRule.Guarded)
+            json.Figure("guard-band", rules.GuardBand);
+        if (rules.Risk is { } risk)
+            json.Figure("risk", risk);
+        json.WriteString("promise", JudgementJson.Word(rules.Promise));
+    }
 
     private static void WriteDerived(Utf8JsonWriter json, DerivedLimit limit, Requirement requirement)
     {

@@ -42,6 +42,8 @@ public static class ResultJson
             json.Objects("allocation", specification.Allocation.Terms, WriteShare);
             json.Objects("derived-limits", specification.DerivedLimits, WriteLimit);
             json.Object("profile", profile => WriteProfile(profile, specification.Profile));
+            if (specification.Decisions is { } decisions)
+                DecisionJson.Members(json, decisions);
             json.Diagnosis(specification);
             json.Objects("nodes", specification.Bands.Nodes, WriteNode);
         });

@@ -3,7 +3,7 @@ using System.Reflection;
 namespace BandSpec.Files.Schemas;
 
 /// <summary>
-/// JSON Schemas (draft 2020-12) of <c>result.json</c> and <c>limits.json</c>. They are files of their own, since nothing reads those documents
+/// JSON Schemas (draft 2020-12) of <c>result.json</c>, <c>limits.json</c> and <c>judgement.json</c>. They are files of their own, since nothing reads those documents
 /// back by a form; a test holds every document written against them, and they accept no member that they do not name.
 /// </summary>
 public static class OutputSchemas
@@ -13,6 +13,9 @@ public static class OutputSchemas
 
     /// <summary>The schema of <c>limits.json</c>.</summary>
     public static ReadOnlyMemory<byte> Limits => Load("limits");
+
+    /// <summary>The schema of <c>judgement.json</c>.</summary>
+    public static ReadOnlyMemory<byte> Judgement => Load("judgement");
 
     private static ReadOnlyMemory<byte> Load(string name)
     {

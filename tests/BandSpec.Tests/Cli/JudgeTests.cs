@@ -1,8 +1,11 @@
 using System.Globalization;
 using System.Text;
 using System.Text.Json;
+using System.Xml.Linq;
 using BandSpec.Tests.Numerics;
+using Json.Schema;
 using Snapshooter.Xunit3;
+using UglyToad.PdfPig;
 using Xunit;
 
 namespace BandSpec.Tests.Cli;
@@ -92,6 +95,59 @@ public sealed class JudgeTests : IDisposable
         desk.Write("lot.csv", Lot(units: 20, sigma: 0.1));
         (_, string output, _) = desk.Run("judge", "limits.json", "lot.csv", "--json", "--out", "here");
         Assert.Equal(File.ReadAllText(desk.At("here/judgement.json")), output);
+    }
+
+    [Theory]
+    [InlineData(50, 0.3, "en", "not met")]
+    [InlineData(12, 0.1, "en", "met** at every point")]
+    [InlineData(240, 0.1, "de", "nachgewiesen")]
+    public void The_documents_say_the_verdict_and_show_every_characteristic(int units, double sigma, string language, string verdict)
+    {
+        desk.Write("lot.csv", Lot(units, sigma));
+        desk.Run("judge", "limits.json", "lot.csv", "--out", "j", "--quiet", "--language", language, "--paper", "Letter");
+        string markdown = File.ReadAllText(desk.At("j/judgement.md"));
+        Assert.Contains(verdict, markdown, StringComparison.Ordinal);
+        string[] charts = [.. Directory.EnumerateFiles(desk.At("j"), "*.svg").Select(f => Path.GetFileName(f)!).Order(StringComparer.Ordinal)];
+        Assert.Equal(["01-V1.svg", "02-V2.svg", "03-V3.svg", "04-V4.svg", "05-V5.svg", "06-V6.svg", "07-zero-25_C.svg", "08-hysteresis-25_C_x_0_5.svg", "09-thermal-zero-shift-85_C.svg"], charts);
+        Assert.All(charts, chart => Assert.Contains(chart, markdown, StringComparison.Ordinal));
+        Assert.All(charts, chart => XDocument.Load(desk.At($"j/{chart}")));
+        using PdfDocument pdf = PdfDocument.Open(desk.At("j/judgement.pdf"));
+        Assert.True(pdf.Advanced.TryGetEmbeddedFiles(out var attached));
+        Assert.Equal(File.ReadAllBytes(desk.At("j/judgement.json")), attached.Single().Bytes.ToArray());
+        Assert.Contains("T-7-B", pdf.GetPage(1).Text, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void An_unknown_language_is_refused_and_nothing_is_written()
+    {
+        desk.Write("lot.csv", Lot(units: 12, sigma: 0.1));
+        (int code, _, string error) = desk.Run("judge", "limits.json", "lot.csv", "--language", "tlh");
+        Assert.Equal(2, code);
+        Assert.Contains("the language 'tlh' is not known", error, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(desk.At("out")));
+    }
+
+    [Fact]
+    public void The_judgement_follows_its_schema_to_the_last_member()
+    {
+        JsonSchema schema = JsonSchema.FromText(desk.Run("schema", "judgement").Out);
+        foreach (string lot in new[] { Lot(60, 0.17) + "U900;L1;V1;1100\nU901;L1;V1;1,05\n", Lot(1, 0.1), Lot(9, 0) })
+        {
+            desk.Write("lot.csv", lot);
+            using JsonDocument json = JsonDocument.Parse(desk.Run("judge", "limits.json", "lot.csv", "--json").Out);
+            EvaluationResults results = schema.Evaluate(json.RootElement, new EvaluationOptions { OutputFormat = OutputFormat.List });
+            Assert.True(results.IsValid, string.Join('\n', (results.Details ?? []).Where(d => d.Errors is not null).SelectMany(d => d.Errors!.Select(e => $"{d.InstanceLocation}: {e.Value}"))));
+        }
+    }
+
+    /// <summary>Reading, tallying and judging share work between threads; a figure that depends on who comes first shows sooner or later.</summary>
+    [Fact]
+    public void Twenty_runs_over_a_file_give_every_figure_the_same()
+    {
+        desk.Write("lot.csv", Lot(units: 4000, sigma: 0.17));
+        string first = desk.Run("judge", "limits.json", "lot.csv", "--json").Out;
+        for (int run = 2; run <= 20; run++)
+            Assert.Equal(first, desk.Run("judge", "limits.json", "lot.csv", "--json").Out);
     }
 
     [Fact]

@@ -48,6 +48,21 @@ public sealed class StoppedRuns : IDisposable
     }
 
     [Fact]
+    public void Stopped_without_a_plan_that_fits_it_does_not_say_that_there_is_none()
+    {
+        desk.Change(File, "safety-factor: 1.15", "safety-factor: 2.3");
+        desk.Change(File, "objective: least-error", "objective: most-margin");
+        (int code, string output, _) = desk.RunStoppedSoon("draft", File);
+        string document = System.IO.File.ReadAllText(desk.At("out/HV-3107-A/specification.md"));
+
+        Assert.Equal(1, code);
+        Assert.Contains("NO PLAN FOUND  margin 0.", output, StringComparison.Ordinal);
+        Assert.Contains("NO PLAN FOUND", document, StringComparison.Ordinal);
+        Assert.Contains("The search was stopped before it was proven whether a compensation plan keeps the allowed error", document, StringComparison.Ordinal);
+        Assert.DoesNotContain("NOT FEASIBLE", output + document, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Of_several_requirements_those_not_begun_are_left()
     {
         desk.Write("second.yaml", System.IO.File.ReadAllText(desk.At(File)).Replace("HV-3107", "HV-3108", StringComparison.Ordinal));

@@ -172,6 +172,19 @@ public sealed class FindingScreens
         ("band: 0.05 %FS", "band: 0 %FS"));
 
     [Fact]
+    public void Decision_rules() => Approve(
+        ("guard-band: 1.0", "decision-rule: guarded"),
+        ("guard-band: 1.0", "decision-rule: simple, guard-band: 1"),
+        ("guard-band: 1.0", "decision-rule: global"),
+        ("guard-band: 1.0", "decision-rule: specific-risk"),
+        ("guard-band: 1.0", "decision-rule: specific-risk, risk: 0.6"),
+        ("guard-band: 1.0", "decision-rule: global-risk, risk: 0"),
+        ("guard-band: 1.0", "decision-rule: global-risk, risk: 2 %"),
+        ("guard-band: 1.0", "guard-band: 1, risk: 0.025"),
+        ("guard-band: 1.0", "guard-band: 1.0, promise: each-unit"),
+        ("guard-band: 1.0, ", ""));
+
+    [Fact]
     public void Platform() => Approve(
         ("zero:\n    - { degree: 0, mean: 0.0", "zero:\n    - { degree: 1, mean: 0.0"),
         ("- { degree: 4, mean: 0.05, sigma: 0.03 }", "- { degree: 9, mean: 0.05, sigma: 0.03 }"),

@@ -83,8 +83,9 @@ public sealed class SchemaTests
     [Fact]
     public void Result_and_limits_follow_their_schemas_to_the_last_member()
     {
-        Specification specification = SpecificationDraft.Draft(Given.Application());
+        Specification specification = SpecificationDraft.Draft(Given.Application(), extras: DraftExtras.Decisions);
 
+        Assert.NotNull(specification.Decisions);
         Assert.Empty(Faults(ResultSchema, ResultJson.Write(specification)));
         Assert.Empty(Faults(JsonSchema.FromText(Encoding.UTF8.GetString(OutputSchemas.Limits.Span)), LimitsJson.Write(specification)));
     }

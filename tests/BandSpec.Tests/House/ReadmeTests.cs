@@ -1,3 +1,4 @@
+using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 using BandSpec.Documents;
 using BandSpec.Files.Inputs;
@@ -18,6 +19,13 @@ public sealed class ReadmeTests
         DocumentFile drawn = SpecificationPackage.Draw(specification, [], new DocumentOptions { Program = "BandSpec" })
             .Single(f => f.Name == "band-over-temperature.svg");
         Assert.Equal(File.ReadAllText(Path.Combine(Demos, "pictures", "brine-reinjection-band.svg")), System.Text.Encoding.UTF8.GetString(drawn.Bytes.Span));
+    }
+
+    [Fact]
+    public void The_picture_of_what_more_money_buys_is_the_one_the_program_draws()
+    {
+        ReadOnlyMemory<byte> drawn = TradeoffDrawing.Draw(PlanAlternatives.Of(Read("brine-reinjection.yaml")), new DocumentOptions { Program = "BandSpec" });
+        Assert.Equal(File.ReadAllText(Path.Combine(Demos, "pictures", "brine-reinjection-tradeoff.svg")), System.Text.Encoding.UTF8.GetString(drawn.Span));
     }
 
     [Fact]
@@ -51,11 +59,13 @@ public sealed class ReadmeTests
         Assert.Empty(Directory.EnumerateFileSystemEntries(Tree.Root).Select(Path.GetFileName).Where(n => n![0] != '.').Except(known));
     }
 
-    private static Specification Draft(string file)
+    private static Specification Draft(string file) => SpecificationDraft.Draft(Read(file));
+
+    private static Application Read(string file)
     {
         InputSet set = InputReading.Read(Content(file), Content);
         Assert.Empty(set.Findings);
-        return SpecificationDraft.Draft(set.Application!);
+        return set.Application!;
     }
 
     private static InputContent Content(string file) => InputContent.Of(file, File.ReadAllBytes(Path.Combine(Demos, file)));

@@ -11,7 +11,7 @@ public sealed partial class RoomTests
     /// <summary>A room may use itself and every room named here before it, but for those of the exceptions.</summary>
     private static readonly string[] Order =
     [
-        "Quantities", "Numerics", "Findings", "Requirements", "Residuals", "Bands", "Planning", "Allocating", "TestLimits", "Specifying", "Characterizing",
+        "Quantities", "Numerics", "Findings", "Requirements", "Residuals", "Bands", "Planning", "Allocating", "TestLimits", "Deciding", "Specifying", "Characterizing",
         "VirtualLots", "Revisions",
     ];
 

@@ -13,7 +13,7 @@ public sealed class EveryFieldTests
     private static readonly ApplicationInputs Inputs = new(
         Given.Requirement with
         {
-            Test = new VerificationRules(1, [Given.C(0), Given.C(25)]),
+            Test = new VerificationRules(1, [Given.C(0), Given.C(25)]) { Risk = 0.1 },
             Compensation = Given.Requirement.Compensation with { Pinned = new PinnedPlan([Given.C(0), Given.C(25)], 1, 1) },
             Capability = Given.Requirement.Capability with { Confidence = 0.9 },
             AllowedError = [new(Given.C(-20), Given.C(150), Given.P(1), Given.P(2), 0.02)],
