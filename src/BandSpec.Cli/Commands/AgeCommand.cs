@@ -17,7 +17,7 @@ internal static class AgeCommand
     {
         Argument<string[]> files = new("READINGS") { Description = "CSV files of readings of units in storage.", Arity = ArgumentArity.OneOrMore };
         Option<string?> platform = new("--platform") { Description = "Platform file whose ageing is replaced.", HelpName = "FILE" };
-        Option<string?> report = new("--report") { Description = "Folder for the report: PDF, Markdown and JSON.", HelpName = "DIR" };
+        Option<string?> report = new("--report") { Description = "Folder for the report: PDF, Markdown, JSON and charts.", HelpName = "DIR" };
         Option<Temperature?> test = ValueOptions.Quantity(
             "--test-temperature", "Temperature that the drift is stated for; otherwise the platform's, or the storage most units had.", QuantityForms.Temperature, "TEMPERATURE");
         Option<Duration?> length = ValueOptions.Quantity(

@@ -43,7 +43,7 @@ public sealed class AgeingStatisticsTests(ITestOutputHelper output)
     public void The_region_surrounds_the_estimate_and_lies_on_one_level()
     {
         AgeingStatistics found = Of(new SimulatedStorage(Truth, Repeatability, 3).Readings(12, 105, 125, 150), Scope);
-        Assert.Equal(24, found.Region.Count);
+        Assert.Equal(48, found.Region.Count);
         Assert.InRange(found.ActivationEnergy.Value, found.Region.Min(p => p.ActivationEnergy), found.Region.Max(p => p.ActivationEnergy));
         Assert.True(found.Region.Max(p => p.TimeExponent) > found.TimeExponent.Upper, "the joint region reaches beyond each interval");
     }

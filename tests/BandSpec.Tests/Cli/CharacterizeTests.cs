@@ -76,6 +76,18 @@ public sealed class CharacterizeTests : IDisposable
     }
 
     [Fact]
+    public void Age_draws_the_region_and_the_drift()
+    {
+        (int code, _, string error) = desk.Run(["age", "steel-cell-40-storage.csv", .. Range, "--report", "report", "--quiet"]);
+        Assert.Equal((0, ""), (code, error));
+        Assert.Equal(
+            ["ageing.json", "ageing.md", "ageing.pdf", "drift-high.svg", "drift-low.svg", "region.svg"],
+            Directory.EnumerateFiles(desk.At("report")).Select(Path.GetFileName).Order(StringComparer.Ordinal));
+        string drift = desk.Text("report/drift-low.svg");
+        Assert.All(new[] { "105 °C", "125 °C", "150 °C" }, storage => Assert.Contains(storage, drift, StringComparison.Ordinal));
+    }
+
+    [Fact]
     public void A_draft_says_what_can_be_claimed_from_the_sample()
     {
         desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--quiet"]);
