@@ -1,3 +1,4 @@
+using System.Text.Json;
 using BandSpec.Tests.House;
 using Snapshooter.Xunit3;
 using Xunit;
@@ -95,6 +96,25 @@ public sealed class CharacterizeTests : IDisposable
         Assert.Contains("with 95 % confidence: the statistics rest on 46 units of 3 lots", output, StringComparison.Ordinal);
         string text = File.ReadAllText(desk.At("out/HV-3107-A/specification.md")).Replace('\u00a0', ' ');
         Assert.Contains("rest on 3860 readings of 46 units of 3 lots", text, StringComparison.Ordinal);
+    }
+
+    /// <summary>The same statistics and the same confidence: with the tighter requirement only the sample is missing, with the wider one nothing is.</summary>
+    [Theory]
+    [InlineData("1.96", 1, "NOT FEASIBLE with 95 % confidence", "keeps the allowed error with a margin of", "The sample does not make the allowed error certain")]
+    [InlineData("1.94", 0, "FEASIBLE  margin", "the error stays within", "is certain with a confidence of 95 %")]
+    public void A_confidence_decides_whether_a_plan_holds(string safety, int exitCode, string screen, string promise, string answer)
+    {
+        desk.Run(["characterize", "steel-cell-40.csv", .. Range, "--platform", "platforms/steel-cell-40.yaml", "--quiet"]);
+        desk.Change("brine-reinjection.yaml", "safety-factor: 1.15", $"safety-factor: {safety}");
+        desk.Change("brine-reinjection.yaml", "long-run: 1.33 }", "long-run: 1.33, confidence: 0.95 }");
+        (int code, string output, _) = desk.Run("draft", "brine-reinjection.yaml");
+        Assert.Equal(exitCode, code);
+        Assert.Contains(screen, output, StringComparison.Ordinal);
+        string text = desk.Text("out/HV-3107-A/specification.md").Replace('\u00a0', ' ');
+        Assert.Contains(promise, text, StringComparison.Ordinal);
+        Assert.Contains(answer, text, StringComparison.Ordinal);
+        double claimed = JsonDocument.Parse(desk.Text("out/HV-3107-A/result.json")).RootElement.GetProperty("claim").GetProperty("margin").GetDouble();
+        Assert.Equal(exitCode == 0, claimed >= 1);
     }
 
     [Fact]
