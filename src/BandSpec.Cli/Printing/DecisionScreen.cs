@@ -19,7 +19,7 @@ internal static class DecisionScreen
         StringBuilder screen = new();
         screen.Append(Plain, $"\n{ink.Bold(identity.FolderName)}  {identity.Title}\n\n");
         screen.Append(TableOf(decisions, ink)).Append('\n');
-        screen.Append(ink.Faint("Risks in millionths of all units made (JCGM 106:2012), of the whole unit to about 3 %, very small ones more coarsely;\ncost of rejects spread over all units made.\n* the rule of the requirement")).Append("\n\n");
+        screen.Append(ink.Faint("Risks in millionths of all units made (JCGM 106:2012), of the whole unit to about 2 %;\ncost of rejects spread over all units made.\n* the rule of the requirement")).Append("\n\n");
         foreach (RuleOutcome rule in decisions.Rules.Where(r => r.Impossible.Count > 0))
         {
             string needed = rule.UncertaintyNeeded is { } u
@@ -52,10 +52,15 @@ internal static class DecisionScreen
 
     private static void AppendField(StringBuilder screen, FieldWorth field, Ink ink)
     {
-        screen.Append(Plain, $"{ink.Bold("Field")}     leaves the allowed error somewhere, in millionths: {Parts(field.AnyUnit.Value)} of all units,\n");
+        static string chance(EstimatedProbability one) =>
+            $"{LotFigures.Probability(one.Value),-12} {LotFigures.Probability(one.Lower)} to {LotFigures.Probability(one.Upper)}";
+        screen.Append(Plain, $"{ink.Bold("Field")}     that a unit leaves the allowed error anywhere, 95 % interval of the integration\n");
+        screen.Append(Plain, $"          any unit              {chance(field.AnyUnit)}\n");
         screen.Append(field.AtLimit is { } limit
-            ? string.Create(Plain, $"          {Parts(field.AcceptedUnit.Value)} of accepted ones; {Parts(limit.Leaving.Value)} for one that reads exactly on its limit at {limit.Point} ({limit.Reading:0.000} %FS), which is the worst\n")
+            ? string.Create(
+                Plain, $"          an accepted unit      {chance(field.AcceptedUnit)}\n          reading on its limit  {chance(limit.Leaving)}, worst at {limit.Point} with {limit.Reading:0.000} %FS\n")
             : "          no unit is accepted\n");
+        screen.Append(Plain, $"          at one place at most  {LotFigures.Probability(field.LargestPointwise)}\n");
     }
 
     private static string Name(VerificationRules rules) => rules.Rule switch

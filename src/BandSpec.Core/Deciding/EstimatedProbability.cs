@@ -9,6 +9,14 @@ namespace BandSpec.Core.Deciding;
 /// <param name="StandardError">Its standard error.</param>
 public sealed record EstimatedProbability(double Value, double StandardError)
 {
+    private const double Quantile = 1.959963984540054;
+
+    /// <summary>Lower end of the 95 % interval.</summary>
+    public double Lower => Math.Max(0, Value - (Quantile * StandardError));
+
+    /// <summary>Upper end of the 95 % interval.</summary>
+    public double Upper => Math.Min(1, Value + (Quantile * StandardError));
+
     internal static EstimatedProbability Of(Estimate estimate) => new(Math.Min(1, estimate.Value), estimate.StandardError);
 
     /// <summary>One over the other, each with an error of its own; 0 over 0 is 0.</summary>

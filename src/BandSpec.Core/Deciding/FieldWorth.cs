@@ -22,6 +22,9 @@ public sealed record FieldWorth
     /// </summary>
     public LimitWorth? AtLimit { get; init; }
 
+    /// <summary>The largest probability of leaving at one place, on one side, at one age, of any unit: the pointwise figure, in closed form.</summary>
+    public required double LargestPointwise { get; init; }
+
     /// <summary>The worth under the limits of a set of verification points.</summary>
     internal static FieldWorth Of(Application application, UnitLaw law, RuleOutcome rule, IReadOnlyList<double> allowed)
     {
@@ -32,6 +35,7 @@ public sealed record FieldWorth
         EstimatedProbability accepted = new EstimatedProbability(1, 0).Plus(rule.Rejected, -1);
         return new FieldWorth
         {
+            LargestPointwise = law.LargestPointwise(allowed),
             AnyUnit = Integration.Of(leaving, Readings.None(law.Dimensions)),
             AcceptedUnit = canAccept ? EstimatedProbability.Quotient(Integration.Of(leaving, events.Readings(points)), accepted) : new(0, 0),
             AtLimit = canAccept ? WorstLimit(events, law, points, allowed) : null,

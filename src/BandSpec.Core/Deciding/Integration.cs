@@ -2,11 +2,11 @@ using BandSpec.Core.Numerics.RareEvents;
 
 namespace BandSpec.Core.Deciding;
 
-/// <summary>How carefully probabilities of whole units are integrated: to three percent of themselves, or until the points are used up.</summary>
+/// <summary>How carefully probabilities of whole units are integrated: to two percent of themselves, or until the points are used up.</summary>
 internal static class Integration
 {
     private const ulong Seed = 106;
-    private const double RelativeError = 0.03;
+    private const double RelativeError = 0.02;
     private const long MostDraws = 1 << 16;
 
     /// <summary>Tilts between which accepted units with rare events are looked for, from none to three limits' worth.</summary>
@@ -14,5 +14,5 @@ internal static class Integration
 
     /// <summary>The probability that some event happens and all readings are accepted.</summary>
     public static EstimatedProbability Of(HalfSpaces events, Readings readings) =>
-        EstimatedProbability.Of(UnionProbability.Of(events, readings, readings.Count == 0 ? [0] : Strengths, Seed, RelativeError, MostDraws));
+        EstimatedProbability.Of(UnionProbability.Of(events, readings, readings.Count == 0 ? [0] : Strengths, Seed, RelativeError, MostDraws, firstBlocks: 1));
 }

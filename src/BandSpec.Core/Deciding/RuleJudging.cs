@@ -11,7 +11,6 @@ internal sealed class RuleJudging
     private readonly Application application;
     private readonly UnitEvents events;
     private readonly UnitLaw law;
-    private readonly HalfSpaces beyond;
     private readonly EstimatedProbability beyondTolerance;
     private readonly List<(double[] Limits, EstimatedProbability Rejected, EstimatedProbability Consumer)> known = [];
 
@@ -22,8 +21,7 @@ internal sealed class RuleJudging
     {
         (this.application, this.law) = (application, law);
         events = new UnitEvents(law, application);
-        beyond = events.BeyondTolerance(points);
-        beyondTolerance = Integration.Of(beyond, Readings.None(beyond.Dimensions));
+        beyondTolerance = Integration.Of(events.BeyondTolerance(points), Readings.None(law.Dimensions));
     }
 
     /// <summary>The outcome of a rule.</summary>
@@ -57,7 +55,7 @@ internal sealed class RuleJudging
         if (known.Find(test => test.Limits.AsSpan().SequenceEqual(limits)) is { Limits: not null } same)
             return (same.Rejected, same.Consumer);
         EstimatedProbability rejected = Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2));
-        EstimatedProbability consumer = Integration.Of(beyond, events.TestedReadings(points));
+        EstimatedProbability consumer = WrongAcceptance.Of(law, events, points);
         known.Add((limits, rejected, consumer));
         return (rejected, consumer);
     }

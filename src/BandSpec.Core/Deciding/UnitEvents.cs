@@ -11,16 +11,13 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
     /// <summary>The two numbers of the standard follow those of the unit where readings are events themselves.</summary>
     private const int Standards = 2;
 
-    /// <summary>
-    /// That what a unit truly shows is beyond the tolerance at some test place. Behind the numbers of the unit stand those of its test: the output's step
-    /// at each place, each reading's noise, the standard's two. What is accepted although beyond is so by these, and the integration has to lean on them.
-    /// </summary>
+    /// <summary>That what a unit truly shows is beyond the tolerance at some test place; the output's step there is a number of its own.</summary>
     public HalfSpaces BeyondTolerance(IReadOnlyList<VerificationPoint> points)
     {
-        HalfSpaces events = new(TestedDimensions(points), 0);
+        HalfSpaces events = new(law.Dimensions, points.Count);
         for (int v = 0; v < points.Count; v++)
             foreach (int side in new[] { -1, 1 })
-                Add(events, Tested(v, points.Count, isRead: false), side, points[v].Tolerance.Percent, -1);
+                Add(events, law.Shown(v), side, points[v].Tolerance.Percent, v);
         return events;
     }
 
@@ -71,32 +68,6 @@ internal sealed class UnitEvents(UnitLaw law, Application application)
         }
 
         return readings;
-    }
-
-    /// <summary>The same readings about the numbers of <see cref="BeyondTolerance"/>, which leave no noise.</summary>
-    public Readings TestedReadings(IReadOnlyList<VerificationPoint> points)
-    {
-        Readings readings = new(TestedDimensions(points), 0);
-        for (int v = 0; v < points.Count; v++)
-        {
-            LinearError read = Tested(v, points.Count, isRead: true);
-            Interval accepted = AcceptedAt(points[v]);
-            readings.Add(read.Weights, new Reading(read.Mean, accepted.Lower, accepted.Upper, 0, 0));
-        }
-
-        return readings;
-    }
-
-    private int TestedDimensions(IReadOnlyList<VerificationPoint> points) => law.Dimensions + (2 * points.Count) + Standards;
-
-    private LinearError Tested(int place, int places, bool isRead)
-    {
-        LinearError shown = law.Shown(place);
-        double[] weights = [.. shown.Weights, .. new double[(2 * places) + Standards]];
-        weights[law.Dimensions + place] = shown.Own;
-        if (isRead)
-            (weights[law.Dimensions + places + place], weights[^2], weights[^1]) = law.ReadingErrors(place);
-        return new(shown.Mean, weights, 0);
     }
 
     /// <summary>The acceptance limits of a point as errors, %FS.</summary>

@@ -136,6 +136,13 @@ internal sealed class UnitLaw
         return sum;
     }
 
+    /// <summary>The largest probability over places of use, sides and ages of being beyond what is allowed there.</summary>
+    public double LargestPointwise(IReadOnlyList<double> allowed) =>
+        (from node in Enumerable.Range(0, nodes.Count)
+         from at in Sides
+         let error = Used(node, at.Side, at.Age)
+         select error.Sigma > 0 ? NormalDistribution.UpperTail((allowed[node] - error.Mean) / error.Sigma) : error.Mean > allowed[node] ? 1 : 0).Max();
+
     /// <summary><c>u_v²</c>.</summary>
     public double ReadingVariance(int place)
     {

@@ -49,9 +49,9 @@ public sealed record LeavingProbability
         Readings readings = law.Test.Linear(law, unit);
         TiltedEvents plain = new(events, new Tilt(readings, 0));
         Readings none = Readings.None(events.Dimensions);
-        Estimate any = UnionProbability.Of(events, none, [0], seed, relativeError, mostDraws, cancellation);
+        Estimate any = UnionProbability.Of(events, none, [0], seed, relativeError, mostDraws, cancellation: cancellation);
         Estimate accepted = AcceptanceProbability.Of(readings, seed, relativeError / 3, mostDraws);
-        Estimate both = UnionProbability.Of(events, readings, Strengths, seed, relativeError, mostDraws, cancellation);
+        Estimate both = UnionProbability.Of(events, readings, Strengths, seed, relativeError, mostDraws, cancellation: cancellation);
         return new LeavingProbability
         {
             AnyUnit = SampledProbability.Of(any),

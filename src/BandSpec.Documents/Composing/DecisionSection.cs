@@ -32,10 +32,12 @@ internal static class DecisionSection
         yield return new Paragraph(c.Words["decision.promise"]);
         yield return new Facts(
         [
-            new Fact(c.Words["decision.any"], Probability(decisions.AnyUnit)), new Fact(c.Words["decision.accepted"], Probability(decisions.AcceptedUnit)),
+            new Fact(c.Words["decision.any"], decisions.AnyUnit),
+            new Fact(c.Words["decision.accepted"], decisions.AcceptedUnit.Length > 0 ? decisions.AcceptedUnit : "–"),
             .. decisions.AtLimit is { } limit
-                ? [new Fact(c.Words.Say("decision.at-limit", ("point", limit.Point), ("reading", limit.Reading)), Probability(limit.Leaving))]
+                ? [new Fact(c.Words.Say("decision.at-limit", ("point", limit.Point), ("reading", limit.Reading)), limit.Leaving)]
                 : Array.Empty<Fact>(),
+            new Fact(c.Words["decision.pointwise"], decisions.AtOnePlace),
         ]);
     }
 
@@ -47,6 +49,4 @@ internal static class DecisionSection
     }
 
     private static Phrase Name(Composition c, RuleView r) => c.Words.Say("decision." + r.Key, ("parameter", r.Parameter));
-
-    private static Phrase Probability(string parts) => parts.Length > 0 ? $"{parts}\u00a0{PerMillion}" : "–";
 }

@@ -3,9 +3,12 @@ using BandSpec.Core.Requirements;
 
 namespace BandSpec.Documents.Printing;
 
-/// <summary>The decision rules side by side, and what accepted units are worth, as it is shown. Probabilities in ppm; that of an accepted unit is
-/// empty when none is.</summary>
-internal sealed record DecisionView(IReadOnlyList<RuleView> Rules, string AnyUnit, string AcceptedUnit, LimitWorthView? AtLimit, string Currency);
+/// <summary>
+/// The decision rules side by side, and what accepted units are worth, as it is shown: probabilities with unit and 95 % interval. That of an accepted unit
+/// is empty when none is.
+/// </summary>
+internal sealed record DecisionView(
+    IReadOnlyList<RuleView> Rules, string AnyUnit, string AcceptedUnit, LimitWorthView? AtLimit, string AtOnePlace, string Currency);
 
 /// <summary>
 /// A rule: its key, its parameter (a multiple of U, or a risk in percent; may be empty), guard bands in %FS from the narrowest to the widest, risks of the
@@ -23,10 +26,11 @@ internal sealed record LimitWorthView(string Point, string Reading, string Leavi
 internal sealed class DecisionViewMaker(DecisionComparison decisions, string sign)
 {
     public DecisionView Make() => new(
-        [.. decisions.Rules.Select(Of)], Parts(decisions.Field.AnyUnit.Value), decisions.Field.AtLimit is null ? "" : Parts(decisions.Field.AcceptedUnit.Value),
+        [.. decisions.Rules.Select(Of)], Chance(decisions.Field.AnyUnit), decisions.Field.AtLimit is null ? "" : Chance(decisions.Field.AcceptedUnit),
         decisions.Field.AtLimit is { } limit
-            ? new LimitWorthView(limit.Point, Rounded.Nearest(limit.Reading, 3).Shown(sign), Parts(limit.Leaving.Value))
+            ? new LimitWorthView(limit.Point, Rounded.Nearest(limit.Reading, 3).Shown(sign), Chance(limit.Leaving))
             : null,
+        Chance(new EstimatedProbability(decisions.Field.LargestPointwise, 0)),
         decisions.Rules[0].RejectCostPerUnit.Currency);
 
     private RuleView Of(RuleOutcome rule) => new(
@@ -53,6 +57,23 @@ internal sealed class DecisionViewMaker(DecisionComparison decisions, string sig
     };
 
     private string Shown(double percent) => Rounded.Nearest(percent, 3).Shown(sign);
+
+    /// <summary>A probability in the unit that suits its size, with its interval if it has one.</summary>
+    private string Chance(EstimatedProbability probability)
+    {
+        (double scale, string unit) = probability.Value switch
+        {
+            >= 0.01 => (1e2, "%"),
+            >= 1e-7 => (1e6, "ppm"),
+            _ => (1e9, "ppb"),
+        };
+        if (probability.Value * scale < 1e-6)
+            return $"<\u00a0{new Rounded("0.000001").Shown(sign)}\u00a0{unit}";
+        string shown(double value) => Rounded.Significant(scale * value).Shown(sign);
+        return probability.StandardError > 0
+            ? $"{shown(probability.Value)}\u00a0{unit} ({shown(probability.Lower)}\u00a0–\u00a0{shown(probability.Upper)})"
+            : $"{shown(probability.Value)}\u00a0{unit}";
+    }
 
     private string Parts(double probability) => Rounded.PerMillion(probability).Shown(sign);
 }

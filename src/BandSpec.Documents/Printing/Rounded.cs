@@ -44,6 +44,14 @@ internal readonly record struct Rounded(string Plain, bool IsBound = false)
         return Write((decimal)(Math.Ceiling(parts / step - OnStep) * step), Math.Max(0, (int)-second));
     }
 
+    /// <summary>A figure above 0 to three figures.</summary>
+    public static Rounded Significant(double value)
+    {
+        const int Figures = 3;
+        var first = value > 0 ? (int)Math.Floor(Math.Log10(value)) : 0;
+        return Nearest(value, Math.Clamp(Figures - 1 - first, 0, 9));
+    }
+
     /// <summary>How many decimals a step has: 2 for 0.05.</summary>
     public static int Decimals(double step)
     {

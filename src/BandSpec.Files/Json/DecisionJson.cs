@@ -22,6 +22,7 @@ public static class DecisionJson
         {
             field.Object("any-unit", one => Probability(one, decisions.Field.AnyUnit));
             field.Object("accepted-unit", one => Probability(one, decisions.Field.AcceptedUnit));
+            field.Figure("largest-pointwise", decisions.Field.LargestPointwise);
             if (decisions.Field.AtLimit is { } limit)
             {
                 field.Object("at-limit", one =>

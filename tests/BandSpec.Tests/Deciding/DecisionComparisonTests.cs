@@ -189,6 +189,16 @@ public sealed class DecisionComparisonTests
         Counted((double)producer / Units, error(producer), s.Decisions.Chosen.Producer);
     }
 
+    /// <summary>Risks of 1e-3 and of 1e-10 alike are known to a few percent; and the pointwise figure lies below that of all places, their sum above.</summary>
+    [Fact]
+    public void However_small_a_risk_is_it_is_known_to_a_few_percent()
+    {
+        DecisionComparison decisions = Narrow.Value.Decisions!;
+        foreach (RuleOutcome rule in decisions.Rules)
+            Assert.InRange(rule.Consumer.StandardError, 0, 0.05 * rule.Consumer.Value);
+        Assert.InRange(decisions.Field.AnyUnit.Value, decisions.Field.LargestPointwise, 4 * Narrow.Value.Bands.Nodes.Count * decisions.Field.LargestPointwise);
+    }
+
     private static double Dot(double[] a, double[] b) => a.Zip(b, (x, y) => x * y).Sum();
 
     private static double Error(Rate rate) => Math.Sqrt(rate.DesignEffect * rate.Value * (1 - rate.Value) / rate.Of);

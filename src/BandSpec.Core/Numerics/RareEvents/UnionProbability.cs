@@ -29,10 +29,11 @@ internal static class UnionProbability
     /// <param name="seed">Root seed.</param>
     /// <param name="relativeError">The relative standard error to reach.</param>
     /// <param name="mostDraws">The most points to draw.</param>
+    /// <param name="firstBlocks">How many blocks of 2048 points the first look takes; fewer may miss a rare event and think the error too small.</param>
     /// <param name="cancellation">Ends the refinement; the estimate so far is returned.</param>
     public static Estimate Of(
         HalfSpaces events, Readings readings, ReadOnlySpan<double> strengths, ulong seed, double relativeError, long mostDraws,
-        CancellationToken cancellation = default)
+        int firstBlocks = 8, CancellationToken cancellation = default)
     {
         Tilt[] tilts = [.. strengths.ToArray().Select(s => new Tilt(readings, s))];
         HalfSpaces kept = WithoutNegligible(events, tilts);
@@ -40,7 +41,7 @@ internal static class UnionProbability
         if (kept.Count == 0 || laws.All(l => l.Total == 0))
             return new Estimate(0, 0, 0);
         Sums sums = default;
-        for (int blocks = 8; ; blocks *= 2)
+        for (int blocks = firstBlocks; ; blocks *= 2)
         {
             sums = Draw(kept, readings, laws, seed, sums, blocks);
             Estimate estimate = sums.Estimate;
