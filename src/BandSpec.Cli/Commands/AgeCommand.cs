@@ -43,6 +43,11 @@ internal static class AgeCommand
         {
             files, platform, report, test, length, energy, exponent, planUnits, planStorage, planTimes, range, output, columns, json, quiet,
         };
+        command.Validators.Add(result =>
+        {
+            if (new Option[] { planUnits, planStorage, planTimes }.Count(part => result.GetResult(part) is not null) is 1 or 2)
+                result.AddError("a planned test takes all of --plan-units, --plan-storage and --plan-times");
+        });
         command.SetAction(parsed => (int)new AgeRun(terminal)
         {
             Files = parsed.GetRequiredValue(files),

@@ -57,6 +57,19 @@ public sealed class AgeingStatisticsTests(ITestOutputHelper output)
         Assert.True(found.ActivationEnergy.Upper - found.ActivationEnergy.Lower > 0.5);
     }
 
+    /// <summary>No drift at all: every activation energy agrees, so that one has to be assumed.</summary>
+    [Fact]
+    public void Drift_that_does_not_show_needs_an_activation_energy_to_assume()
+    {
+        Ageing none = Truth with { Zero = Given.Spread(0, 0), Span = Given.Spread(0, 0) };
+        List<DriftReading> readings = new SimulatedStorage(none, Repeatability, 9).Readings(4, 105, 125);
+        Assert.Equal("open-energy", Assert.Single(AgeingStatistics.Of(readings, Scope).Findings).Rule);
+        AgeingStatistics found = Of(readings, Scope with { AssumedActivationEnergy = 0.7 });
+        Assert.Equal(new Estimate(0.7, 0.7, 0.7), found.ActivationEnergy);
+        Assert.Equal("the readings set no limits to it; 0.7 eV is assumed", Assert.Single(found.LeftOut).Reason);
+        Assert.True(found.Zero.Mean.Covers(0), found.Zero.Mean.ToString());
+    }
+
     [Fact]
     public void One_storage_temperature_needs_an_activation_energy_to_assume()
     {

@@ -72,6 +72,22 @@ public sealed class CharacterizationTests
         Assert.InRange(only.Value.Value, 0.65, 0.9);
     }
 
+    /// <summary>Degrees that cannot describe the family: slopes at zero correlation promise much that no fit confirms.</summary>
+    [Fact]
+    public void A_correlation_that_no_fit_confirms_stays_out()
+    {
+        Characterization found = Of(DemoReadings.Family(), Families.OpenScope with
+        {
+            PinnedDegrees = new Dictionary<PressureShape, int>
+            {
+                [PressureShape.Zero] = 7, [PressureShape.Span] = 2, [PressureShape.Bow] = -1, [PressureShape.SShape] = -1,
+            },
+        });
+        CorrelationEstimate only = Assert.Single(found.Correlations);
+        Assert.Equal(Families.Pair, only.Pair);
+        Assert.InRange(only.Value.Value, 0.2, 0.8);
+    }
+
     [Fact]
     public void A_spoiled_unit_and_a_slip_are_named_and_left_out()
     {

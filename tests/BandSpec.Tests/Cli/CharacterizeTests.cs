@@ -138,6 +138,10 @@ public sealed class CharacterizeTests : IDisposable
         Assert.Equal(2, code);
         Assert.Contains("`999` is to be left out and not among the readings", output, StringComparison.Ordinal);
 
+        (code, _, string error) = desk.Run(["age", "steel-cell-40-storage.csv", .. Range, "--plan-units", "12"]);
+        Assert.Equal(2, code);
+        Assert.Contains("a planned test takes all of --plan-units, --plan-storage and --plan-times", error, StringComparison.Ordinal);
+
         Assert.Equal((2, "bandspec: `zero=12`: accepted are zero, span, bow or s-shape with a degree 0 to 8 or `none`, such as zero=3\nbandspec: see `bandspec characterize --help`\n"),
             (desk.Run("characterize", "steel-cell-40.csv", "--degree", "zero=12").ExitCode, desk.Run("characterize", "steel-cell-40.csv", "--degree", "zero=12").Error));
     }
