@@ -33,12 +33,15 @@ public sealed record FieldWorth
         HalfSpaces leaving = events.Leaving(allowed);
         bool canAccept = rule.Impossible.Count == 0;
         EstimatedProbability accepted = new EstimatedProbability(1, 0).Plus(rule.Rejected, -1);
+        EstimatedProbability any = new(0, 0), both = new(0, 0);
+        LimitWorth? limit = null;
+        Parallel.Invoke(
+            () => any = Integration.Of(leaving, Readings.None(law.Dimensions)),
+            () => both = canAccept ? Integration.Of(leaving, events.Readings(points)) : both,
+            () => limit = canAccept ? WorstLimit(events, law, points, allowed) : null);
         return new FieldWorth
         {
-            LargestPointwise = law.LargestPointwise(allowed),
-            AnyUnit = Integration.Of(leaving, Readings.None(law.Dimensions)),
-            AcceptedUnit = canAccept ? EstimatedProbability.Quotient(Integration.Of(leaving, events.Readings(points)), accepted) : new(0, 0),
-            AtLimit = canAccept ? WorstLimit(events, law, points, allowed) : null,
+            LargestPointwise = law.LargestPointwise(allowed), AnyUnit = any, AcceptedUnit = EstimatedProbability.Quotient(both, accepted), AtLimit = limit,
         };
     }
 

@@ -7,7 +7,7 @@ internal static class Integration
 {
     private const ulong Seed = 106;
     private const double RelativeError = 0.02;
-    private const long MostDraws = 1 << 16;
+    private const long MostDraws = 1 << 14;
 
     /// <summary>Tilts between which accepted units with rare events are looked for, from none to three limits' worth.</summary>
     private static readonly double[] Strengths = [0, 0.5, 1.2, 3];

@@ -47,7 +47,7 @@ internal sealed class PlaceLaw
     private double ReadingSigma => Math.Sqrt(ReadingVariance);
 
     /// <summary>Density of a true value.</summary>
-    public double Density(double truth) => NormalTail.Density((truth - Shown.Mean) / Sigma) / Sigma;
+    public double Density(double truth) => NormalDistribution.Density((truth - Shown.Mean) / Sigma) / Sigma;
 
     /// <summary>Probability that a true value is read within the acceptance interval.</summary>
     public double AcceptedGiven(double truth)
@@ -74,7 +74,7 @@ internal sealed class PlaceLaw
     {
         Interval z = Accepted.Standardize(truth, ReadingSigma);
         return z.Lower + z.Upper >= 0
-            ? (NormalTail.Probability(z.Lower), NormalTail.Probability(z.Upper), 1)
-            : (NormalTail.Probability(-z.Upper), NormalTail.Probability(-z.Lower), -1);
+            ? (NormalDistribution.UpperTail(z.Lower), NormalDistribution.UpperTail(z.Upper), 1)
+            : (NormalDistribution.UpperTail(-z.Upper), NormalDistribution.UpperTail(-z.Lower), -1);
     }
 }

@@ -16,7 +16,7 @@ internal sealed class WrongAcceptance
 {
     private const ulong Seed = 106;
     private const double RelativeError = 0.02;
-    private const long FirstDraws = 1 << 11, MostDraws = 1 << 16;
+    private const long FirstDraws = 1 << 11, MostDraws = 1 << 14;
 
     private readonly int dimensions;
     private readonly PlaceLaw[] places;

@@ -7,7 +7,7 @@ namespace BandSpec.Core.Deciding;
 /// </summary>
 internal sealed class WrongTail
 {
-    private const int Cells = 200;
+    private const int Cells = 64;
     private const double Fall = 1e-13;
 
     private readonly PlaceLaw law;
