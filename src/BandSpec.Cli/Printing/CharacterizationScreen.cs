@@ -61,7 +61,8 @@ internal static class CharacterizationScreen
                 .Append(Plain, $"its spread would be {Figure(unit.SpreadWith)} with it, {Figure(unit.SpreadWithout)} without\n");
         foreach (SuspectReading slip in found.SuspectReadings)
             screen.Append(Plain, $"{ink.Yellow(kept)} line {slip.Reading.Line}, unit {slip.Reading.Unit} at {slip.Reading.Temperature}: ")
-                .Append(Plain, $"{Figure(slip.Residual)} %FS from what its other readings say, {Figure(slip.Multiple)} standard deviations\n");
+                .Append(Plain, $"{Figure(slip.Residual)} %FS from what its other readings say, {Figure(slip.Multiple)} standard deviations; ")
+                .Append(Plain, $"it would move the unit's curve by {Figure(slip.Shift)} %FS\n");
         screen.Append('\n');
     }
 }

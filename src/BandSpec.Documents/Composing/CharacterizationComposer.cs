@@ -91,8 +91,8 @@ internal static class CharacterizationComposer
             label, caption, $"{curves.Units.Count} curves from {Figures.Given(curves.Mean[0].X)} to {Figures.Given(curves.Mean[^1].X)} °C; the mean runs from "
                 + $"{Figures.Short(curves.Mean[0].Y)} to {Figures.Short(curves.Mean[^1].Y)} {Percent}.",
             new CurvesChart(
-                new CurvesWords("°C", $"error in {Percent}", "units", "mean", "mean ± 3 standard deviations over lots"),
-                curves.Units, curves.Mean, curves.Above, curves.Below), file);
+                new CurvesWords("°C", $"error in {Percent}", "units", "left out", "mean", "mean ± 3 standard deviations over lots"),
+                curves.Units, curves.LeftOut, curves.Mean, curves.Above, curves.Below), file);
     }
 
     private static IEnumerable<Block> LeftOut(Characterization found)

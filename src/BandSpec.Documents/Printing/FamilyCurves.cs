@@ -4,9 +4,9 @@ using BandSpec.Documents.Charts;
 
 namespace BandSpec.Documents.Printing;
 
-/// <summary>Curves of one pressure shape over temperature: of each unit, of the mean, and three standard deviations over lots about it.</summary>
+/// <summary>Curves of one pressure shape over temperature: of each unit, of those left out, of the mean, and three standard deviations over lots about it.</summary>
 internal sealed record FamilyCurves(
-    IReadOnlyList<IReadOnlyList<Spot>> Units, IReadOnlyList<Spot> Mean, IReadOnlyList<Spot> Above, IReadOnlyList<Spot> Below)
+    IReadOnlyList<IReadOnlyList<Spot>> Units, IReadOnlyList<IReadOnlyList<Spot>> LeftOut, IReadOnlyList<Spot> Mean, IReadOnlyList<Spot> Above, IReadOnlyList<Spot> Below)
 {
     private const int Steps = 40;
 
@@ -26,6 +26,7 @@ internal sealed record FamilyCurves(
         double Mean(double t) => Sum(t, j => found.Coefficients[j].Units.Mean.Value);
         return new FamilyCurves(
             [.. found.Curves.Select(unit => Curve(t => Sum(t, j => unit.Coefficients[j])))],
+            [.. found.SuspectCurves.Select(unit => Curve(t => Sum(t, j => unit.Coefficients[j])))],
             Curve(Mean), Curve(t => Mean(t) + (3 * Spread(t))), Curve(t => Mean(t) - (3 * Spread(t))));
     }
 

@@ -105,6 +105,9 @@ public sealed class CharacterizationTests
         Assert.Equal(spoiled[slip], reading.Reading);
         Assert.InRange(reading.Residual, 0.4, 0.6);
         Assert.Equal(47, found.Units);
+        UnitCurve strange = Assert.Single(found.SuspectCurves);
+        Assert.Equal("005", strange.Unit);
+        Assert.InRange(strange.Coefficients[1] - found.Coefficients[1].Units.Mean.Value, 4, 14);
         Assert.Equal(spoiled.Count(r => r.Unit != "005") - 1, found.Readings);
         Assert.Equal(48, Of(spoiled, Families.OpenScope with { KeepSuspects = true }).Units);
     }
