@@ -56,7 +56,9 @@ internal sealed class AgeRun(Terminal terminal)
         Temperature storage = readings.GroupBy(r => r.Storage).OrderByDescending(g => g.Select(r => r.Unit).Distinct().Count())
             .Select(g => g.Key).FirstOrDefault();
         Duration longest = readings.Select(r => r.Stored).DefaultIfEmpty(Duration.FromHours(1000)).Max();
-        return ScopeAt(earlier?.Ageing.TestTemperature ?? storage, earlier?.Ageing.TestDuration ?? longest);
+        // A platform without drift has had no test: its conditions are placeholders.
+        Ageing? stated = earlier?.Ageing is { } ageing && (ageing.Zero, ageing.Span) != (NewFrame.None, NewFrame.None) ? ageing : null;
+        return ScopeAt(stated?.TestTemperature ?? storage, stated?.TestDuration ?? longest);
     }
 
     private void Write(AgeingStatistics found, Platform? earlier)

@@ -64,7 +64,7 @@ internal sealed class CharacterizeRun(Terminal terminal)
             Dictionary<string, IReadOnlyList<string>> remarks = StatisticsRemarks.Of(found, files.Names);
             if (earlier is null)
                 NewFrame.Remark(remarks);
-            files.Write(Platform, PlatformYaml.Write(frame.With(found), remarks));
+            files.Write(Platform, Text(PlatformYaml.Write(frame.With(found), remarks), frame, found, earlier));
         }
 
         if (Report is null)
@@ -74,6 +74,12 @@ internal sealed class CharacterizeRun(Terminal terminal)
         files.Write(Report, StatisticsReports.Draw(found, family, files.Attachments(), today, options)
             .Append(new DocumentFile("characterization.json", CharacterizationJson.Of(found))));
     }
+
+    private string Text(string written, PlatformFrame frame, Characterization found, Platform? earlier) => earlier is null
+        ? written
+        : FrameInFile.Keep(
+            files.Text(Platform!), written, (frame.Name, frame.Revision) != (earlier.Name, earlier.Revision),
+            found.Scope.Reference != earlier.Temperature.Reference);
 
     private void Show(Characterization found)
     {

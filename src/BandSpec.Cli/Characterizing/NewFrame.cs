@@ -10,6 +10,9 @@ namespace BandSpec.Cli.Characterizing;
 /// </summary>
 internal static class NewFrame
 {
+    /// <summary>The drift of a family that no ageing test was made of.</summary>
+    public static Spread None { get; } = new(PercentOfSpan.FromPercent(0), PercentOfSpan.FromPercent(0));
+
     /// <summary>Says in the file beside the figures that were not measured where they come from.</summary>
     public static void Remark(Dictionary<string, IReadOnlyList<string>> remarks)
     {
@@ -27,13 +30,12 @@ internal static class NewFrame
         List<double> celsius = [.. found.Curves.SelectMany(curve => curve.Residuals).Select(r => r.Reading.Temperature.Celsius)];
         Pressure upper = range?.Upper ?? Pressure.From(1, PressureUnit.Bar);
         Pressure span = range is null ? upper : Pressure.From(range.Upper.Value - range.Lower.In(range.Upper.Unit).Value, range.Upper.Unit);
-        Spread none = new(PercentOfSpan.FromPercent(0), PercentOfSpan.FromPercent(0));
         return new PlatformFrame(
             "", "1",
             new OperatingTemperature(
                 Temperature.FromCelsius(Math.Ceiling(celsius.Min() - 0.5)), Temperature.FromCelsius(Math.Floor(celsius.Max() + 0.5)), found.Scope.Reference),
             new PressureRating(span, upper, 1, 1), Degree(found, PressureShape.Zero), Degree(found, PressureShape.Span),
-            new Ageing(none, none, found.Scope.Reference, Duration.FromHours(1000), 0.7, 0.5), null);
+            new Ageing(None, None, found.Scope.Reference, Duration.FromHours(1000), 0.7, 0.5), null);
     }
 
     private static int Degree(Characterization found, PressureShape shape) =>

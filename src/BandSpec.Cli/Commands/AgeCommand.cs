@@ -17,7 +17,7 @@ internal static class AgeCommand
     {
         Argument<string[]> files = new("READINGS") { Description = "CSV files of readings of units in storage.", Arity = ArgumentArity.OneOrMore };
         Option<string?> platform = new("--platform") { Description = "Platform file whose ageing is replaced.", HelpName = "FILE" };
-        Option<string?> report = new("--report") { Description = "Folder for the report: PDF, Markdown and JSON.", HelpName = "DIR" };
+        Option<string?> report = new("--report") { Description = "Folder for the report: PDF, Markdown, JSON and charts.", HelpName = "DIR" };
         Option<Temperature?> test = ValueOptions.Quantity(
             "--test-temperature", "Temperature that the drift is stated for; otherwise the platform's, or the storage most units had.", QuantityForms.Temperature, "TEMPERATURE");
         Option<Duration?> length = ValueOptions.Quantity(
@@ -43,6 +43,11 @@ internal static class AgeCommand
         {
             files, platform, report, test, length, energy, exponent, planUnits, planStorage, planTimes, range, output, columns, json, quiet,
         };
+        command.Validators.Add(result =>
+        {
+            if (new Option[] { planUnits, planStorage, planTimes }.Count(part => result.GetResult(part) is not null) is 1 or 2)
+                result.AddError("a planned test takes all of --plan-units, --plan-storage and --plan-times");
+        });
         command.SetAction(parsed => (int)new AgeRun(terminal)
         {
             Files = parsed.GetRequiredValue(files),

@@ -20,8 +20,11 @@ internal static class AgeingScreen
         Append(screen, "span, %FS", found.Span);
         screen.Append(Plain, $"{"activation energy",-20}{CharacterizationScreen.Range(found.ActivationEnergy)} eV\n");
         screen.Append(Plain, $"{"time exponent",-20}{CharacterizationScreen.Range(found.TimeExponent)}\n");
+        if (found.Region.Count > 0)
+            screen.Append(Plain, $"{"both jointly",-20}{CharacterizationScreen.Figure(found.Region.Min(p => p.ActivationEnergy))} to {CharacterizationScreen.Figure(found.Region.Max(p => p.ActivationEnergy))} eV, ")
+                .Append(Plain, $"exponent {CharacterizationScreen.Figure(found.Region.Min(p => p.TimeExponent))} to {CharacterizationScreen.Figure(found.Region.Max(p => p.TimeExponent))}\n");
         foreach (LeftOutTerm term in found.LeftOut)
-            screen.Append(Plain, $"\n{ink.Yellow("assumed")} {term.Term}: {term.Reason}\n");
+            screen.Append(Plain, $"{ink.Yellow("assumed")} {term.Term}: {term.Reason}\n");
         if (found is { Scope.PlannedTest: { } planned, ErrorsWithPlannedTest: { } then })
             AppendPlanned(screen, planned, found.Errors, then, ink);
         screen.Append('\n');

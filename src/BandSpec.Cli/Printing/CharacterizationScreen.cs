@@ -23,6 +23,9 @@ internal static class CharacterizationScreen
         screen.Append(Plain, $"{"repeatability",-20}{"",-30}{Range(found.Repeatability)}\n");
         foreach (CorrelationEstimate c in found.Correlations)
             screen.Append(Plain, $"correlation of {c.Pair.First} and {c.Pair.Second}: {Range(c.Value)}\n");
+        screen.Append(found.DegreeSteps.Count > 0
+            ? "degrees in temperature chosen by Schwarz' criterion, units counted; `--degree` fixes them\n"
+            : "degrees in temperature fixed beforehand\n");
         AppendNotes(screen, found, ink);
         foreach (string file in written)
             screen.Append(Plain, $"{ink.Bold("written")} {ink.Blue(file)}\n");
@@ -50,7 +53,7 @@ internal static class CharacterizationScreen
     private static void AppendNotes(StringBuilder screen, Characterization found, Ink ink)
     {
         screen.Append('\n');
-        foreach (LeftOutTerm term in found.LeftOut)
+        foreach (LeftOutTerm term in LeftOutTerm.Grouped(found.LeftOut))
             screen.Append(Plain, $"{ink.Yellow("left out")} {term.Term}: {term.Reason}\n");
         string kept = found.Scope.KeepSuspects ? "suspect, kept" : "suspect, left out";
         foreach (SuspectUnit unit in found.SuspectUnits)
@@ -58,7 +61,8 @@ internal static class CharacterizationScreen
                 .Append(Plain, $"its spread would be {Figure(unit.SpreadWith)} with it, {Figure(unit.SpreadWithout)} without\n");
         foreach (SuspectReading slip in found.SuspectReadings)
             screen.Append(Plain, $"{ink.Yellow(kept)} line {slip.Reading.Line}, unit {slip.Reading.Unit} at {slip.Reading.Temperature}: ")
-                .Append(Plain, $"{Figure(slip.Residual)} %FS from what its other readings say, {Figure(slip.Multiple)} standard deviations\n");
+                .Append(Plain, $"{Figure(slip.Residual)} %FS from what its other readings say, {Figure(slip.Multiple)} standard deviations; ")
+                .Append(Plain, $"it would move the unit's curve by {Figure(slip.Shift)} %FS\n");
         screen.Append('\n');
     }
 }

@@ -40,7 +40,7 @@ internal static class DraftScreen
         Pressure pressure = specification.Application.Requirement.Pressure.At(worst.PressureFraction);
         string place = string.Create(Plain, $"{worst.Temperature.Celsius:0.#} °C and {pressure.Value:0.###} {pressure.Unit}");
         bool isPinned = specification.Application.Requirement.Compensation.Pinned is not null;
-        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red(specification.Optimum.Proven || isPinned ? "NOT FEASIBLE" : "NO PLAN FOUND"))}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
+        screen.Append(Plain, $"{(specification.Feasible ? ink.Green("FEASIBLE") : ink.Red(specification.Optimum.Proven || isPinned ? "NOT FEASIBLE" : "NO PLAN FOUND"))}{Asked(specification)}  margin {ink.Bold(Margin(specification.Bands.Margin))}, least at {place}\n");
         string proof = specification.Optimum.Proven ? ProofWords.Of(specification) : ink.Yellow(ProofWords.Of(specification));
         screen.Append(Plain, $"{proof}; a perfect correction would have {Margin(specification.Floor.Margin)}\n");
         if (specification is { Bound: { } bound, Application.Platform.Sample: { } sample })
@@ -54,6 +54,11 @@ internal static class DraftScreen
             screen.Append(Plain, $"{ink.Yellow("no plan can help: what compensation cannot remove fills the band by itself")}\n");
         screen.Append('\n');
     }
+
+    /// <summary>The confidence that was asked for, where it is what decides.</summary>
+    private static string Asked(Specification specification) =>
+        !specification.Feasible && specification is { Bands.Margin: >= 1, Application.Requirement.Capability.Confidence: { } confidence }
+            ? string.Create(Plain, $" with {100 * confidence:0.#} % confidence") : "";
 
     private static void AppendPlan(StringBuilder screen, Specification specification, Ink ink)
     {

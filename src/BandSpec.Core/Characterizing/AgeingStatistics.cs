@@ -66,7 +66,17 @@ public sealed record AgeingStatistics
         ArgumentNullException.ThrowIfNull(readings);
         ArgumentNullException.ThrowIfNull(scope);
         IReadOnlyList<StoredUnit> units = StoredUnit.Of(readings);
-        return Checked<AgeingStatistics>.Of(DriftSupport.FindingsIn(units, scope), () => new DriftStatistics(units, scope).Estimate());
+        IReadOnlyList<Finding> missing = DriftSupport.FindingsIn(units, scope);
+        AgeingStatistics? found = missing.Count > 0 ? null : new DriftStatistics(units, scope, isEnergyOpen: false).Estimate();
+        if (found is { ActivationEnergy: { Lower: 0, Upper: double.PositiveInfinity } })
+        {
+            if (scope.AssumedActivationEnergy is null)
+                missing = [DriftSupport.OpenEnergy];
+            else
+                found = new DriftStatistics(units, scope, isEnergyOpen: true).Estimate();
+        }
+
+        return Checked<AgeingStatistics>.Of(missing, () => found!);
     }
 
     private static Spread Spread(SpreadEstimate estimate) => new(

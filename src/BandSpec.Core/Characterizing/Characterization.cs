@@ -56,6 +56,9 @@ public sealed record Characterization
     /// <summary>The curves of the units that were used.</summary>
     public required IReadOnlyList<UnitCurve> Curves { get; init; }
 
+    /// <summary>The curves of the suspect units that were left out, each by its own readings alone; without those whose readings do not suffice.</summary>
+    public required IReadOnlyList<UnitCurve> SuspectCurves { get; init; }
+
     /// <summary>Minus twice the logarithm of the restricted likelihood.</summary>
     public required double Deviance { get; init; }
 

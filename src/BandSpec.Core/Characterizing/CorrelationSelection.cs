@@ -5,8 +5,8 @@ namespace BandSpec.Core.Characterizing;
 
 /// <summary>
 /// Chooses the correlated pairs. The score test (Rao 1948, Proc. Camb. Phil. Soc. 44, 50-57) asks of every pair how steeply the likelihood
-/// rises when its correlation leaves zero, without fitting it; the clearest pair is taken in, all is fitted again, until no pair is clear at a
-/// family-wise level of 5 % (Bonferroni). A platform file with ninety doubtful correlations would carry noise into every specification.
+/// rises when its correlation leaves zero, without fitting it; the clearest pair is taken in and all is fitted again, until no pair is clear
+/// at a family-wise level of 5 % (Bonferroni). A slope at zero is a promise only: a pair whose fit does not lower the deviance as much stays out. A platform file with ninety doubtful correlations would carry noise into every specification.
 /// </summary>
 internal static class CorrelationSelection
 {
@@ -17,16 +17,21 @@ internal static class CorrelationSelection
     /// <summary>The fit with every clear pair.</summary>
     public static SpreadFit Choose(SpreadFit fit, IReadOnlyList<ReadingColumn> columns)
     {
-        for (int taken = 0; taken < MostPairs; taken++)
+        HashSet<(int First, int Second)> refused = [];
+        while (fit.Law.Pairs.Count < MostPairs)
         {
-            List<(int First, int Second)> open = [.. OpenPairs(fit, columns)];
+            List<(int First, int Second)> open = [.. OpenPairs(fit, columns).Where(pair => !refused.Contains(pair))];
             if (open.Count == 0)
                 return fit;
             (int First, int Second) clearest = open.MaxBy(pair => Score(fit.Fit, pair));
-            double limit = NormalDistribution.Quantile(FamilyLevel / 2 / open.Count);
+            double limit = NormalDistribution.Quantile(FamilyLevel / 2 / (open.Count + refused.Count));
             if (Score(fit.Fit, clearest) < limit * limit)
                 return fit;
-            fit = fit.WithPair(clearest);
+            SpreadFit trial = fit.WithPair(clearest);
+            if (fit.Fit.Deviance - trial.Fit.Deviance >= limit * limit)
+                fit = trial;
+            else
+                refused.Add(clearest);
         }
 
         return fit;

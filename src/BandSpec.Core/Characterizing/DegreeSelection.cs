@@ -29,6 +29,14 @@ internal sealed class DegreeSelection(
     /// <summary>The decisions in order.</summary>
     public IReadOnlyList<DegreeStep> Steps => steps;
 
+    /// <summary>The coefficients that were not worth it, with the reason.</summary>
+    public IEnumerable<LeftOutTerm> LeftOut =>
+        from step in steps
+        where !step.Kept && step.Degree == degrees[step.Shape] + 1
+        select new LeftOutTerm(
+            new CoefficientName(step.Shape, step.Degree).ToString(),
+            "too little in the readings to pay for another mean and spread by Schwarz' criterion");
+
     /// <summary>The columns that are kept, in the order of those supported.</summary>
     public IReadOnlyList<ReadingColumn> Choose()
     {

@@ -12,7 +12,7 @@ namespace BandSpec.Core.Characterizing;
 internal sealed class DriftRegion(
     DriftLikelihood likelihood, DriftSupport support, DriftLaw law, Grid covariance, int units, double confidence)
 {
-    private const int Corners = 24;
+    private const int Corners = 48;
 
     /// <summary>Where the search for an edge is given up, in standard errors: the readings set no limit there.</summary>
     private const double Farthest = 12;

@@ -15,10 +15,10 @@ internal sealed class DriftStatistics
     private readonly VarianceEstimates variances;
     private readonly DriftAccuracy accuracy;
 
-    public DriftStatistics(IReadOnlyList<StoredUnit> units, AgeingScope scope)
+    public DriftStatistics(IReadOnlyList<StoredUnit> units, AgeingScope scope, bool isEnergyOpen)
     {
         (this.units, this.scope) = (units, scope);
-        support = new DriftSupport(units, scope);
+        support = new DriftSupport(units, scope, isEnergyOpen);
         likelihood = new DriftLikelihood(units, scope, support);
         law = likelihood.MostLikely();
         (NestedLikelihood restricted, fit) = likelihood.Fit(law, restricted: true);

@@ -21,14 +21,18 @@ internal sealed class DriftSupport
     private const double UsualEnergy = 0.7;
     private const double UsualExponent = 0.5;
 
-    public DriftSupport(IReadOnlyList<StoredUnit> units, AgeingScope scope)
+    /// <summary>Judges the readings.</summary>
+    /// <param name="units">The units.</param>
+    /// <param name="scope">What is asked for.</param>
+    /// <param name="isEnergyOpen">Whether they were found to set no limits to the activation energy.</param>
+    public DriftSupport(IReadOnlyList<StoredUnit> units, AgeingScope scope, bool isEnergyOpen = false)
     {
         var conditions = units.SelectMany(unit => unit.Readings).Where(r => r.Stored.Hours > 0)
             .Select(r => (r.Storage.Celsius, r.Stored.Hours)).Distinct().ToList();
         Temperatures = conditions.Select(c => c.Celsius).Distinct().Count();
         TimesAtOne = conditions.GroupBy(c => c.Celsius).Select(group => group.Count()).DefaultIfEmpty(0).Max();
         List<DriftFigure> free = [];
-        if (Temperatures > 1)
+        if (Temperatures > 1 && !isEnergyOpen)
             free.Add(DriftFigure.Energy);
         if (TimesAtOne > 1)
             free.Add(DriftFigure.Exponent);
@@ -57,11 +61,17 @@ internal sealed class DriftSupport
     {
         if (!Free.Contains(DriftFigure.Energy))
             yield return new LeftOutTerm(
-                "activation-energy", FormattableString.Invariant($"all units were stored at one temperature; {StartEnergy} eV is assumed"));
+                "activation-energy", FormattableString.Invariant(
+                    $"{(Temperatures > 1 ? "the readings set no limits to it" : "all units were stored at one temperature")}; {StartEnergy} eV is assumed"));
         if (!Free.Contains(DriftFigure.Exponent))
             yield return new LeftOutTerm(
                 "time-exponent", FormattableString.Invariant($"no storage temperature was read at two times; {StartExponent} is assumed"));
     }
+
+    /// <summary>The drift is so small beside its scatter that every activation energy agrees with it.</summary>
+    public static Finding OpenEnergy { get; } = new(
+        FieldPath.InReadings("storage"), "open-energy", "the readings set no limits to the activation energy: drift hardly differs between the storage temperatures",
+        "more units, longer storage or storage temperatures further apart, or an activation energy to assume");
 
     /// <summary>What is missing for any answer.</summary>
     public static IReadOnlyList<Finding> FindingsIn(IReadOnlyList<StoredUnit> units, AgeingScope scope)

@@ -19,9 +19,11 @@ internal sealed class FamilyStatistics(MeasuredFamily family, CharacterizationSc
         DegreeSelection selection = Selection(clean, support);
         IReadOnlyList<ReadingColumn> columns = selection.Choose();
         (IReadOnlyList<SuspectUnit> strangers, SpreadFit fit) = new UnitScreen(columns).Find(clean);
+        bool IsStrange(MeasuredUnit unit) => strangers.Any(s => s.Lot == unit.Lot && s.Unit == unit.Name);
+        List<MeasuredUnit> strange = [.. clean.Units.Where(IsStrange)];
         if (strangers.Count > 0)
         {
-            clean = clean.Without(unit => strangers.Any(s => s.Lot == unit.Lot && s.Unit == unit.Name));
+            clean = clean.Without(IsStrange);
             selection = Selection(clean, support);
             columns = selection.Choose();
         }
@@ -30,7 +32,8 @@ internal sealed class FamilyStatistics(MeasuredFamily family, CharacterizationSc
         MeasuredFamily used = scope.KeepSuspects ? family : clean;
         if (found)
             fit = SpreadFit.Of(used.Sample(columns), columns, restricted: true);
-        return new StatisticsReport(used, columns, Correlated(fit, columns), scope).With(support.LeftOut, selection.Steps, strangers, slips);
+        return new StatisticsReport(used, columns, Correlated(fit, columns), scope)
+            .With([.. support.LeftOut, .. selection.LeftOut], selection.Steps, strangers, slips, scope.KeepSuspects ? [] : strange);
     }
 
     private DegreeSelection Selection(MeasuredFamily clean, Support support) => new(clean, support.Columns, scope.PinnedDegrees);

@@ -2,6 +2,8 @@ using BandSpec.Core.Numerics;
 using BandSpec.Core.Numerics.Dense;
 using BandSpec.Core.Numerics.NestedModels;
 using MathNet.Numerics.Distributions;
+using MathNet.Numerics.LinearAlgebra;
+using MathNet.Numerics.LinearAlgebra.Factorization;
 
 namespace BandSpec.Core.Characterizing;
 
@@ -21,7 +23,7 @@ internal sealed class StatisticsReport(
     /// <summary>The finished record.</summary>
     public Characterization With(
         IReadOnlyList<LeftOutTerm> leftOut, IReadOnlyList<DegreeStep> steps,
-        IReadOnlyList<SuspectUnit> strangers, IReadOnlyList<SuspectReading> slips)
+        IReadOnlyList<SuspectUnit> strangers, IReadOnlyList<SuspectReading> slips, IReadOnlyList<MeasuredUnit> leftOutUnits)
     {
         int[] coefficients = [.. Enumerable.Range(0, columns.Count).Where(j => columns[j].Kind == ColumnKind.Coefficient)];
         return new Characterization
@@ -42,6 +44,7 @@ internal sealed class StatisticsReport(
             SuspectUnits = strangers,
             SuspectReadings = slips,
             Curves = Curves(coefficients),
+            SuspectCurves = [.. leftOutUnits.Select(unit => OwnCurve(unit, coefficients)).OfType<UnitCurve>()],
             Deviance = fit.Deviance,
         };
     }
@@ -87,5 +90,19 @@ internal sealed class StatisticsReport(
                 [.. unit.Readings.Select((reading, i) => new ReadingResidual(
                     reading, reading.Error.Percent - Vectors.Dot(rows.Row(i)[..columns.Count], deviation.Predicted)))]);
         })];
+    }
+
+    /// <summary>A unit's curve by least squares; null when its readings do not determine every term.</summary>
+    private UnitCurve? OwnCurve(MeasuredUnit unit, int[] coefficients)
+    {
+        Grid rows = unit.Rows(columns);
+        Svd<double> parts = Matrix<double>.Build.Dense(rows.Rows, columns.Count, (i, j) => rows[i, j]).Svd();
+        if (parts.Rank < columns.Count)
+            return null;
+        Vector<double> own = parts.Solve(Vector<double>.Build.Dense(rows.Rows, i => rows[i, columns.Count]));
+        return new UnitCurve(
+            unit.Lot, unit.Name, [.. coefficients.Select(j => own[j])],
+            [.. unit.Readings.Select((reading, i) => new ReadingResidual(
+                reading, reading.Error.Percent - Vectors.Dot(rows.Row(i)[..columns.Count], own.AsArray())))]);
     }
 }

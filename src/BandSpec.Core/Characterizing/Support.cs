@@ -6,7 +6,14 @@ namespace BandSpec.Core.Characterizing;
 /// <summary>A term that the readings cannot speak of.</summary>
 /// <param name="Term">Its name as in files: a coefficient such as <c>span.4</c>, or <c>thermal-hysteresis</c>.</param>
 /// <param name="Reason">Why, a sentence without a full stop.</param>
-public sealed record LeftOutTerm(string Term, string Reason);
+public sealed record LeftOutTerm(string Term, string Reason)
+{
+    /// <summary>For reading: terms with the same reason as one, their names in a row.</summary>
+    /// <param name="terms">The terms.</param>
+    public static IEnumerable<LeftOutTerm> Grouped(IReadOnlyList<LeftOutTerm> terms) => terms
+        .GroupBy(term => term.Reason)
+        .Select(alike => new LeftOutTerm(string.Join(", ", alike.Select(term => term.Term)), alike.Key));
+}
 
 /// <summary>
 /// Which columns the readings determine. A coefficient <c>ψ_j τ^k</c> needs units that were read at more than <c>k</c> temperatures with more

@@ -1,4 +1,5 @@
 using BandSpec.Core.Numerics;
+using BandSpec.Core.Numerics.RandomStreams;
 using BandSpec.Core.Quantities;
 
 namespace BandSpec.Core.Requirements;
@@ -19,7 +20,7 @@ public static class AgeingLaw
     /// <param name="test">Temperature of the test.</param>
     /// <param name="temperature">Temperature in use.</param>
     public static double Acceleration(double activationEnergy, Temperature test, Temperature temperature) =>
-        Math.Exp(activationEnergy / BoltzmannElectronvolts * ((1 / test.Kelvin) - (1 / temperature.Kelvin)));
+        PortableFunctions.Exp(activationEnergy / BoltzmannElectronvolts * ((1 / test.Kelvin) - (1 / temperature.Kelvin)));
 
     /// <summary>The service life as time at the test's temperature: <c>Σ dwell · mean of AF over the bin</c>.</summary>
     public static Duration EquivalentTime(Ageing ageing, IReadOnlyList<DwellBin> profile)
@@ -33,7 +34,7 @@ public static class AgeingLaw
     public static double AgeFactor(Ageing ageing, IReadOnlyList<DwellBin> profile)
     {
         ArgumentNullException.ThrowIfNull(ageing);
-        return Math.Pow(EquivalentTime(ageing, profile).Hours / ageing.TestDuration.Hours, ageing.TimeExponent);
+        return PortableFunctions.Power(EquivalentTime(ageing, profile).Hours / ageing.TestDuration.Hours, ageing.TimeExponent);
     }
 
     /// <summary>

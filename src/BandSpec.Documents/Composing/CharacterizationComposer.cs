@@ -35,7 +35,7 @@ internal static class CharacterizationComposer
 
     private static IEnumerable<Block> Statistics(Characterization found)
     {
-        string confidence = Figures.Short(100 * found.Scope.Confidence) + " %";
+        string confidence = Figures.Given(100 * found.Scope.Confidence) + " %";
         yield return new Heading(1, "1", "Statistics");
         yield return new Paragraph(
             $"Coefficients of the raw error in %FS, restricted maximum likelihood; brackets hold {confidence} intervals. "
@@ -67,28 +67,38 @@ internal static class CharacterizationComposer
         yield return new Heading(1, "2", "Curves and residuals");
         yield return Curve(found, PressureShape.Zero, "Figure 1", "Zero of every unit over temperature", "raw-zero.svg");
         yield return Curve(found, PressureShape.Span, "Figure 2", "Span error of every unit over temperature", "raw-span.svg");
-        List<Spot> residuals = [.. found.Curves.SelectMany(c => c.Residuals).Select(r => new Spot(r.Reading.Temperature.Celsius, r.Residual))];
-        yield return new Figure(
-            "Figure 3", "What the curves leave of the readings; dashed: two standard deviations of a reading",
-            $"{residuals.Count} residuals over temperature with a standard deviation of {Figures.Short(found.Repeatability.Value)} {Percent}.",
-            new ResidualChart("°C", $"residual in {Percent}", residuals, found.Repeatability.Value), "residuals.svg");
+        yield return Residuals(found, r => r.Temperature.Celsius, "temperature", "°C", "Figure 3", "residuals.svg");
+        yield return Residuals(found, r => r.PressureFraction, "pressure", "pressure fraction", "Figure 4", "residuals-pressure.svg");
+    }
+
+    /// <summary>At each setting the units stand side by side in their order, so that one that scatters more is seen.</summary>
+    private static Figure Residuals(Characterization found, Func<UnitReading, double> at, string word, string across, string label, string file)
+    {
+        double[] settings = [.. found.Curves.SelectMany(c => c.Residuals).Select(r => at(r.Reading)).Distinct().Order()];
+        double width = 0.6 * settings.Zip(settings.Skip(1), (low, high) => high - low).DefaultIfEmpty(1).Min();
+        List<Spot> residuals = [.. found.Curves.SelectMany((curve, i) => curve.Residuals.Select(r => new Spot(
+            at(r.Reading) + (width * (((i + 0.5) / found.Curves.Count) - 0.5)), r.Residual)))];
+        return new Figure(
+            label, $"What the curves leave of the readings, over {word}: at each setting the units side by side; dashed: two standard deviations of a reading",
+            $"{residuals.Count} residuals over {word} with a standard deviation of {Figures.Short(found.Repeatability.Value)} {Percent}.",
+            new ResidualChart(across, $"residual in {Percent}", residuals, found.Repeatability.Value), file);
     }
 
     private static Figure Curve(Characterization found, PressureShape shape, string label, string caption, string file)
     {
         FamilyCurves curves = FamilyCurves.Of(found, shape);
         return new Figure(
-            label, caption, $"{curves.Units.Count} curves from {Figures.Short(curves.Mean[0].X)} to {Figures.Short(curves.Mean[^1].X)} °C; the mean runs from "
+            label, caption, $"{curves.Units.Count} curves from {Figures.Given(curves.Mean[0].X)} to {Figures.Given(curves.Mean[^1].X)} °C; the mean runs from "
                 + $"{Figures.Short(curves.Mean[0].Y)} to {Figures.Short(curves.Mean[^1].Y)} {Percent}.",
             new CurvesChart(
-                new CurvesWords("°C", $"error in {Percent}", "units", "mean", "mean ± 3 standard deviations over lots"),
-                curves.Units, curves.Mean, curves.Above, curves.Below), file);
+                new CurvesWords("°C", $"error in {Percent}", "units", "left out", "mean", "mean ± 3 standard deviations over lots"),
+                curves.Units, curves.LeftOut, curves.Mean, curves.Above, curves.Below), file);
     }
 
     private static IEnumerable<Block> LeftOut(Characterization found)
     {
         yield return new Heading(1, "3", "What was left out, and why");
-        List<Phrase> items = [.. found.LeftOut.Select(term => (Phrase)$"{term.Term}: {term.Reason}.")];
+        List<Phrase> items = [.. LeftOutTerm.Grouped(found.LeftOut).Select(term => (Phrase)$"{term.Term}: {term.Reason}.")];
         items.AddRange(found.SuspectUnits.Select(unit => (Phrase)(
             $"Unit {unit.Unit}{(unit.Lot.Length > 0 ? $" of lot {unit.Lot}" : "")}: {unit.Term} is off by {Figures.Short(unit.Multiple)} standard deviations of the others; "
             + $"with it that spread would be {Figures.Short(unit.SpreadWith)} instead of {Figures.Short(unit.SpreadWithout)} {Percent}.")));

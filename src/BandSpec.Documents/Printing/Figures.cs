@@ -10,6 +10,9 @@ internal static class Figures
 
     public static string Short(double value) => Digits(value, 3);
 
+    /// <summary>A number that was chosen, not measured, such as a temperature or a confidence: no digit more than it has, at most four.</summary>
+    public static string Given(double value) => value.ToString("0.####", CultureInfo.InvariantCulture).Replace('-', '\u2212');
+
     /// <summary>The estimate with its interval in brackets; the estimate alone where there is none.</summary>
     public static string WithRange(Estimate estimate) => estimate switch
     {

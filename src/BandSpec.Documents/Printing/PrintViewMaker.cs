@@ -46,7 +46,9 @@ internal sealed class PrintViewMaker
     private SampleView? Sample(PlatformSample? sample) => sample is null || _specification.Bound is not { } bound
         ? null
         : new SampleView(
-            Whole(sample.Units), Whole(sample.Lots), Whole(sample.Readings), Shown(Rounded.Given(100 * bound.Confidence)), Margin(bound.Lower));
+            Whole(sample.Units), Whole(sample.Lots), Whole(sample.Readings), Shown(Rounded.Given(100 * bound.Confidence)), Margin(bound.Lower),
+            _specification.FurtherUnits is { } further ? Whole(further) : "",
+            !_specification.Feasible && _specification.Bands.Margin >= 1 && _specification.Choice.HoldsEverywhere);
 
     private static string Whole(int count) => count.ToString(CultureInfo.InvariantCulture);
 

@@ -17,7 +17,8 @@ internal static class ViewForTemplates
         ("worst", Of(view.Verdict.Worst)), ("tightest", Of(view.Verdict.Tightest)), ("plan", Of(view.Plan)), ("test", Of(view.Test)));
 
     private static ScriptObject Of(SampleView? s) => Script(
-        ("units", s?.Units ?? ""), ("lots", s?.Lots ?? ""), ("readings", s?.Readings ?? ""), ("confidence", s?.Confidence ?? ""), ("margin", s?.Margin ?? ""));
+        ("units", s?.Units ?? ""), ("lots", s?.Lots ?? ""), ("readings", s?.Readings ?? ""), ("confidence", s?.Confidence ?? ""), ("margin", s?.Margin ?? ""),
+        ("further_units", s?.FurtherUnits ?? ""), ("falls_short", s?.FallsShort ?? false));
 
     private static ScriptObject Of(OptimumView? o) => Script(
         ("temperatures", o?.Temperatures ?? ""), ("margin", o?.Margin ?? ""), ("cost", o?.Cost ?? ""), ("is_taken", o?.IsTaken ?? false),

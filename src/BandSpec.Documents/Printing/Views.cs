@@ -101,8 +101,11 @@ internal sealed record PrintView(
     public SampleView? Sample { get; init; }
 }
 
-/// <summary>The sample behind the statistics, and the margin that can be claimed from it.</summary>
-internal sealed record SampleView(string Units, string Lots, string Readings, string Confidence, string Margin);
+/// <summary>
+/// The sample behind the statistics, and the margin that can be claimed from it; how many more units would raise that to 1, empty where none
+/// are needed or none suffice. It falls short when it alone is why the plan does not fit: the margin is there, the confidence is not.
+/// </summary>
+internal sealed record SampleView(string Units, string Lots, string Readings, string Confidence, string Margin, string FurtherUnits, bool FallsShort);
 
 /// <summary>What the search would have chosen: temperatures in °C, cost per unit; whether it is what was pinned, and whether it fits.</summary>
 internal sealed record OptimumView(string Temperatures, string Margin, string Cost, bool IsTaken, bool Fits);

@@ -1,4 +1,5 @@
 using BandSpec.Core.Findings;
+using BandSpec.Files.Csv;
 
 namespace BandSpec.Files.LotReadings;
 
@@ -53,10 +54,10 @@ internal sealed class ReadingColumns
         List<Finding> findings = [];
         for (int i = 0; i < headings.Count; i++)
         {
-            (string name, string unit) = Split(headings[i]);
-            if (Accepted.FirstOrDefault(entry => entry.Headings.Contains(name)) is not { Headings: not null } known)
+            ColumnHeading heading = ColumnHeading.Of(headings[i]);
+            if (Accepted.FirstOrDefault(entry => entry.Headings.Contains(heading.Key)) is not { Headings: not null } known)
                 found.Unused.Add(headings[i]);
-            else if (!found.columns.TryAdd(known.Column, new(i, headings[i], unit)))
+            else if (!found.columns.TryAdd(known.Column, new(i, headings[i], heading.Unit)))
                 findings.Add(new(FieldPath.InReadings(headings[i]), "double-column",
                     $"two columns for the {Word(known.Column)}: `{found.columns[known.Column].Heading}` and `{headings[i]}`", "one of them"));
         }
@@ -82,19 +83,10 @@ internal sealed class ReadingColumns
         FieldPath.InReadings(""), "missing-column", $"no column for the {Word(column)} among {string.Join(", ", Headings.Select(h => $"`{h}`"))}",
         $"a column {Names(column)}")
     {
-        Nearest = Accepted[(int)column].Headings.FirstOrDefault(name => Unused.Exists(heading => Spelling.Nearest(Split(heading).Name, [name]) is not null)),
+        Nearest = Accepted[(int)column].Headings.FirstOrDefault(name => Unused.Exists(heading => Spelling.Nearest(ColumnHeading.Of(heading).Key, [name]) is not null)),
     };
 
     private static string Names(LotColumn column) => string.Join(", ", Accepted[(int)column].Headings.Select(name => $"`{name}`"));
 
     private static string Word(LotColumn column) => column == LotColumn.Serial ? "serial number" : column.ToString().ToLowerInvariant();
-
-    /// <summary>Name and unit of <c>Reading [mV]</c> or <c>reading (mV)</c>: lower case, blanks and underscores as hyphens.</summary>
-    private static (string Name, string Unit) Split(string heading)
-    {
-        int open = heading.AsSpan().IndexOfAny('[', '('), close = heading.AsSpan().LastIndexOfAny(']', ')');
-        string unit = open > 0 && close > open ? heading[(open + 1)..close].Trim() : "";
-        string name = (open > 0 ? heading[..open] : heading).Trim().ToLowerInvariant().Replace(' ', '-').Replace('_', '-');
-        return (name, unit);
-    }
 }

@@ -1,6 +1,7 @@
 using System.Globalization;
 using BandSpec.Core.LotJudging;
 using BandSpec.Core.TestLimits;
+using BandSpec.Files.Csv;
 
 namespace BandSpec.Files.LotReadings;
 
@@ -49,7 +50,7 @@ internal sealed class ReadingTaker(LotCollector collector, ReadingLayout layout,
     {
         bool numbers = double.TryParse(temperature, NumberStyles.Float, culture, out double celsius)
             & double.TryParse(pressure, NumberStyles.Float, culture, out double value);
-        return numbers && DirectionOf(direction) is var (known, side) && known
+        return numbers && DirectionWords.TryRead(direction, out PressureDirection? side)
             ? points.ByPlace(celsius, value * layout.PressureUnit.Pascals, side)
             : -1;
     }
@@ -97,12 +98,4 @@ internal sealed class ReadingTaker(LotCollector collector, ReadingLayout layout,
         Converted += factor == 1 ? 0 : 1;
         return value * factor;
     }
-
-    private static (bool Known, PressureDirection? Side) DirectionOf(ReadOnlySpan<char> text) => text switch
-    {
-        "" => (true, null),
-        "rising" or "Rising" or "up" or "Up" or "increasing" or "+" => (true, PressureDirection.Rising),
-        "falling" or "Falling" or "down" or "Down" or "decreasing" or "-" => (true, PressureDirection.Falling),
-        _ => (false, null),
-    };
 }

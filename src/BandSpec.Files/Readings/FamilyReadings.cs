@@ -1,6 +1,7 @@
 using BandSpec.Core.Characterizing;
 using BandSpec.Core.Quantities;
 using BandSpec.Core.TestLimits;
+using BandSpec.Files.Csv;
 using BandSpec.Files.Forms;
 using BandSpec.Files.Inputs;
 
@@ -12,9 +13,6 @@ namespace BandSpec.Files.Readings;
 /// </summary>
 public static class FamilyReadings
 {
-    private static readonly string[] Rising = ["rising", "up"];
-    private static readonly string[] Falling = ["falling", "down"];
-
     /// <summary>Reads a file.</summary>
     /// <param name="content">The file.</param>
     /// <param name="format">What its header does not say.</param>
@@ -52,11 +50,10 @@ public static class FamilyReadings
     private static bool TryDirection(ReadingTable table, ReadingRow row, out PressureDirection? direction)
     {
         direction = null;
-        if (!table.Has(ReadingField.Direction) || row.TextOf(table.IndexOf(ReadingField.Direction)).ToLowerInvariant() is not { Length: > 0 } word)
+        if (!table.Has(ReadingField.Direction) || row.TextOf(table.IndexOf(ReadingField.Direction)) is not { Length: > 0 } word
+            || DirectionWords.TryRead(word, out direction))
             return true;
-        direction = Rising.Contains(word) ? PressureDirection.Rising : Falling.Contains(word) ? PressureDirection.Falling : null;
-        if (direction is null)
-            table.Complain(row, ReadingField.Direction, "direction", $"`{Form.Shorten(word)}`", "rising or falling, or nothing when it was not noted");
-        return direction is not null;
+        table.Complain(row, ReadingField.Direction, "direction", $"`{Form.Shorten(word)}`", "rising or falling, or nothing when it was not noted");
+        return false;
     }
 }

@@ -22,7 +22,8 @@ internal static class MeasuredError
             return null;
         if (format.Range is { } range)
             return (pressure.Pascals - range.Lower.Pascals) / range.SpanInPascals;
-        table.Complain(row, ReadingField.Pressure, "no-range", $"`{pressure}` is a part of an unknown range", "the range of the readings, such as `0 bar..25 bar`");
+        table.ComplainOfColumn(
+            ReadingField.Pressure, "no-range", "pressures of a range that is not known", "the range of the readings, such as `--range \"0 bar..25 bar\"`");
         return null;
     }
 
@@ -35,9 +36,9 @@ internal static class MeasuredError
         string unit = table.UnitOf(ReadingField.Reading);
         if (format.Output is { } output && (unit.Length == 0 || unit == output.Unit))
             return PercentOfSpan.FromPercent(output.ErrorOf(reading, fraction));
-        table.Complain(
-            row, ReadingField.Reading, "no-output", format.Output is null ? "a reading whose nominal value is unknown" : $"a reading in {unit}",
-            format.Output is { } known ? $"readings in {known.Unit}" : "the nominal output, such as `0 mV..100 mV`, or a column `error [%FS]`");
+        table.ComplainOfColumn(
+            ReadingField.Reading, "no-output", format.Output is null ? "readings whose nominal value is not known" : $"readings in {unit}",
+            format.Output is { } known ? $"readings in {known.Unit}" : "the nominal output, such as `--output \"0 mV..100 mV\"`, or a column `error [%FS]`");
         return null;
     }
 }

@@ -1,3 +1,5 @@
+using BandSpec.Files.Csv;
+
 namespace BandSpec.Files.Readings;
 
 /// <summary>A column that files of readings may have.</summary>
@@ -28,16 +30,12 @@ internal sealed record ReadingField(string Name, string DefaultUnit, params stri
 
     public static ReadingField Reading { get; } = new("reading", "", "output");
 
-    /// <summary>Whether a header's name means this column.</summary>
-    /// <param name="header">The name without its unit.</param>
+    /// <summary>Whether a heading means this column.</summary>
+    /// <param name="heading">The heading.</param>
     /// <param name="given">The name that the user gave for the column, if any.</param>
-    public bool Matches(string header, string? given)
-    {
-        if (given is not null)
-            return string.Equals(header, given, StringComparison.OrdinalIgnoreCase);
-        string plain = header.Replace(' ', '-').Replace('_', '-').ToLowerInvariant();
-        return plain == Name || Others.Contains(plain);
-    }
+    public bool Matches(ColumnHeading heading, string? given) => given is not null
+        ? string.Equals(heading.Name, given, StringComparison.OrdinalIgnoreCase)
+        : heading.Key == Name || Others.Contains(heading.Key);
 
     /// <summary>The names in words, for a finding.</summary>
     public string Names => string.Join(" or ", Others.Prepend(Name).Select(name => $"`{name}`"));

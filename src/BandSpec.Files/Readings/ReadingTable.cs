@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using BandSpec.Core.Findings;
+using BandSpec.Files.Csv;
 using BandSpec.Files.Forms;
 using BandSpec.Files.Inputs;
 using BandSpec.Files.Yaml;
@@ -20,7 +21,9 @@ internal sealed class ReadingTable
     private readonly SourceText text;
     private readonly FoundFaults faults = new(InputFile.Readings);
     private readonly ReadingsFormat format;
-    private readonly List<HeaderCell> header = [];
+    private readonly List<ColumnHeading> header = [];
+    private readonly HashSet<ReadingField> condemned = [];
+    private ReadingRow heading = new(1, []);
 
     private ReadingTable(InputContent content, ReadingsFormat format)
     {
@@ -68,11 +71,18 @@ internal sealed class ReadingTable
 
     /// <summary>The place of a column; −1 when it is not there.</summary>
     internal int IndexOf(ReadingField field) =>
-        header.FindIndex(cell => field.Matches(cell.Name, format.ColumnNames.GetValueOrDefault(field.Name)));
+        header.FindIndex(cell => field.Matches(cell, format.ColumnNames.GetValueOrDefault(field.Name)));
 
     /// <summary>Adds a finding about a cell.</summary>
     internal void Complain(ReadingRow row, ReadingField field, string rule, string found, string accepted) =>
         faults.Add(row.ExtentOf(IndexOf(field)), field.Name, rule, found, accepted);
+
+    /// <summary>Adds a finding about a whole column, once, at its name in the header.</summary>
+    internal void ComplainOfColumn(ReadingField field, string rule, string found, string accepted)
+    {
+        if (condemned.Add(field))
+            Complain(heading, field, rule, found, accepted);
+    }
 
     private void ReadRows(IReadOnlyList<ReadingField[]> needed, Action<ReadingRow> take)
     {
@@ -94,7 +104,11 @@ internal sealed class ReadingTable
             if (header.Count > 0 && cells.Any(cell => cell.Trim().Length > 0))
                 TakeRow(new ReadingRow(row.LineNumberFrom + skipped, cells), take);
             else if (header.Count == 0)
-                header.AddRange(cells.Select(HeaderCell.Of));
+            {
+                heading = new ReadingRow(skipped + 1, cells);
+                header.AddRange(cells.Select(ColumnHeading.Of));
+            }
+
             if (!hasAll && !(hasAll = HasAll(needed, skipped + 1)))
                 return;
         }
@@ -123,17 +137,4 @@ internal sealed class ReadingTable
         from located in faults.All
         let at = located.Extent
         select new PlacedFinding(located.Finding, new Place(name, at.Line, at.Column, at.Length, text.Line(at.Line)));
-
-    /// <summary>A name of the header with its unit.</summary>
-    private sealed record HeaderCell(string Name, string Unit)
-    {
-        public static HeaderCell Of(string cell)
-        {
-            string plain = cell.Trim().Trim('"').Trim();
-            int bracket = plain.IndexOfAny(['[', '(']);
-            return bracket < 0
-                ? new HeaderCell(plain, "")
-                : new HeaderCell(plain[..bracket].Trim(), plain[(bracket + 1)..].TrimEnd(']', ')', ' ').Trim());
-        }
-    }
 }

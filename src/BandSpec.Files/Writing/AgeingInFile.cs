@@ -20,14 +20,12 @@ public static class AgeingInFile
         ArgumentNullException.ThrowIfNull(ageing);
         ArgumentNullException.ThrowIfNull(accuracy);
         List<string> lines = [.. text.ReplaceLineEndings("\n").TrimEnd('\n').Split('\n')];
-        (int begin, int end) = Section(lines, "ageing:", 0, 0, lines.Count);
-        while (begin > 0 && lines[begin - 1].StartsWith('#'))
-            begin--;
+        (int begin, int end) = YamlSection.WithRemarks(lines, "ageing:");
         Put(lines, begin, end, written => PlatformYaml.AgeingLines(ageing, written), remarks);
-        (int sample, int sampleEnd) = Section(lines, "sample:", 0, 0, lines.Count);
+        (int sample, int sampleEnd) = YamlSection.Of(lines, "sample:", 0, 0, lines.Count);
         if (sample < sampleEnd)
         {
-            (int part, int partEnd) = Section(lines, "ageing:", 2, sample + 1, sampleEnd);
+            (int part, int partEnd) = YamlSection.Of(lines, "ageing:", 2, sample + 1, sampleEnd);
             Put(lines, part, partEnd, written => SampleYaml.Write(accuracy, written), remarks);
         }
 
@@ -41,17 +39,5 @@ public static class AgeingInFile
         write(written);
         lines.RemoveRange(begin, end - begin);
         lines.InsertRange(begin, written.ToString().TrimEnd('\n').Split('\n'));
-    }
-
-    /// <summary>The lines of a key and all that is indented below it; an empty stretch at the end when the key is not there.</summary>
-    private static (int Begin, int End) Section(List<string> lines, string key, int indent, int from, int to)
-    {
-        int begin = lines.FindIndex(from, to - from, line => line.StartsWith(new string(' ', indent) + key, StringComparison.Ordinal));
-        if (begin < 0)
-            return (to, to);
-        int end = begin + 1;
-        while (end < to && (lines[end].Length == 0 || lines[end].StartsWith(new string(' ', indent + 1), StringComparison.Ordinal)))
-            end++;
-        return (begin, end);
     }
 }

@@ -20,7 +20,7 @@ public static class StatisticsRemarks
                 $"Statistics of {statistics.Units} units of {lots}, {statistics.Readings} readings in {string.Join(", ", files)}.",
                 $"Remarks are {100 * statistics.Scope.Confidence:0.#} % intervals of the figures.",
                 .. Excluded(statistics),
-                .. statistics.LeftOut.Select(term => $"{term.Term} is left out: {term.Reason}."),
+                .. LeftOutTerm.Grouped(statistics.LeftOut).Select(term => $"Left out {term.Term}: {term.Reason}."),
             ],
             ["repeatability"] = [$"{Range(statistics.Repeatability)}, reading instrument included"],
         };

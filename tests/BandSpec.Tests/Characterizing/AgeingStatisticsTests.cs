@@ -43,7 +43,7 @@ public sealed class AgeingStatisticsTests(ITestOutputHelper output)
     public void The_region_surrounds_the_estimate_and_lies_on_one_level()
     {
         AgeingStatistics found = Of(new SimulatedStorage(Truth, Repeatability, 3).Readings(12, 105, 125, 150), Scope);
-        Assert.Equal(24, found.Region.Count);
+        Assert.Equal(48, found.Region.Count);
         Assert.InRange(found.ActivationEnergy.Value, found.Region.Min(p => p.ActivationEnergy), found.Region.Max(p => p.ActivationEnergy));
         Assert.True(found.Region.Max(p => p.TimeExponent) > found.TimeExponent.Upper, "the joint region reaches beyond each interval");
     }
@@ -55,6 +55,19 @@ public sealed class AgeingStatisticsTests(ITestOutputHelper output)
         AgeingStatistics found = Of(new SimulatedStorage(faint, Repeatability, 2).Readings(8, 105, 125), Scope);
         Assert.True(found.ActivationEnergy.Covers(0.6), found.ActivationEnergy.ToString());
         Assert.True(found.ActivationEnergy.Upper - found.ActivationEnergy.Lower > 0.5);
+    }
+
+    /// <summary>No drift at all: every activation energy agrees, so that one has to be assumed.</summary>
+    [Fact]
+    public void Drift_that_does_not_show_needs_an_activation_energy_to_assume()
+    {
+        Ageing none = Truth with { Zero = Given.Spread(0, 0), Span = Given.Spread(0, 0) };
+        List<DriftReading> readings = new SimulatedStorage(none, Repeatability, 9).Readings(4, 105, 125);
+        Assert.Equal("open-energy", Assert.Single(AgeingStatistics.Of(readings, Scope).Findings).Rule);
+        AgeingStatistics found = Of(readings, Scope with { AssumedActivationEnergy = 0.7 });
+        Assert.Equal(new Estimate(0.7, 0.7, 0.7), found.ActivationEnergy);
+        Assert.Equal("the readings set no limits to it; 0.7 eV is assumed", Assert.Single(found.LeftOut).Reason);
+        Assert.True(found.Zero.Mean.Covers(0), found.Zero.Mean.ToString());
     }
 
     [Fact]

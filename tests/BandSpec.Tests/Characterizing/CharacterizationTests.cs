@@ -22,6 +22,7 @@ public sealed class CharacterizationTests
         Assert.Empty(found.SuspectUnits);
         Assert.Empty(found.SuspectReadings);
         Assert.All(found.DegreeSteps, step => Assert.Equal(step.Kept, step.Gain > 0));
+        Assert.Contains(found.LeftOut, term => term.Term == "bow.1" && term.Reason.EndsWith("by Schwarz' criterion", StringComparison.Ordinal));
     }
 
     [Fact]
@@ -71,6 +72,22 @@ public sealed class CharacterizationTests
         Assert.InRange(only.Value.Value, 0.65, 0.9);
     }
 
+    /// <summary>Degrees that cannot describe the family: slopes at zero correlation promise much that no fit confirms.</summary>
+    [Fact]
+    public void A_correlation_that_no_fit_confirms_stays_out()
+    {
+        Characterization found = Of(DemoReadings.Family(), Families.OpenScope with
+        {
+            PinnedDegrees = new Dictionary<PressureShape, int>
+            {
+                [PressureShape.Zero] = 7, [PressureShape.Span] = 2, [PressureShape.Bow] = -1, [PressureShape.SShape] = -1,
+            },
+        });
+        CorrelationEstimate only = Assert.Single(found.Correlations);
+        Assert.Equal(Families.Pair, only.Pair);
+        Assert.InRange(only.Value.Value, 0.2, 0.8);
+    }
+
     [Fact]
     public void A_spoiled_unit_and_a_slip_are_named_and_left_out()
     {
@@ -88,6 +105,9 @@ public sealed class CharacterizationTests
         Assert.Equal(spoiled[slip], reading.Reading);
         Assert.InRange(reading.Residual, 0.4, 0.6);
         Assert.Equal(47, found.Units);
+        UnitCurve strange = Assert.Single(found.SuspectCurves);
+        Assert.Equal("005", strange.Unit);
+        Assert.InRange(strange.Coefficients[1] - found.Coefficients[1].Units.Mean.Value, 4, 14);
         Assert.Equal(spoiled.Count(r => r.Unit != "005") - 1, found.Readings);
         Assert.Equal(48, Of(spoiled, Families.OpenScope with { KeepSuspects = true }).Units);
     }

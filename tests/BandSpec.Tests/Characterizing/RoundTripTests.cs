@@ -6,11 +6,12 @@ using Xunit;
 namespace BandSpec.Tests.Characterizing;
 
 /// <summary>
-/// The truth lies inside the intervals as often as they say: 400 families of 3 lots of 16 units, a tenth of the readings missing at random.
+/// The truth lies inside the intervals as often as they say: families of 3 lots of 16 units, a tenth of the readings missing at random. Sixty of
+/// them here; the benchmark <c>coverage</c> counts 400, figure by figure.
 /// </summary>
 public sealed class RoundTripTests(ITestOutputHelper output)
 {
-    private const int Repetitions = 400;
+    private const int Repetitions = 60;
 
     [Fact]
     public void Intervals_of_95_percent_hold_the_truth()
@@ -28,13 +29,14 @@ public sealed class RoundTripTests(ITestOutputHelper output)
         foreach ((string kind, double percent) in coverage)
             output.WriteLine($"{kind}: {percent:F1} % of {all[kind]}");
 
-        // Spreads within lots, hysteresis, repeatability: 95 % nominal; 400 repetitions scatter by 1.1 %, pooled figures by less.
-        foreach (string kind in new[] { "sigma", "hysteresis mean", "hysteresis sigma", "repeatability", "correlation" })
-            Assert.InRange(coverage[kind], 92.5, 98);
+        // How far below its probability a count may fall by chance, once in a thousand for each kind: three and a tenth standard errors; figures
+        // of one family are taken as one draw, which is cautious. Above, a share that is truly 95 % reaches 100 % in one of twenty runs of sixty,
+        // so only pooled figures have an upper bound.
+        double least = 95 - (310 * Math.Sqrt(0.05 * 0.95 / Repetitions));
+        Assert.All(coverage, kind => Assert.True(kind.Value >= least, $"{kind.Key}: {kind.Value:F1} %"));
 
         // Means and spreads of lots rest on three lots: the intervals are wide and cautious where a lot spread is found to be zero.
-        Assert.InRange(coverage["mean"], 95, 100);
-        Assert.InRange(coverage["lot-sigma"], 95, 100);
+        Assert.InRange(coverage["sigma"], least, 98.5);
     }
 
     private static void Repeat(int seed, Action<string, bool> count)

@@ -24,6 +24,8 @@ internal sealed class Desk : IDisposable
 
     public string At(string path) => Path.Combine(Folder, path);
 
+    public string Text(string path) => File.ReadAllText(At(path));
+
     public void Write(string path, string text)
     {
         Directory.CreateDirectory(Path.GetDirectoryName(At(path))!);

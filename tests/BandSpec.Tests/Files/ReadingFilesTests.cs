@@ -55,11 +55,14 @@ public sealed class ReadingFilesTests
         Assert.Equal((line, column, rule, found), (finding.Place.Line, finding.Place.Column, finding.Finding.Rule, finding.Finding.Found));
     }
 
-    [Fact]
-    public void A_pressure_without_a_known_range_asks_for_it()
+    /// <summary>However many readings there are, one finding asks for what the header cannot say.</summary>
+    [Theory]
+    [InlineData("unit,temperature,pressure [bar],error\n1,25,5,0\n1,25,6,0\n1,25,7,0\n", 18, "no-range")]
+    [InlineData("unit,temperature,pressure-fraction,reading [mV]\n1,25,0.5,0\n1,25,0.6,0\n", 36, "no-output")]
+    public void What_is_missing_for_a_whole_column_is_asked_for_once(string text, int column, string rule)
     {
-        PlacedFinding finding = Assert.Single(Read("unit,temperature,pressure [bar],error\n1,25,5,0\n", new ReadingsFormat()).Findings);
-        Assert.Equal("no-range", finding.Finding.Rule);
+        PlacedFinding finding = Assert.Single(Read(text, new ReadingsFormat()).Findings);
+        Assert.Equal((1, column, rule), (finding.Place.Line, finding.Place.Column, finding.Finding.Rule));
     }
 
     private static ReadingsSet<UnitReading> Read(string text, ReadingsFormat format) =>

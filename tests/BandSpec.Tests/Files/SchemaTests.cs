@@ -61,6 +61,25 @@ public sealed class SchemaTests
         Assert.Equal(Encoding.UTF8.GetString(InputSchemas.Write(kind).Span), File.ReadAllText(path));
     }
 
+    /// <summary>What <c>characterize</c> and <c>age</c> write, sample and all, and a requirement that asks for a confidence.</summary>
+    [Fact]
+    public void A_characterized_platform_and_a_confidence_follow_their_schemas()
+    {
+        using Cli.Desk desk = new();
+        string readings = Path.Combine(DemoFolder, "readings", "steel-cell-40");
+        string[] range = ["--range", "0 bar..25 bar", "--platform", "cell.yaml", "--quiet"];
+        Assert.Equal(0, desk.Run(["characterize", readings + ".csv", .. range]).ExitCode);
+        Assert.Equal(0, desk.Run(["age", readings + "-storage.csv", .. range]).ExitCode);
+        Assert.Contains("activation-energy-error:", desk.Text("cell.yaml"), StringComparison.Ordinal);
+        Assert.Empty(Faults(SchemaOf(InputFile.Platform), desk.Folder, "cell.yaml"));
+        Assert.NotEmpty(Faults(SchemaOf(InputFile.Platform), YamlAsJson(desk.Text("cell.yaml").Replace("  lots: 3", "  lots: many", StringComparison.Ordinal))));
+
+        desk.Change("brine-reinjection.yaml", "long-run: 1.33 }", "long-run: 1.33, confidence: 0.95 }");
+        Assert.Empty(Faults(SchemaOf(InputFile.Requirement), desk.Folder, "brine-reinjection.yaml"));
+        desk.Change("brine-reinjection.yaml", "confidence: 0.95", "confidence: 1.5");
+        Assert.NotEmpty(Faults(SchemaOf(InputFile.Requirement), desk.Folder, "brine-reinjection.yaml"));
+    }
+
     [Fact]
     public void Result_and_limits_follow_their_schemas_to_the_last_member()
     {
