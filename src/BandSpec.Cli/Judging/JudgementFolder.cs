@@ -8,9 +8,14 @@ using BandSpec.Files.LotReadings;
 
 namespace BandSpec.Cli.Judging;
 
-/// <summary>The files of a judgement on the disk. Each is written beside its place and then moved there, so that none is ever half written.</summary>
+/// <summary>
+/// The files of a judgement on the disk. Each is written beside its place and then moved there, so that none is ever half written. Charts of an earlier
+/// judgement in the same folder that this one does not have are removed, see <see cref="EarlierCharts"/>; whatever else lies there stays.
+/// </summary>
 internal static class JudgementFolder
 {
+    private const string Text = "judgement.md";
+
     /// <summary>Draws and writes all files and gives their names, charts only counted.</summary>
     /// <exception cref="RefusalException">The folder cannot be written.</exception>
     public static IReadOnlyList<string> Write(
@@ -29,8 +34,13 @@ internal static class JudgementFolder
                 using StreamWriter writer = new(stream, new UTF8Encoding(false), 1 << 16, leaveOpen: true);
                 UnitsCsv.Write(judged.Units, writer);
             });
-            foreach (DocumentFile document in documents)
+            // The text names the charts of its judgement: it is replaced last, so that a run that was cut short leaves none without a name.
+            foreach (DocumentFile document in documents.OrderBy(document => document.Name == Text))
+            {
+                if (document.Name == Text)
+                    EarlierCharts.Remove(folder, Text, documents);
                 Replace(folder, document.Name, stream => stream.Write(document.Bytes.Span));
+            }
         }
         catch (Exception refused) when (WritingFault.Is(refused))
         {
@@ -50,7 +60,7 @@ internal static class JudgementFolder
                 write(stream);
             File.Move(unfinished, path, overwrite: true);
         }
-        catch (IOException)
+        catch (Exception refused) when (WritingFault.Is(refused))
         {
             WholeFile.TryDelete(unfinished);
             throw;

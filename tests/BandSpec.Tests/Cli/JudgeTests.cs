@@ -97,6 +97,24 @@ public sealed class JudgeTests : IDisposable
         Assert.Equal(File.ReadAllText(desk.At("here/judgement.json")), output);
     }
 
+    [Fact]
+    public void A_folder_used_again_keeps_only_the_charts_of_its_judgement_and_what_is_not_ours()
+    {
+        desk.Write("lot.csv", Lot(units: 20, sigma: 0.1));
+        desk.Run("judge", "limits.json", "lot.csv", "--out", "j", "--quiet");
+        desk.Write("j/04-V4-photo.svg", "somebody's");
+        desk.Write("j/90-V9.svg", "somebody's");
+        desk.Write("fewer.csv", string.Join('\n', File.ReadLines(desk.At("lot.csv")).Where(line => !line.Contains(";V6;", StringComparison.Ordinal))));
+        string limits = File.ReadAllText(desk.At("limits.json"));
+        int sixth = limits.LastIndexOf("{ \"id\"", StringComparison.Ordinal);
+        desk.Write("fewer.json", limits[..limits.LastIndexOf(',', sixth)] + limits[limits.IndexOf('}', sixth)..].Replace("} ]", " ]", StringComparison.Ordinal));
+        Assert.Equal((0, "", ""), desk.Run("judge", "fewer.json", "fewer.csv", "--out", "j", "--quiet"));
+        Assert.Equal(
+            ["01-V1.svg", "02-V2.svg", "03-V3.svg", "04-V4-photo.svg", "04-V4.svg", "05-V5.svg", "06-zero-25_C.svg", "07-hysteresis-25_C_x_0_5.svg", "08-thermal-zero-shift-85_C.svg", "90-V9.svg",
+                "judgement.json", "judgement.md", "judgement.pdf", "units.csv"],
+            Directory.EnumerateFileSystemEntries(desk.At("j")).Select(f => Path.GetFileName(f)!).Order(StringComparer.Ordinal));
+    }
+
     [Theory]
     [InlineData(50, 0.3, "en", "not met")]
     [InlineData(12, 0.1, "en", "met** at every point")]
