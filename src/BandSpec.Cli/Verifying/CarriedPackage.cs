@@ -28,6 +28,7 @@ internal sealed class CarriedPackage
     /// <summary>What a PDF carries; null when it is not the PDF of a specification.</summary>
     /// <param name="name">The PDF as the user named it.</param>
     /// <param name="pdf">Its bytes.</param>
+    /// <exception cref="RefusalException">What it packs would unpack to more than any specification does.</exception>
     public static CarriedPackage? Of(string name, ReadOnlyMemory<byte> pdf)
     {
         try
@@ -39,6 +40,10 @@ internal sealed class CarriedPackage
         catch (InvalidDataException)
         {
             return null;
+        }
+        catch (IOException tooLarge)
+        {
+            throw new RefusalException($"{name} cannot be read: {tooLarge.Message}", ExitCode.Findings);
         }
     }
 

@@ -7,14 +7,13 @@ namespace BandSpec.Documents.Pdf.Sharp;
 /// <summary>Reads attached files with PDFsharp, from the list of associated files in the catalogue.</summary>
 internal static class SharpAttachments
 {
-    /// <summary>No attached file is larger once unpacked; a few bytes can be made to unpack to gigabytes.</summary>
-    private const int LargestFile = 64 << 20;
-
     public static IReadOnlyList<DocumentFile> Read(ReadOnlyMemory<byte> pdf)
     {
+        byte[] bytes = pdf.ToArray();
+        PackedStreams.Check(bytes);
         try
         {
-            using var stream = new MemoryStream(pdf.ToArray());
+            using var stream = new MemoryStream(bytes);
             using var document = PdfReader.Open(stream, PdfDocumentOpenMode.Import);
             if (document.Internals.Catalog.Elements.GetArray("/AF") is not { } files) return [];
             var read = Enumerable.Range(0, files.Elements.Count).Select(i => ReadFile(files.Elements.GetDictionary(i)));
@@ -41,13 +40,7 @@ internal static class SharpAttachments
             throw new InvalidDataException("The content of an attached file is packed in a way that this program does not use.");
         using var packed = new ZLibStream(new MemoryStream(file.Stream.Value), CompressionMode.Decompress);
         using var unpacked = new MemoryStream();
-        var buffer = new byte[1 << 16];
-        for (int read; (read = packed.Read(buffer)) > 0;)
-        {
-            unpacked.Write(buffer, 0, read);
-            if (unpacked.Length > LargestFile) throw new InvalidDataException($"An attached file unpacks to more than {LargestFile} bytes.");
-        }
-
+        packed.CopyTo(unpacked);
         return unpacked.ToArray();
     }
 }
