@@ -41,9 +41,9 @@ internal static class RulesCommand
         Specification specification = SearchBar.Over(
             terminal, application.Requirement.Identity.FolderName,
             bar => SpecificationDraft.Draft(application, bar, DraftExtras.Decisions, cancellation));
-        terminal.Out.Write(json
-            ? Encoding.UTF8.GetString(DecisionJson.Write(specification.Decisions!).Span)
-            : DecisionScreen.Of(specification, terminal.Ink));
-        return specification.Decisions!.Chosen.Impossible.Count == 0 ? ExitCode.Done : ExitCode.AnswerIsNo;
+        if (specification.Decisions is not { } decisions)
+            throw new OperationCanceledException(cancellation);
+        terminal.Out.Write(json ? Encoding.UTF8.GetString(DecisionJson.Write(decisions).Span) : DecisionScreen.Of(specification, decisions, terminal.Ink));
+        return decisions.Chosen.Impossible.Count == 0 ? ExitCode.Done : ExitCode.AnswerIsNo;
     }
 }

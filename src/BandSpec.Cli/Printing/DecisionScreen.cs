@@ -11,10 +11,9 @@ internal static class DecisionScreen
 {
     private static readonly CultureInfo Plain = CultureInfo.InvariantCulture;
 
-    /// <summary>The screen; the specification has its rules compared.</summary>
-    public static string Of(Specification specification, Ink ink)
+    /// <summary>The screen.</summary>
+    public static string Of(Specification specification, DecisionComparison decisions, Ink ink)
     {
-        DecisionComparison decisions = specification.Decisions!;
         SpecificationIdentity identity = specification.Application.Requirement.Identity;
         StringBuilder screen = new();
         screen.Append(Plain, $"\n{ink.Bold(identity.FolderName)}  {identity.Title}\n\n");

@@ -19,10 +19,14 @@ internal static class ProofWords
     };
 
     /// <summary>The message about a draft that was stopped.</summary>
-    public static string Stopped(Specification specification) => specification.Optimum.Proven
-        ? $"{specification.Application.Requirement.Identity.FolderName}: stopped while changes were looked for that would make a plan fit; its package has those that were found"
-        : $"{specification.Application.Requirement.Identity.FolderName}: stopped when {Settled(specification.Optimum)} plans were decided or discarded; "
-        + "its package holds the best plan so far, marked as not proven";
+    public static string Stopped(Specification specification) => $"{specification.Application.Requirement.Identity.FolderName}: " + specification switch
+    {
+        { Optimum.Proven: false } =>
+            $"stopped when {Settled(specification.Optimum)} plans were decided or discarded; its package holds the best plan so far, marked as not proven",
+        { Diagnosis.IsComplete: false } => "stopped while changes were looked for that would make a plan fit; its package has those that were found",
+        { Decisions: null } => "stopped when its plan was proven; its package leaves out the decision rules",
+        _ => "stopped when its plan was proven; its package leaves out what an improvement buys",
+    };
 
     private static string Settled(PlanChoice choice)
     {

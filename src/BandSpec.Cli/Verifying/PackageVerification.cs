@@ -28,7 +28,7 @@ internal sealed class PackageVerification(string name, string? record, string wo
         if (carried.Provenance.Making.Program != CommandLine.Program)
             return Fail(PackageNames.Document, $"it was made by {carried.Provenance.Making.Program}, and only that can make the same bytes; this is {CommandLine.Program}");
         if (carried.WasStopped)
-            return Fail(PackageNames.Document, "its draft was stopped before the proof, so that it cannot be made again; draft it once more");
+            return Fail(PackageNames.Document, "its draft was stopped before its end, so that it cannot be made again; draft it once more");
         ReleaseRecord? released = VerifyRelease(carried);
         if (carried.MakeAgain(released, cancellation, out string? reason) is not { } again)
             return Fail(PackageNames.Document, reason!);

@@ -28,7 +28,10 @@ public sealed record DecisionComparison(IReadOnlyList<RuleOutcome> Rules, FieldW
     /// <param name="plan">The compensation plan.</param>
     /// <param name="bands">The plan's band.</param>
     /// <param name="allocation">How the allowed error was shared out.</param>
-    public static DecisionComparison Of(Application application, CompensationPlan plan, BandMap bands, Allocation allocation)
+    /// <param name="cancellation">Ends the work within a fraction of a second.</param>
+    /// <exception cref="OperationCanceledException">It was ended before every rule was judged.</exception>
+    public static DecisionComparison Of(
+        Application application, CompensationPlan plan, BandMap bands, Allocation allocation, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
         ArgumentNullException.ThrowIfNull(bands);
@@ -36,10 +39,11 @@ public sealed record DecisionComparison(IReadOnlyList<RuleOutcome> Rules, FieldW
         DecisionRule kind = chosen is { Rule: DecisionRule.Guarded, GuardBand: 0 } ? DecisionRule.Simple : chosen.Rule;
         IReadOnlyList<VerificationPoint> points = VerificationPoint.AllOf(application, plan, bands, allocation);
         UnitLaw law = new(application, plan, [.. points.Select(TestPlace.Of)], bands.Nodes);
-        RuleJudging judging = new(application, law, points);
+        RuleJudging judging = new(application, law, points, cancellation);
         RuleOutcome[] rules = [.. Usual.Select(usual => usual.Rule == kind
             ? judging.Judge(chosen, true, points)
             : judging.Judge(usual, false, VerificationPoint.AllOf(application, plan, bands, allocation, usual with { Temperatures = chosen.Temperatures, Promise = chosen.Promise })))];
-        return new(rules, FieldWorth.Of(application, law, rules.Single(rule => rule.IsChosen), [.. bands.Nodes.Select(n => n.Allowed.Percent)]));
+        double[] allowed = [.. bands.Nodes.Select(n => n.Allowed.Percent)];
+        return new(rules, FieldWorth.Of(application, law, rules.Single(rule => rule.IsChosen), allowed, cancellation));
     }
 }

@@ -26,7 +26,9 @@ public sealed record FieldWorth
     public required double LargestPointwise { get; init; }
 
     /// <summary>The worth under the limits of a set of verification points.</summary>
-    internal static FieldWorth Of(Application application, UnitLaw law, RuleOutcome rule, IReadOnlyList<double> allowed)
+    /// <exception cref="OperationCanceledException">It was ended before all probabilities were there.</exception>
+    internal static FieldWorth Of(
+        Application application, UnitLaw law, RuleOutcome rule, IReadOnlyList<double> allowed, CancellationToken cancellation)
     {
         IReadOnlyList<VerificationPoint> points = rule.Points;
         UnitEvents events = new(law, application);
@@ -36,23 +38,25 @@ public sealed record FieldWorth
         EstimatedProbability any = new(0, 0), both = new(0, 0);
         LimitWorth? limit = null;
         Parallel.Invoke(
-            () => any = Integration.Of(leaving, Readings.None(law.Dimensions)),
-            () => both = canAccept ? Integration.Of(leaving, events.Readings(points)) : both,
-            () => limit = canAccept ? WorstLimit(events, law, points, allowed) : null);
+            new ParallelOptions { CancellationToken = cancellation },
+            () => any = Integration.Of(leaving, Readings.None(law.Dimensions), cancellation),
+            () => both = canAccept ? Integration.Of(leaving, events.Readings(points), cancellation) : both,
+            () => limit = canAccept ? WorstLimit(events, law, points, allowed, cancellation) : null);
         return new FieldWorth
         {
             LargestPointwise = law.LargestPointwise(allowed), AnyUnit = any, AcceptedUnit = EstimatedProbability.Quotient(both, accepted), AtLimit = limit,
         };
     }
 
-    private static LimitWorth WorstLimit(UnitEvents events, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed)
+    private static LimitWorth WorstLimit(
+        UnitEvents events, UnitLaw law, IReadOnlyList<VerificationPoint> points, IReadOnlyList<double> allowed, CancellationToken cancellation)
     {
         (int place, double reading) = (from v in Enumerable.Range(0, points.Count)
                                        let limits = events.AcceptedAt(points[v])
                                        from at in new[] { limits.Lower, limits.Upper }
                                        select (v, at)).MaxBy(limit => law.SumGiven(limit.v, limit.at, allowed));
         HalfSpaces leaving = events.Leaving(allowed, error => law.Given(error, place, reading));
-        return new(points[place].Id, reading, Integration.Of(leaving, Readings.None(law.Dimensions)));
+        return new(points[place].Id, reading, Integration.Of(leaving, Readings.None(law.Dimensions), cancellation));
     }
 }
 

@@ -13,6 +13,13 @@ internal static class Integration
     private static readonly double[] Strengths = [0, 0.5, 1.2, 3];
 
     /// <summary>The probability that some event happens and all readings are accepted.</summary>
-    public static EstimatedProbability Of(HalfSpaces events, Readings readings) =>
-        EstimatedProbability.Of(UnionProbability.Of(events, readings, readings.Count == 0 ? [0] : Strengths, Seed, RelativeError, MostDraws, firstBlocks: 1));
+    /// <exception cref="OperationCanceledException">It was ended before the probability was as certain as it should be.</exception>
+    public static EstimatedProbability Of(HalfSpaces events, Readings readings, CancellationToken cancellation)
+    {
+        cancellation.ThrowIfCancellationRequested();
+        Estimate found = UnionProbability.Of(
+            events, readings, readings.Count == 0 ? [0] : Strengths, Seed, RelativeError, MostDraws, firstBlocks: 1, cancellation);
+        cancellation.ThrowIfCancellationRequested();
+        return EstimatedProbability.Of(found);
+    }
 }

@@ -12,16 +12,18 @@ internal sealed class RuleJudging
     private readonly UnitEvents events;
     private readonly UnitLaw law;
     private readonly EstimatedProbability beyondTolerance;
+    private readonly CancellationToken cancellation;
     private readonly List<(double[] Limits, EstimatedProbability Rejected, EstimatedProbability Consumer)> known = [];
 
     /// <param name="application">The application.</param>
     /// <param name="law">The law of its units.</param>
     /// <param name="points">The verification points of any rule: tolerances are the same for all.</param>
-    public RuleJudging(Application application, UnitLaw law, IReadOnlyList<VerificationPoint> points)
+    /// <param name="cancellation">Ends the work, here or in <see cref="Judge"/>, by an <see cref="OperationCanceledException"/>.</param>
+    public RuleJudging(Application application, UnitLaw law, IReadOnlyList<VerificationPoint> points, CancellationToken cancellation)
     {
-        (this.application, this.law) = (application, law);
+        (this.application, this.law, this.cancellation) = (application, law, cancellation);
         events = new UnitEvents(law, application);
-        beyondTolerance = Integration.Of(events.BeyondTolerance(points), Readings.None(law.Dimensions));
+        beyondTolerance = Integration.Of(events.BeyondTolerance(points), Readings.None(law.Dimensions), cancellation);
     }
 
     /// <summary>The outcome of a rule.</summary>
@@ -54,8 +56,8 @@ internal sealed class RuleJudging
         double[] limits = [.. points.SelectMany(p => new[] { p.Lower, p.Upper })];
         if (known.Find(test => test.Limits.AsSpan().SequenceEqual(limits)) is { Limits: not null } same)
             return (same.Rejected, same.Consumer);
-        EstimatedProbability rejected = Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2));
-        EstimatedProbability consumer = WrongAcceptance.Of(law, events, points);
+        EstimatedProbability rejected = Integration.Of(events.Rejected(points), Readings.None(law.Dimensions + 2), cancellation);
+        EstimatedProbability consumer = WrongAcceptance.Of(law, events, points, cancellation);
         known.Add((limits, rejected, consumer));
         return (rejected, consumer);
     }

@@ -45,10 +45,11 @@ internal sealed class WrongAcceptance
     }
 
     /// <summary>The risk under the limits of a set of verification points, none of them impossible.</summary>
-    public static EstimatedProbability Of(UnitLaw law, UnitEvents events, IReadOnlyList<VerificationPoint> points) =>
-        new WrongAcceptance(law, events, points).Estimate();
+    /// <exception cref="OperationCanceledException">It was ended before the risk was as certain as it should be.</exception>
+    public static EstimatedProbability Of(UnitLaw law, UnitEvents events, IReadOnlyList<VerificationPoint> points, CancellationToken cancellation) =>
+        new WrongAcceptance(law, events, points).Estimate(cancellation);
 
-    private EstimatedProbability Estimate()
+    private EstimatedProbability Estimate(CancellationToken cancellation)
     {
         if (tails.Length == 0)
             return new(0, 0);
@@ -56,6 +57,7 @@ internal sealed class WrongAcceptance
         long draws = 0;
         for (long until = FirstDraws; ; until *= 2)
         {
+            cancellation.ThrowIfCancellationRequested();
             for (; draws < until; draws += Vector512<double>.Count)
                 Add((ulong)draws, ref sum, ref squares);
             double mean = sum / draws, error = Math.Sqrt(Math.Max(0, (squares / draws) - (mean * mean)) / draws);

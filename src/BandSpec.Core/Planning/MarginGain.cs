@@ -19,17 +19,20 @@ public sealed record MarginGain(string Key, double Gain, double Step, string Uni
     /// <summary>The gains of all inputs, in the order of the files; inputs that cannot move are left out.</summary>
     /// <param name="application">The application.</param>
     /// <param name="plan">The plan.</param>
-    public static IReadOnlyList<MarginGain> AllOf(Application application, CompensationPlan plan)
+    /// <param name="cancellation">Ends the work between two inputs.</param>
+    /// <exception cref="OperationCanceledException">It was ended before all gains were there.</exception>
+    public static IReadOnlyList<MarginGain> AllOf(Application application, CompensationPlan plan, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(application);
         ArgumentNullException.ThrowIfNull(plan);
         double now = MarginOf(application, plan);
-        return [.. new MovableInputs(application).All().Select(i => Of(i, now, plan)).OfType<MarginGain>()];
+        return [.. new MovableInputs(application).All().Select(i => Of(i, now, plan, cancellation)).OfType<MarginGain>()];
     }
 
     /// <summary>Half the difference to both sides; to one side where the input cannot go to the other.</summary>
-    private static MarginGain? Of(MovableInput input, double now, CompensationPlan plan)
+    private static MarginGain? Of(MovableInput input, double now, CompensationPlan plan, CancellationToken cancellation)
     {
+        cancellation.ThrowIfCancellationRequested();
         double move = PartOfStep * input.Step;
         (Application? more, Application? less) = (input.Moved(move), input.Moved(-move));
         if (more is null && less is null)

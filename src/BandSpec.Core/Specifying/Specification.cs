@@ -56,8 +56,11 @@ public sealed record Specification
     /// <summary>What each input's small change does to the plan's margin; <see langword="null"/> unless it was asked for.</summary>
     public IReadOnlyList<MarginGain>? Gains { get; init; }
 
-    /// <summary>Whether everything was searched to its end; not when the draft was stopped.</summary>
-    public bool IsComplete => Optimum.Proven && Diagnosis is not { IsComplete: false };
+    /// <summary>What was asked for and is left out, since the draft was stopped: <see cref="Decisions"/>, <see cref="Gains"/>, both or neither.</summary>
+    public DraftExtras LeftOut { get; init; }
+
+    /// <summary>Whether everything was worked out to its end; not when the draft was stopped.</summary>
+    public bool IsComplete => Optimum.Proven && Diagnosis is not { IsComplete: false } && LeftOut == DraftExtras.None;
 
     /// <summary>
     /// Whether the plan keeps the allowed error with the stated capability everywhere; with the stated confidence, when one is stated.

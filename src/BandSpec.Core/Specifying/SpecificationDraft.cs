@@ -18,7 +18,8 @@ public static class SpecificationDraft
     /// <param name="progress">Is told how far the search has come, from several threads; may be <see langword="null"/>.</param>
     /// <param name="extras">What is worked out beside the specification.</param>
     /// <param name="cancellation">
-    /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so.
+    /// Ends the search early: the specification is then that of the best plan so far, and <see cref="PlanChoice.Proven"/> says so. What was asked for
+    /// beside it and not come to is left out, and <see cref="Specification.LeftOut"/> says so.
     /// </param>
     public static Specification Draft(
         Application application, IProgress<SearchProgress>? progress = null, DraftExtras extras = DraftExtras.None,
@@ -33,6 +34,10 @@ public static class SpecificationDraft
         Allocation allocation = Allocation.Of(application, choice.Plan, bands);
         double confidence = application.Requirement.Capability.Confidence ?? MarginBound.UsualConfidence;
         MarginBound? bound = MarginBound.Of(application, choice.Plan, bands, confidence);
+        DecisionComparison? decisions = extras.HasFlag(DraftExtras.Decisions)
+            ? UnlessStopped(() => DecisionComparison.Of(application, choice.Plan, bands, allocation, cancellation)) : null;
+        IReadOnlyList<MarginGain>? gains = extras.HasFlag(DraftExtras.Gains)
+            ? UnlessStopped(() => MarginGain.AllOf(application, choice.Plan, cancellation)) : null;
         return new Specification
         {
             Application = application,
@@ -47,9 +52,24 @@ public static class SpecificationDraft
             DerivedLimits = DerivedLimit.AllOf(application, choice.Plan, allocation),
             VerificationPoints = VerificationPoint.AllOf(application, choice.Plan, bands, allocation),
             Diagnosis = isDiagnosed ? Diagnosis.Of(application, bands, optimum, progress, cancellation) : null,
-            Decisions = extras.HasFlag(DraftExtras.Decisions) ? DecisionComparison.Of(application, choice.Plan, bands, allocation) : null,
-            Gains = extras.HasFlag(DraftExtras.Gains) ? MarginGain.AllOf(application, choice.Plan) : null,
+            Decisions = decisions,
+            Gains = gains,
+            LeftOut = extras & ((decisions is null ? DraftExtras.Decisions : 0) | (gains is null ? DraftExtras.Gains : 0)),
         };
+    }
+
+    /// <summary>A part of the record, or nothing when the draft was stopped before the part was finished.</summary>
+    private static T? UnlessStopped<T>(Func<T> part)
+        where T : class
+    {
+        try
+        {
+            return part();
+        }
+        catch (OperationCanceledException)
+        {
+            return null;
+        }
     }
 }
 

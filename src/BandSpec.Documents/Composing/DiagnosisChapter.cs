@@ -19,6 +19,7 @@ internal static class DiagnosisChapter
             ],
             found.Parts.Select(p => new Row([Name(c, p), p.Plan, p.PlanShare, p.Floor, p.FloorShare])), c.Words["diagnosis.parts-remark"]);
         foreach (var block in Remedies(c, found)) yield return block;
+        if (c.View.LacksGains) yield return new Paragraph(c.Words["diagnosis.gains-left-out"]);
         if (found.Gains.Count == 0) yield break;
         yield return c.Section("diagnosis.gains");
         yield return c.Table(c.Words["diagnosis.gains-table"],

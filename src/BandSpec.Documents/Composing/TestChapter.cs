@@ -15,6 +15,7 @@ internal static class TestChapter
         yield return c.Section("test.criteria");
         yield return new Paragraph(c.Words["test.criteria-text"]);
         yield return c.View.Points.Count == 0 ? new Paragraph(c.Words["test.none"]) : Limits(c);
+        if (c.View.LacksDecisions) yield return new Paragraph(c.Words["test.decisions-left-out"]);
         foreach (Block block in c.View.Decisions is { } decisions ? DecisionSection.Compose(c, decisions) : [])
             yield return block;
     }

@@ -39,6 +39,8 @@ internal sealed class PrintViewMaker
             Sample = Sample(platform.Sample),
             Optimum = new PlanViews(_specification, _sign).Optimum,
             Decisions = _specification.Decisions is { Rules: [{ Points.Count: > 0 }, ..] } decisions ? new DecisionViewMaker(decisions, _sign).Make() : null,
+            LacksDecisions = _specification.LeftOut.HasFlag(DraftExtras.Decisions),
+            LacksGains = _specification.LeftOut.HasFlag(DraftExtras.Gains),
             Diagnosis = new DiagnosisViews(_specification, Regions, _sign).Diagnosis,
         };
     }

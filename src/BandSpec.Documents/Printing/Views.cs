@@ -97,6 +97,12 @@ internal sealed record PrintView(
     /// <summary>The decision rules side by side; nothing when they were not compared.</summary>
     public DecisionView? Decisions { get; init; }
 
+    /// <summary>Whether the decision rules were to be compared and are left out, since the draft was stopped.</summary>
+    public bool LacksDecisions { get; init; }
+
+    /// <summary>Whether the gains were asked for and are left out, since the draft was stopped.</summary>
+    public bool LacksGains { get; init; }
+
     /// <summary>What the platform's statistics rest on; nothing when the platform does not say.</summary>
     public SampleView? Sample { get; init; }
 }

@@ -64,10 +64,7 @@ public static class ComparisonJson
 
     private static void WriteCause(Utf8JsonWriter json, Cause cause)
     {
-        json.WriteStartArray("keys");
-        foreach ((FigureSubject file, string key) in cause.Names)
-            json.WriteStringValue($"{Word(file)}:{key}");
-        json.WriteEndArray();
+        json.Strings("keys", cause.Names.Select(name => $"{Word(name.File)}:{name.Key}"));
         json.WriteBoolean("solved", cause.Outcome is not null);
         json.Figure("movement", cause.Movement);
         if (cause.Largest is { } largest)

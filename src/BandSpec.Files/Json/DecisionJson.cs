@@ -48,10 +48,7 @@ public static class DecisionJson
         json.Object("rejected", one => Probability(one, outcome.Rejected));
         json.Figure("reject-cost-per-unit", outcome.RejectCostPerUnit.Amount);
         json.WriteString("currency", outcome.RejectCostPerUnit.Currency);
-        json.WriteStartArray("impossible");
-        foreach (string point in outcome.Impossible)
-            json.WriteStringValue(point);
-        json.WriteEndArray();
+        json.Strings("impossible", outcome.Impossible);
         if (outcome.UncertaintyNeeded is { } needed)
             json.Figure("uncertainty-needed", needed.Percent);
         json.Objects("points", outcome.Points, Point);

@@ -73,4 +73,13 @@ internal static class JsonMembers
             json.WriteNumberValue(value == 0 ? 0 : value);
         json.WriteEndArray();
     }
+
+    /// <summary>A list of words as a member.</summary>
+    internal static void Strings(this Utf8JsonWriter json, string name, IEnumerable<string> values)
+    {
+        json.WriteStartArray(name);
+        foreach (string value in values)
+            json.WriteStringValue(value);
+        json.WriteEndArray();
+    }
 }

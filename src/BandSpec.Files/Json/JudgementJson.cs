@@ -140,10 +140,7 @@ public static class JudgementJson
             one.WriteString("name", reason.Name);
             one.Figure("error", reason.Error);
         });
-        json.WriteStartArray("missing");
-        foreach (string point in unit.Missing)
-            json.WriteStringValue(point);
-        json.WriteEndArray();
+        json.Strings("missing", unit.Missing);
     }
 
     private static void File(Utf8JsonWriter json, ReadingReport report)

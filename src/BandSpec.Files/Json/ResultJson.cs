@@ -45,6 +45,8 @@ public static class ResultJson
             if (specification.Decisions is { } decisions)
                 DecisionJson.Members(json, decisions);
             json.Diagnosis(specification);
+            if (specification.LeftOut != DraftExtras.None)
+                json.Strings("left-out", Enum.GetValues<DraftExtras>().Where(one => one != DraftExtras.None && specification.LeftOut.HasFlag(one)).Select(JudgementJson.Word));
             json.Objects("nodes", specification.Bands.Nodes, WriteNode);
         });
     }

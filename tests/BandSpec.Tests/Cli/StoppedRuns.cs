@@ -1,10 +1,14 @@
 using System.Diagnostics;
 using System.Text.Json;
 using BandSpec.Cli;
+using BandSpec.Cli.Drafting;
+using BandSpec.Cli.Printing;
 using BandSpec.Core.Bands;
+using BandSpec.Core.Deciding;
 using BandSpec.Core.Planning;
 using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
+using BandSpec.Files.Json;
 using Xunit;
 
 namespace BandSpec.Tests.Cli;
@@ -33,6 +37,7 @@ public sealed class StoppedRuns : IDisposable
         Assert.Matches("^bandspec: HV-3107-A: stopped when [0-9,]+ of [0-9,]+ plans were decided or discarded; its package holds the best plan so far, marked as not proven\n$", error);
         Assert.False(Result().GetProperty("plan").GetProperty("proven").GetBoolean());
         Assert.Contains("best plan found, not proven", System.IO.File.ReadAllText(desk.At("out/HV-3107-A/specification.md")), StringComparison.Ordinal);
+        Assert.Contains("The draft was stopped before the decision rules were compared", desk.Text("out/HV-3107-A/specification.md"), StringComparison.Ordinal);
     }
 
     [Fact]
@@ -41,7 +46,7 @@ public sealed class StoppedRuns : IDisposable
         desk.RunStoppedSoon("draft", File);
         (int verified, string told, _) = desk.Run("verify", "out/HV-3107-A");
         Assert.Equal(1, verified);
-        Assert.Contains("its draft was stopped before the proof, so that it cannot be made again; draft it once more", told, StringComparison.Ordinal);
+        Assert.Contains("its draft was stopped before its end, so that it cannot be made again; draft it once more", told, StringComparison.Ordinal);
         Assert.DoesNotContain("up to date", desk.RunStoppedSoon("draft", File).Out, StringComparison.Ordinal);
         Assert.Equal((1, "", "bandspec: stopped; nothing was written\n"), desk.RunStoppedSoon("release", File, "--by", "N. Aas"));
         Assert.False(System.IO.File.Exists(desk.At("releases.json")));
@@ -104,6 +109,50 @@ public sealed class StoppedRuns : IDisposable
             whole.ByMargin.Where(p => p.CostPerUnit <= part.MarginCompleteTo + 1e-9).Select(p => (p.CostPerUnit, p.Margin)),
             part.ByMargin.Select(p => (p.CostPerUnit, p.Margin)));
     }
+
+    [Fact]
+    public void Decision_rules_and_gains_that_were_not_come_to_are_left_out_and_named()
+    {
+        Application application = Given.Application(Given.Requirement with { Compensation = Given.Requirement.Compensation with { CandidateStep = Given.K(20) } });
+        Specification whole = SpecificationDraft.Draft(application, extras: DraftExtras.Decisions);
+        Specification stopped = SpecificationDraft.Draft(application, extras: DraftExtras.Decisions | DraftExtras.Gains, cancellation: new CancellationToken(canceled: true));
+
+        Assert.Equal((true, DraftExtras.None), (whole.IsComplete, whole.LeftOut));
+        Assert.Equal((false, DraftExtras.Decisions | DraftExtras.Gains), (stopped.IsComplete, stopped.LeftOut));
+        Assert.Equal((null, null), (stopped.Decisions, stopped.Gains));
+        Specification late = whole with { Decisions = null, LeftOut = DraftExtras.Decisions };
+        ReadOnlyMemory<byte> result = ResultJson.Write(late);
+        Assert.Equal(["decisions"], JsonDocument.Parse(result).RootElement.GetProperty("left-out").EnumerateArray().Select(part => part.GetString()!));
+        Assert.False(Verdict.Read(result)!.Proven);
+        Assert.EndsWith("stopped when its plan was proven; its package leaves out the decision rules", ProofWords.Stopped(late), StringComparison.Ordinal);
+        Assert.True(Verdict.Read(ResultJson.Write(whole))!.Proven);
+    }
+
+    [Theory]
+    [InlineData(0)]
+    [InlineData(5)]
+    [InlineData(40)]
+    public void The_comparison_of_rules_ends_when_it_is_asked_to(int milliseconds)
+    {
+        Application application = Given.Application(Given.Requirement with { Compensation = Given.Requirement.Compensation with { CandidateStep = Given.K(20) } });
+        Specification whole = SpecificationDraft.Draft(application);
+        using CancellationTokenSource stop = new();
+        if (milliseconds == 0)
+            stop.Cancel();
+        else
+            stop.CancelAfter(milliseconds);
+        // A fast machine may come to the end once or twice; what counts is that nothing else is thrown, from whichever thread.
+        Assert.ThrowsAny<OperationCanceledException>((Action)(() =>
+        {
+            for (int round = 0; round < 1000; round++)
+                DecisionComparison.Of(application, whole.Choice.Plan, whole.Bands, whole.Allocation, stop.Token);
+        }));
+        Assert.Throws<OperationCanceledException>(() => MarginGain.AllOf(application, whole.Choice.Plan, stop.Token));
+    }
+
+    [Fact]
+    public void Rules_that_were_not_compared_to_the_end_are_not_shown() =>
+        Assert.Equal((1, "", "bandspec: stopped; nothing was written\n"), desk.RunStopped("rules", File));
 
     /// <summary>
     /// A real process and a real signal. The search takes a minute and more; a process that was too slow to listen when the signal came is ended by
