@@ -32,7 +32,7 @@ internal static class PlanBenchmark
     private static void LeastCost(double numpy)
     {
         Application application = ApplicationOf(5, 5, PlanObjective.LeastCost);
-        double seconds = Best(() => PlanChoosing.Choose(application, null, default));
+        double seconds = Best(() => PlanChoosing.Choose(application, null, default), 60);
         long plans = new PlanSearch(application).PlanCount;
         Console.WriteLine($"least-cost over {plans} plans, proven, also between the nodes: {seconds * 1e3:F1} ms; the NumPy loop would need {plans * numpy:F0} s: {plans * numpy / seconds:F0} times");
     }
@@ -70,7 +70,7 @@ internal static class PlanBenchmark
             }
 
             bytes = GC.GetAllocatedBytesForCurrentThread() - before;
-        }, 40);
+        }, 60);
         int plans = work.Sum(w => w.Batch.Count);
         return (seconds / plans, bytes / plans);
     }

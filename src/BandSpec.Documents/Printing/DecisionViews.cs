@@ -25,6 +25,9 @@ internal sealed record LimitWorthView(string Point, string Reading, string Leavi
 /// <summary>Rounds the comparison of decision rules for print.</summary>
 internal sealed class DecisionViewMaker(DecisionComparison decisions, string sign)
 {
+    /// <summary>A page says that a chance is less than this; files have the figure.</summary>
+    private const double Negligible = 1e-12;
+
     public DecisionView Make() => new(
         [.. decisions.Rules.Select(Of)], Chance(decisions.Field.AnyUnit), decisions.Field.AtLimit is null ? "" : Chance(decisions.Field.AcceptedUnit),
         decisions.Field.AtLimit is { } limit
@@ -67,8 +70,8 @@ internal sealed class DecisionViewMaker(DecisionComparison decisions, string sig
             >= 1e-7 => (1e6, "ppm"),
             _ => (1e9, "ppb"),
         };
-        if (probability.Value * scale < 1e-6)
-            return $"<\u00a0{new Rounded("0.000001").Shown(sign)}\u00a0{unit}";
+        if (probability.Value < Negligible)
+            return $"<\u00a0{Rounded.Nearest(scale * Negligible, 3).Shown(sign)}\u00a0{unit}";
         string shown(double value) => Rounded.Significant(scale * value).Shown(sign);
         return probability.StandardError > 0
             ? $"{shown(probability.Value)}\u00a0{unit} ({shown(probability.Lower)}\u00a0–\u00a0{shown(probability.Upper)})"
