@@ -18,9 +18,9 @@ internal static class RulesCommand
         Option<string?> root = CommonOptions.Root();
         Option<bool> json = CommonOptions.Json();
         TaughtCommand command = new(
-            "rules", "Compares the decision rules for a requirement: guard bands, consumer's and producer's risk of each point and of the whole unit, what rejects cost, and what accepted units are worth in the field.",
+            "rules", "Holds the decision rules for a requirement's verification test side by side: guard bands, consumer's and producer's risk at the worst point and of the whole unit, what rejects cost, and how rarely an accepted unit leaves the allowed error in the field.",
             ("bandspec rules pump.yaml", "the table; the rule under `test` in pump.yaml is marked"),
-            ("bandspec rules pump.yaml --json", "with every point, for programs"))
+            ("bandspec rules pump.yaml --json", "the same with every point, for programs"))
         {
             file, root, json,
         };

@@ -45,6 +45,8 @@ internal static class JudgeRun
     private static ReadingReport Read(string file, LotCollector collector, Terminal terminal)
     {
         string path = Path.GetFullPath(file, terminal.Folder);
+        if (Directory.Exists(path))
+            return new(file, null, 0, 0, [Refused(file, new IOException("it is a folder"))]);
         try
         {
             using FileStream stream = new(path, FileMode.Open, FileAccess.Read, FileShare.Read, 1 << 16, FileOptions.SequentialScan);

@@ -9,10 +9,14 @@ internal static class BoundedFile
     /// <summary>The bytes of a file.</summary>
     /// <param name="path">Its full path.</param>
     /// <param name="most">How many bytes it may have.</param>
-    /// <exception cref="IOException">It cannot be had, or is larger.</exception>
+    /// <exception cref="IOException">It cannot be had, is a folder, or is larger; the message says so without its path.</exception>
     /// <exception cref="UnauthorizedAccessException">It may not be read.</exception>
     public static byte[] Read(string path, int most = LargestDocument)
     {
+        if (Directory.Exists(path))
+            throw new IOException("it is a folder");
+        if (!File.Exists(path))
+            throw new FileNotFoundException("there is no such file");
         long length = new FileInfo(path).Length;
         if (length > most)
             throw new IOException($"it has more than {most} bytes");

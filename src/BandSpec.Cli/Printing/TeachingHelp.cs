@@ -19,7 +19,10 @@ internal sealed class TeachingHelp(HelpAction plain, Ink ink) : SynchronousComma
                 ("bandspec check pump.yaml", "everything that is wrong with it, in one go"),
                 ("bandspec draft pump.yaml", "the specification package, in out/")]);
         Write(output, "Exit codes:", [
-            ("0", "done"), ("1", "done, and the answer is no: no plan fits, limits differ, a package does not verify, a lot falls short"), ("2", "findings in the input"), ("3", "a fault of the program or of the disk")]);
+            ("0", "done"),
+            ("1", "done, and the answer is no: no plan fits, a decision rule cannot be met, limits differ, a package does not verify, a lot falls short; or it was stopped by Ctrl-C"),
+            ("2", "findings in the input; nothing is written"),
+            ("3", "a fault of the program or of the disk")]);
         return code;
     }
 

@@ -90,6 +90,29 @@ public sealed class JudgeTests : IDisposable
     }
 
     [Fact]
+    public void Limits_of_another_specification_are_told_from_a_poor_lot()
+    {
+        desk.Write("lot.csv", Lot(units: 1, sigma: 0.1).Replace(";V", ";W", StringComparison.Ordinal));
+        (int code, string output, string error) = desk.Run("judge", "limits.json", "lot.csv");
+        Assert.Equal(2, code);
+        Assert.StartsWith("6 lines of a point that is not in the limits\n          lot.csv:2: W1\n", output, StringComparison.Ordinal);
+        Assert.Equal("bandspec: no reading is one of T-7-B, whose limits these are; its points are V1, V2, V3, V4, V5 and 1 more; nothing was written\n", error);
+        Assert.False(Directory.Exists(desk.At("out")));
+    }
+
+    [Theory]
+    [InlineData("limits.json", "folder", "folder: it is a folder [file]")]
+    [InlineData("folder", "limits.json", "folder: it is a folder [file]")]
+    [InlineData("nothing.json", "limits.json", "nothing.json: there is no such file [file]")]
+    public void A_folder_or_nothing_in_the_place_of_a_file_is_told_as_that(string limits, string readings, string told)
+    {
+        Directory.CreateDirectory(desk.At("folder"));
+        (int code, string output, string error) = desk.Run("judge", limits, readings);
+        Assert.Equal((2, ""), (code, error));
+        Assert.StartsWith(told, output, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Json_is_the_judgement_file()
     {
         desk.Write("lot.csv", Lot(units: 20, sigma: 0.1));
