@@ -28,16 +28,6 @@ internal static class GaussLegendre
         return half * sum;
     }
 
-    /// <summary><c>∫ f dx</c> with one rule on each of <paramref name="panels"/> ≥ 1 equal parts.</summary>
-    public static double IntegrateComposite(Func<double, double> f, double lower, double upper, int panels, int order)
-    {
-        ArgumentOutOfRangeException.ThrowIfLessThan(panels, 1);
-        double sum = 0, width = (upper - lower) / panels;
-        for (int k = 0; k < panels; k++)
-            sum += Integrate(f, lower + k * width, k + 1 == panels ? upper : lower + (k + 1) * width, order);
-        return sum;
-    }
-
     /// <summary><c>∫ f dx</c> with one rule between each two neighbours of the rising <paramref name="cuts"/>.</summary>
     public static double IntegrateBetween(Func<double, double> f, IReadOnlyList<double> cuts, int order)
     {

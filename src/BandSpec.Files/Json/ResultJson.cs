@@ -69,9 +69,7 @@ public static class ResultJson
 
     private static void WritePlan(Utf8JsonWriter json, PlanChoice choice)
     {
-        json.Figures("temperatures", choice.Plan.Temperatures.Select(temperature => temperature.Celsius));
-        json.WriteNumber("zero-degree", choice.Plan.ZeroDegree);
-        json.WriteNumber("span-degree", choice.Plan.SpanDegree);
+        json.PlanMembers(choice.Plan);
         json.Objects("points", choice.Plan.Points, (point, read) =>
         {
             point.Figure("temperature", read.Temperature.Celsius);
@@ -85,9 +83,7 @@ public static class ResultJson
 
     private static void WriteOptimum(Utf8JsonWriter json, PlanChoice optimum)
     {
-        json.Figures("temperatures", optimum.Plan.Temperatures.Select(temperature => temperature.Celsius));
-        json.WriteNumber("zero-degree", optimum.Plan.ZeroDegree);
-        json.WriteNumber("span-degree", optimum.Plan.SpanDegree);
+        json.PlanMembers(optimum.Plan);
         json.Figure("chamber-minutes", optimum.Run.Length.Minutes);
         json.Figure("cost-per-unit", optimum.Run.CostPerUnit);
         json.Figure("margin-continuous", optimum.ContinuousMargin);

@@ -39,7 +39,7 @@ public static class TradeoffJson
 
     private static void WriteChoice(Utf8JsonWriter json, PlanChoice choice)
     {
-        WritePlan(json, choice.Plan);
+        json.PlanMembers(choice.Plan);
         json.Figure("cost-per-unit", choice.Run.CostPerUnit);
         json.Figure("margin", choice.ContinuousMargin);
         json.WriteBoolean("proven", choice.Proven);
@@ -51,7 +51,7 @@ public static class TradeoffJson
         json.Figure("cost-per-unit", one.Point.CostPerUnit);
         json.Figure("margin", one.Point.Margin);
         json.Figure("rms-error", one.Point.RmsError);
-        WritePlan(json, one.Point.Plan);
+        json.PlanMembers(one.Point.Plan);
         json.WriteBoolean("proven", one.Point.Proven);
         json.WriteBoolean("optimum", one.IsOptimum);
         json.WriteBoolean("pinned", one.IsPinned);
@@ -62,12 +62,5 @@ public static class TradeoffJson
                 claim.Figure("confidence", bound.Confidence);
                 claim.Figure("further-units", one.FurtherUnits ?? double.NaN);
             });
-    }
-
-    private static void WritePlan(Utf8JsonWriter json, CompensationPlan plan)
-    {
-        json.Figures("temperatures", plan.Temperatures.Select(temperature => temperature.Celsius));
-        json.WriteNumber("zero-degree", plan.ZeroDegree);
-        json.WriteNumber("span-degree", plan.SpanDegree);
     }
 }

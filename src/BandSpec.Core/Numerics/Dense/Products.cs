@@ -78,15 +78,6 @@ internal static class Products
         return product;
     }
 
-    /// <summary><c>Aᵀv</c>.</summary>
-    public static double[] TransposedTimes(this Grid a, ReadOnlySpan<double> vector)
-    {
-        double[] product = new double[a.Columns];
-        for (int i = 0; i < a.Rows; i++)
-            AddTo(product, vector[i], a.Row(i));
-        return product;
-    }
-
     /// <summary>The trace of <c>A·B</c> for symmetric <c>A</c> and <c>B</c> of one size.</summary>
     public static double TraceOfProduct(Grid a, Grid b) => Vectors.Dot(a.AllCells(), b.AllCells());
 }
