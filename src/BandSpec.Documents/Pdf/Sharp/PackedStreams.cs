@@ -10,8 +10,8 @@ namespace BandSpec.Documents.Pdf.Sharp;
 /// </summary>
 internal static class PackedStreams
 {
-    /// <summary>What all streams of a file may come to, in bytes; a specification's come to a few million.</summary>
-    public const int Largest = 64 << 20;
+    /// <summary>What all streams of a file may come to, in bytes; those of the demos come to about one million. Objects take some thirty times that in memory.</summary>
+    public const int Largest = 16 << 20;
 
     private static readonly SearchValues<byte> Space = SearchValues.Create("\0\t\n\f\r "u8);
     private static readonly SearchValues<byte> EndOfName = SearchValues.Create("\0\t\n\f\r ()<>[]{}/%"u8);
