@@ -1,6 +1,5 @@
 using System.Text.Json;
 using BandSpec.Core.Planning;
-using BandSpec.Core.Requirements;
 using BandSpec.Core.Specifying;
 
 namespace BandSpec.Files.Json;
