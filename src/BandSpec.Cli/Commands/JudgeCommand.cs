@@ -54,13 +54,13 @@ internal static class JudgeCommand
 
         if (wishes.Strict && judged.Faults.Total > 0)
         {
-            terminal.Out.Write(JudgementScreen.FaultsOf(judged.Faults, terminal.Ink));
+            terminal.Out.Write(JudgementScreen.FaultsOf(judged.Faults, isWritten: false, terminal.Ink));
             return ExitCode.Findings;
         }
 
         if (judged.Readings == 0 && judged.Faults.Total > 0)
         {
-            terminal.Out.Write(JudgementScreen.FaultsOf(judged.Faults, terminal.Ink));
+            terminal.Out.Write(JudgementScreen.FaultsOf(judged.Faults, isWritten: false, terminal.Ink));
             throw new RefusalException(
                 $"no reading is one of {judged.Limits.Specification}, whose limits these are; its points are {PointsOf(judged)}; nothing was written", ExitCode.Findings);
         }

@@ -22,12 +22,15 @@ internal static class JudgementScreen
         AppendCharacteristics(screen, judged, ink);
         AppendNotes(screen, judged, ink);
         AppendUnits(screen, judged, ink);
-        screen.Append(FaultsOf(judged.Faults, ink));
+        screen.Append(FaultsOf(judged.Faults, isWritten: true, ink));
         return screen.Append(Plain, $"{ink.Bold("Written")}   {ink.Blue(folder)}: {string.Join(", ", files)}\n\n").ToString();
     }
 
     /// <summary>Lines that took no part, by kind, with the first places; empty when there are none.</summary>
-    public static string FaultsOf(ReadingFaults faults, Ink ink)
+    /// <param name="faults">The lines.</param>
+    /// <param name="isWritten">Whether a judgement was written, which names more of them.</param>
+    /// <param name="ink">Colours.</param>
+    public static string FaultsOf(ReadingFaults faults, bool isWritten, Ink ink)
     {
         StringBuilder screen = new();
         foreach ((ReadingFault kind, long count, IReadOnlyList<FaultPlace> places) in faults.All)
@@ -36,7 +39,7 @@ internal static class JudgementScreen
             foreach (FaultPlace place in places.Take(5))
                 screen.Append(Plain, $"          {place.File}:{place.Line}: {(place.Text.Length == 0 ? "(empty)" : Printable(place.Text))}\n");
             if (count > 5)
-                screen.Append(Plain, $"          and {count - 5:N0} more; judgement.json names the first {ReadingFaults.PlacesNamed}\n");
+                screen.Append(Plain, $"          and {count - 5:N0} more{(isWritten ? $"; judgement.json names the first {ReadingFaults.PlacesNamed}" : "")}\n");
         }
 
         return screen.Length > 0 ? screen.Append('\n').ToString() : "";

@@ -96,6 +96,7 @@ public sealed class JudgeTests : IDisposable
         (int code, string output, string error) = desk.Run("judge", "limits.json", "lot.csv");
         Assert.Equal(2, code);
         Assert.StartsWith("6 lines of a point that is not in the limits\n          lot.csv:2: W1\n", output, StringComparison.Ordinal);
+        Assert.EndsWith("          and 1 more\n\n", output, StringComparison.Ordinal);
         Assert.Equal("bandspec: no reading is one of T-7-B, whose limits these are; its points are V1, V2, V3, V4, V5 and 1 more; nothing was written\n", error);
         Assert.False(Directory.Exists(desk.At("out")));
     }
