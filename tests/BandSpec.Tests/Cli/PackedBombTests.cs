@@ -51,6 +51,41 @@ public sealed class PackedBombTests : IDisposable
         Assert.Contains("16777216", Assert.Throws<IOException>(() => SpecificationFile.Attachments(pdf)).Message, StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData(19_990, "")]
+    [InlineData(1_000_000, "The PDF nests its objects more than 20000 deep.")]
+    public void Brackets_within_brackets_do_not_run_out_of_stack(int depth, string message)
+    {
+        byte[] pdf = WithNestedArray(depth);
+        if (message.Length == 0)
+            Assert.Empty(SpecificationFile.Attachments(pdf));
+        else
+            Assert.Equal(message, Assert.Throws<InvalidDataException>(() => SpecificationFile.Attachments(pdf)).Message);
+    }
+
+    private static byte[] WithNestedArray(int depth)
+    {
+        StringBuilder pdf = new("%PDF-1.7\n");
+        string[] objects =
+        [
+            "<</Type/Catalog/Pages 2 0 R/Deep 4 0 R>>", "<</Type/Pages/Kids[3 0 R]/Count 1>>", "<</Type/Page/Parent 2 0 R/MediaBox[0 0 9 9]>>",
+            new string('[', depth) + new string(']', depth),
+        ];
+        List<int> places = [];
+        foreach ((string body, int number) in objects.Select((body, i) => (body, i + 1)))
+        {
+            places.Add(pdf.Length);
+            pdf.Append(CultureInfo.InvariantCulture, $"{number} 0 obj\n{body}\nendobj\n");
+        }
+
+        int table = pdf.Length;
+        pdf.Append(CultureInfo.InvariantCulture, $"xref\n0 {objects.Length + 1}\n0000000000 65535 f \n");
+        foreach (int place in places)
+            pdf.Append(CultureInfo.InvariantCulture, $"{place:0000000000} 00000 n \n");
+        pdf.Append(CultureInfo.InvariantCulture, $"trailer\n<</Size {objects.Length + 1}/Root 1 0 R>>\nstartxref\n{table}\n%%EOF\n");
+        return Encoding.ASCII.GetBytes(pdf.ToString());
+    }
+
     private static byte[] WithObjectStream(byte[] packed, string filter) =>
     [
         .. "%PDF-1.7\n"u8,

@@ -19,10 +19,11 @@ internal static class PackedStreams
     /// <summary>Refuses a file that would unpack to more than <see cref="Largest"/> bytes.</summary>
     /// <param name="pdf">The file's bytes.</param>
     /// <exception cref="IOException">It unpacks to more.</exception>
-    /// <exception cref="InvalidDataException">It is packed in a way that this program does not use.</exception>
+    /// <exception cref="InvalidDataException">It is packed in a way that this program does not use, or nested deeper than <see cref="Nesting.Deepest"/>.</exception>
     public static void Check(byte[] pdf)
     {
         CheckPacking(WithoutEscapes(pdf));
+        new Nesting().Follow(pdf);
         long total = 0;
         for (int at = 0; Find(pdf, "stream"u8, ref at);)
         {
@@ -38,13 +39,14 @@ internal static class PackedStreams
         const int methodOfDeflate = 8, header = 2;
         if (begin + header >= pdf.Length || (pdf[begin] & 0xF) != methodOfDeflate) return 0;
         long length = 0;
+        Nesting nesting = new();
         byte[] buffer = ArrayPool<byte>.Shared.Rent(1 << 16);
         try
         {
             using var packed = new DeflateStream(new MemoryStream(pdf, begin + header, pdf.Length - begin - header), CompressionMode.Decompress);
-            for (int read; length <= most && (read = packed.Read(buffer)) > 0;) length += read;
+            for (int read; length <= most && (read = packed.Read(buffer)) > 0; length += read) nesting.Follow(buffer.AsSpan(0, read));
         }
-        catch (InvalidDataException)
+        catch (InvalidDataException) when (!nesting.IsTooDeep)
         {
             // Damaged, or not packed after all: as much as came out of it counts.
         }

@@ -1,4 +1,5 @@
 using System.IO.Compression;
+using System.Runtime.ExceptionServices;
 using PdfSharp.Pdf;
 using PdfSharp.Pdf.IO;
 
@@ -7,10 +8,36 @@ namespace BandSpec.Documents.Pdf.Sharp;
 /// <summary>Reads attached files with PDFsharp, from the list of associated files in the catalogue.</summary>
 internal static class SharpAttachments
 {
+    /// <summary>Room for a reader that calls itself at every level that <see cref="Nesting"/> lets through.</summary>
+    private const int Stack = 128 << 20;
+
     public static IReadOnlyList<DocumentFile> Read(ReadOnlyMemory<byte> pdf)
     {
         byte[] bytes = pdf.ToArray();
         PackedStreams.Check(bytes);
+        IReadOnlyList<DocumentFile> files = [];
+        ExceptionDispatchInfo? fault = null;
+        Thread reader = new(
+            () =>
+            {
+                try
+                {
+                    files = ReadFiles(bytes);
+                }
+                catch (Exception met)
+                {
+                    fault = ExceptionDispatchInfo.Capture(met);
+                }
+            },
+            Stack);
+        reader.Start();
+        reader.Join();
+        fault?.Throw();
+        return files;
+    }
+
+    private static IReadOnlyList<DocumentFile> ReadFiles(byte[] bytes)
+    {
         try
         {
             using var stream = new MemoryStream(bytes);
