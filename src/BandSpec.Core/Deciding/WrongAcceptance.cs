@@ -27,7 +27,6 @@ internal sealed class WrongAcceptance
     private readonly Lanes[] drawn;
     private readonly double[] numbers;
     private readonly double[] truths;
-    private readonly double[] readings;
 
     private WrongAcceptance(UnitLaw law, UnitEvents events, IReadOnlyList<VerificationPoint> points)
     {
@@ -41,7 +40,6 @@ internal sealed class WrongAcceptance
         numbers = new double[dimensions + 2 + (2 * places.Length)];
         drawn = new Lanes[numbers.Length];
         truths = new double[places.Length];
-        readings = new double[places.Length];
     }
 
     /// <summary>The risk under the limits of a set of verification points, none of them impossible.</summary>
@@ -61,8 +59,11 @@ internal sealed class WrongAcceptance
             for (; draws < until; draws += Vector512<double>.Count)
                 Add((ulong)draws, ref sum, ref squares);
             double mean = sum / draws, error = Math.Sqrt(Math.Max(0, (squares / draws) - (mean * mean)) / draws);
-            if (error <= RelativeError * mean || until == MostDraws)
+            if (mean > 0 && error <= RelativeError * mean)
                 return new(mean, error);
+            // No unit was accepted at all: what one draw would have weighed, about the total, tells how little that says.
+            if (until == MostDraws)
+                return new(mean, mean > 0 ? error : total / draws);
         }
     }
 
@@ -104,9 +105,8 @@ internal sealed class WrongAcceptance
         for (int v = 0; v < places.Length; v++)
         {
             truths[v] = v == chosen.Place ? truth : True(v);
-            readings[v] = truths[v] + Noise(places[v], v);
             // The chosen place was drawn to be accepted; its reading may miss its limit by rounding only.
-            if (v != chosen.Place && !places[v].Accepted.Contains(readings[v]))
+            if (v != chosen.Place && !places[v].Accepted.Contains(truths[v] + Noise(places[v], v)))
                 return 0;
         }
 

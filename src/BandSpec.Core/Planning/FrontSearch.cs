@@ -25,7 +25,7 @@ internal sealed class FrontSearch(PlanSearch search, IProgress<SearchProgress>? 
         return Walk(level =>
         {
             CutFor(toBeat);
-            TradeoffPoint? point = BestOf(level, m => new Heat(m, Above(toBeat), rmsFirst: false), everywhere => everywhere >= Above(toBeat));
+            TradeoffPoint? point = BestOf(level, m => new Heat(m, Contest.TieAbove(toBeat), rmsFirst: false), everywhere => everywhere >= Contest.TieAbove(toBeat));
             toBeat = point?.Margin ?? toBeat;
             return point;
         });
@@ -39,7 +39,7 @@ internal sealed class FrontSearch(PlanSearch search, IProgress<SearchProgress>? 
         double toBeat = double.PositiveInfinity;
         return Walk(level =>
         {
-            double most = toBeat * (1 - Tie);
+            double most = Contest.TieBelow(toBeat);
             TradeoffPoint? point = BestOf(
                 level, m => new Heat(m, 1, rmsFirst: true, most), everywhere => everywhere >= 1 - PlanChoosing.Shortfall);
             toBeat = point?.RmsError ?? toBeat;
@@ -67,10 +67,6 @@ internal sealed class FrontSearch(PlanSearch search, IProgress<SearchProgress>? 
 
         return new Front(points, completeTo, IsComplete: true);
     }
-
-    private const double Tie = 1e-9;
-
-    private static double Above(double margin) => double.IsInfinity(margin) ? margin : margin + (Tie * Math.Abs(margin));
 
     /// <summary>The best plan of a level that keeps what it was chosen for at every place; nothing when none does.</summary>
     private TradeoffPoint? BestOf(IReadOnlyList<PlanFamily> level, Func<MarginScore, Heat> heat, Func<double, bool> isEnough)
